@@ -1,0 +1,149 @@
+/** Everything that is computed of one channel, in SI units, levels in dB; the JSON result is this, with places added. Infinity is allowed where a value is unbounded. */
+import type { LimitKey } from '../spec/channel';
+
+/** Where an extreme is reached. */
+export interface Where {
+  readonly frequency: number;
+  /** Alias: where it lands after sampling. Image: the wanted frequency it copies. */
+  readonly lands?: number;
+  readonly source?: string;
+}
+
+/** Tolerance values at a worst case by label, e.g. { "pick-up guard, stage 2, corner": 0.04 }; relative deviations. */
+export type WorstAt = Readonly<Record<string, number>>;
+
+/** One limit, judged. */
+export interface LimitFigure {
+  readonly limit: LimitKey;
+  readonly ref: string | null;
+  readonly unit: 'dBFS' | 'dBc' | 'dB';
+  readonly sense: 'at-most' | 'at-least';
+  readonly at: number;
+  /** Worst case over all tolerances; null where it was not judged. */
+  readonly value: number | null;
+  readonly nominal: number | null;
+  /** Positive: inside the limit. */
+  readonly margin: number | null;
+  /** The gap between the proved bounds of `value`, in the same unit. */
+  readonly gap: number | null;
+  readonly judged: boolean;
+  readonly passes: boolean;
+  readonly where: Where | null;
+  readonly worstAt: WorstAt | null;
+}
+
+/** A wanted band and where it appears after sampling (capture) or leaves (generate). */
+export interface WantedFigure {
+  readonly name: string | null;
+  readonly low: number;
+  readonly high: number;
+  readonly level: number;
+  readonly appearsLow: number;
+  readonly appearsHigh: number;
+  readonly zone: number;
+  readonly inverted: boolean;
+}
+
+/** The strongest landing of one source in a protected range; frequency null where none lands. */
+export interface AliasFigure {
+  readonly source: string;
+  /** Index into the channel's `unwanted`. */
+  readonly index: number;
+  readonly frequency: number | null;
+  readonly lands: number | null;
+  readonly fold: number | null;
+  readonly inverted: boolean | null;
+  /** dBFS, worst case; null where none lands. */
+  readonly level: number | null;
+  readonly nominal: number | null;
+  /** dB against the wanted tone at `reference` as it comes out. */
+  readonly relative: number | null;
+  readonly limit: number | null;
+  readonly margin: number | null;
+  readonly gap: number | null;
+  readonly worstAt: WorstAt | null;
+}
+
+/** The strongest point of one copy and side. */
+export interface ImageFigure {
+  readonly copy: number;
+  readonly side: 'lower' | 'upper' | 'baseband';
+  readonly from: number;
+  readonly frequency: number;
+  readonly level: number;
+  readonly nominal: number;
+  readonly relative: number;
+  readonly limit: number | null;
+  readonly margin: number | null;
+  readonly gap: number;
+  readonly worstAt: WorstAt | null;
+}
+
+/** Noise in the wanted band as it comes out, dBFS; null where that part does not exist. */
+export interface NoiseFigures {
+  readonly quantisation: number | null;
+  readonly jitter: number | null;
+  readonly jitterUnwanted: number | null;
+  readonly sources: number | null;
+  readonly stages: number | null;
+  readonly thermal: number | null;
+  readonly converter: number | null;
+  readonly total: number | null;
+  /** V rms; null without full scale. */
+  readonly volts: number | null;
+}
+
+/** A fault in how a wanted band is sampled. */
+export interface SamplingFault {
+  readonly kind: 'wanted-folds' | 'wanted-touches';
+  /** Index into `wanted`. */
+  readonly index: number;
+  /** The other wanted band it falls onto, or null where it folds onto itself. */
+  readonly onto: number | null;
+  /** The multiple of half the rate that is crossed or touched, in Hz; null with `onto`. */
+  readonly edgeHz: number | null;
+}
+
+/** A stretch of a source that lies inside a wanted band: not an alias, reported once. */
+export interface Overlap {
+  /** Index into `unwanted`. */
+  readonly index: number;
+  readonly lowHz: number;
+  readonly highHz: number;
+}
+
+/** All figures of one channel. */
+export interface Figures {
+  readonly name: string;
+  readonly direction: 'capture' | 'generate';
+  readonly ref: string | null;
+  readonly rate: number;
+  readonly outputRate: number;
+  readonly halfRate: number;
+  readonly zone: number | null;
+  readonly inverted: boolean | null;
+  readonly reference: number;
+  readonly rateWindow: { readonly low: number; readonly high: number } | null;
+  readonly wanted: readonly WantedFigure[];
+  readonly protected: readonly { readonly low: number; readonly high: number }[];
+  readonly limits: readonly LimitFigure[];
+  readonly droop: number | null;
+  readonly delay: number | null;
+  readonly delaySpread: number | null;
+  readonly aliases: readonly AliasFigure[];
+  readonly alias: AliasFigure | null;
+  readonly aliasSum: number | null;
+  readonly images: readonly ImageFigure[];
+  readonly image: ImageFigure | null;
+  readonly noise: NoiseFigures;
+  readonly testTone: { readonly frequency: number; readonly level: number; readonly atSampler: number };
+  readonly snr: number | null;
+  readonly sinad: number | null;
+  readonly enob: number | null;
+  readonly enobFullScale: number | null;
+  readonly headroom: number | null;
+  readonly faults: readonly SamplingFault[];
+  readonly overlaps: readonly Overlap[];
+  /** Points and bounds evaluated by the searches, for tests. */
+  readonly evaluations: number;
+}
