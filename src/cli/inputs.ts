@@ -1,0 +1,52 @@
+/** Which specs a check reads, and their texts. */
+import type { InputFile } from '../output';
+import type { CheckCommand } from './arguments';
+import type { Host } from './host';
+import { UsageError } from './usage';
+
+/** One spec, read. */
+export interface InputText extends InputFile {
+  readonly text: string;
+}
+
+/**
+ * Reads every spec that the command names, in the order of its paths, each file once.
+ * @throws UsageError where a path leads nowhere, a folder holds no spec, or a file is not UTF-8
+ */
+export function readInputs(command: CheckCommand, host: Host): InputText[] {
+  if (command.paths[0] === '-') return [inputText(command.name ?? 'standard-input.bandkeep.yaml', host.readInput(), host)];
+  const root = host.resolve(command.root ?? '.');
+  const files = new Set(command.paths.flatMap((path) => filesAt(path, host)));
+  return [...files].map((file) => inputText(host.relative(root, file), readBytes(file, host), host));
+}
+
+function filesAt(path: string, host: Host): readonly string[] {
+  const full = host.resolve(path);
+  const kind = host.kindOf(full);
+  if (kind === 'file') return [full];
+  if (kind === null) throw new UsageError(`\`${path}\` is neither a file nor a folder that can be read.`);
+  const specs = host.specsBelow(full);
+  if (specs.length === 0) throw new UsageError(`There is no *.bandkeep.yaml below \`${path}\`.`);
+  return specs;
+}
+
+function readBytes(file: string, host: Host): Uint8Array {
+  try {
+    return host.readFile(file);
+  } catch (fault) {
+    throw new UsageError(`\`${file}\` cannot be read: ${fault instanceof Error ? fault.message : String(fault)}`);
+  }
+}
+
+function inputText(path: string, bytes: Uint8Array, host: Host): InputText {
+  return { path, sha256: host.sha256(bytes), text: decoded(path, bytes) };
+}
+
+/** UTF-8 without its byte order mark, which editors do not count as text either. */
+function decoded(path: string, bytes: Uint8Array): string {
+  try {
+    return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
+  } catch {
+    throw new UsageError(`\`${path}\` is not UTF-8 text.`);
+  }
+}

@@ -1,0 +1,36 @@
+/** The whole check of one spec: read, judge, and prove fixes for what is wrong; the command line and the library run it. */
+import { createFigureStore } from '../analysis';
+import { judging, type Finding } from '../findings';
+import type { CheckedFile } from '../output';
+import { curing, type Cure } from '../remedies';
+import { read } from '../spec';
+import { drain } from './drain';
+
+/** What a check may leave out. */
+export interface CheckOptions {
+  /** Whether fixes are searched for; the judgement is the same either way. */
+  readonly fixes: boolean;
+}
+
+/** Checks a text at once. `path` is what the result calls the file. */
+export function checkText(path: string, text: string, options: CheckOptions = { fixes: true }): CheckedFile {
+  return drain(checkingText(path, text, options));
+}
+
+/** The same check, yielding between steps so that a caller may stop it or share the thread. */
+export function* checkingText(path: string, text: string, options: CheckOptions): Generator<void, CheckedFile> {
+  const store = createFigureStore();
+  const judgement = yield* judging(read(text), store);
+  const cures = new Map<Finding, Cure>();
+  if (options.fixes) {
+    for (const finding of judgement.findings) {
+      if (isCurable(finding)) cures.set(finding, yield* curing(judgement, finding, store));
+    }
+  }
+  return { path, judgement, cures };
+}
+
+/** Faults of the text carry their own cures, and an accepted finding asks for none. */
+function isCurable(finding: Finding): boolean {
+  return finding.severity === 'error' && finding.accepted === null && 'place' in finding.at;
+}
