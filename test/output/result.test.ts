@@ -1,0 +1,77 @@
+/** The machine-readable result: every field of every channel is there, numbers are JSON, places are right. */
+import assert from 'node:assert/strict';
+import { checkText } from '../../src/library';
+import { toResult, type ResultFile } from '../../src/output';
+import { resultNumber } from '../../src/output/result-number';
+import { exampleText } from '../support/examples';
+
+function resultOf(text: string): ResultFile {
+  const file = checkText('gate.bandkeep.yaml', text);
+  return toResult([file], [{ path: file.path, sha256: '0'.repeat(64) }], '1.2.3');
+}
+
+const channelFields = [
+  'name direction ref passes rate outputRate halfRate zone inverted reference rateWindow wanted protected limits droop delay',
+  'delaySpread aliases alias aliasSum images image masks spurs noise testTone snr sinad enob enobFullScale headroom settling',
+  'crosstalk copyWeights parts',
+]
+  .join(' ')
+  .split(' ')
+  .sort();
+
+describe('the JSON result', () => {
+  const result = resultOf(exampleText('gate-bearing-broken'));
+  const [file] = result.files;
+
+  it('carries its own version and that of the tool', () => {
+    assert.equal(result.bandkeep, 1);
+    assert.equal(result.tool, '1.2.3');
+  });
+
+  it('has every field of a channel, also of one that is not whole', () => {
+    const faulty = resultOf('bandkeep: 1\nchannels:\n  a: { direction: capture }\n');
+    for (const channel of [file?.channels[0], faulty.files[0]?.channels[0]]) {
+      assert.deepEqual(Object.keys(channel ?? {}).sort(), channelFields);
+    }
+    assert.equal(faulty.files[0]?.channels[0]?.passes, null);
+    assert.equal(faulty.files[0]?.channels[0]?.rate, null);
+  });
+
+  it('names both violations at the values that they are about, with figures and proved fixes', () => {
+    const text = exampleText('gate-bearing-broken').split('\n');
+    const errors = file?.findings.filter((finding) => finding.severity === 'error') ?? [];
+    assert.deepEqual(errors.map((finding) => finding.code).sort(), ['alias-over-limit', 'flatness-over-limit']);
+    for (const finding of errors) {
+      assert.ok(finding.fixes.length > 0, `${finding.code} has no fix`);
+      assert.ok((finding.figures?.margin ?? 0) < 0);
+    }
+    const alias = errors.find((finding) => finding.code === 'alias-over-limit');
+    const { start, end } = alias?.range ?? assert.fail('no alias finding');
+    assert.equal(text[start.line]?.slice(start.character, end.character), '40 kHz .. 3 MHz');
+  });
+
+  it('survives JSON and says the same numbers twice', () => {
+    const again = resultOf(exampleText('gate-bearing-broken'));
+    assert.deepEqual(JSON.parse(JSON.stringify(result)), JSON.parse(JSON.stringify(again)));
+  });
+
+  it('gives each limit its own range in the text', () => {
+    const lines = exampleText('gate-bearing-broken').split('\n');
+    const limit = file?.channels[0]?.limits?.find((entry) => entry.limit === 'flatness');
+    const { start, end } = limit?.range ?? assert.fail('no flatness limit');
+    assert.equal(lines[start.line]?.slice(start.character, end.character), '0.8 dB');
+  });
+});
+
+describe('numbers of the result', () => {
+  it('write infinities as words and what cannot be computed as null', () => {
+    assert.deepEqual([Infinity, -Infinity, NaN, null, undefined, -96.5].map(resultNumber), [
+      'inf',
+      '-inf',
+      null,
+      null,
+      null,
+      -96.5,
+    ]);
+  });
+});
