@@ -3,10 +3,20 @@
 /** The kinds of quantity that a place in a spec may ask for. */
 export type Kind =
   | 'frequency'
+  /** A frequency that counts samples: Hz or S/s. */
+  | 'sample-rate'
   | 'time'
   | 'voltage'
+  /** A level against full scale, or one that full scale (and an impedance) turns into it: dBFS, volts, dBV, dBu, dBm. */
   | 'level'
+  /** dBFS alone. */
+  | 'full-scale-level'
+  /** dBc alone. */
+  | 'relative-level'
+  /** dB alone. */
+  | 'decibel'
   | 'ratio'
+  /** % or ppm alone. */
   | 'share'
   | 'density'
   | 'code'
