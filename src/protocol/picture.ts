@@ -120,12 +120,15 @@ export interface Points {
 /** How strongly something is inked: a pale fill for what was, a solid one for what is. */
 export type Tone = 'pale' | 'solid';
 
+/** How a curve is dashed: told apart without colour. */
+export type Stroke = 'solid' | 'dashed' | 'dotted' | 'dash-dot' | 'long-dash';
+
 /** The geometry of an item, in data units. */
 export type Shape =
   | {
       readonly kind: 'curve';
       readonly points: Points;
-      readonly stroke: 'solid' | 'dashed' | 'dotted';
+      readonly stroke: Stroke;
       readonly weight: 'thin' | 'bold';
     }
   /** Filled between two curves over the same x; `lower` null: down to the bottom of the pane. */

@@ -41,6 +41,24 @@ export interface PlaceAtParams {
 /** The innermost place at the cursor, or null. */
 export type PlaceAtResult = PlaceName | null;
 
+/** Test or benchmark → server: how much work the newest version of a spec was. */
+export const countsRequest = 'bandkeep/counts';
+
+/** Parameters of `bandkeep/counts`. */
+export interface CountsParams {
+  readonly uri: string;
+}
+
+/** The counts of the newest judged version, or null where the spec is not open. One edit is one slice and one channel. */
+export type CountsResult = {
+  readonly version: number;
+  readonly slices: number;
+  readonly slicesRead: number;
+  readonly channels: number;
+  readonly channelsResolved: number;
+  readonly channelsAnalysed: number;
+} | null;
+
 /** What the extension hands the server in `initializationOptions`. */
 export interface ServerOptions {
   /** URI of the folder that holds a page for every finding code; null: no links. */

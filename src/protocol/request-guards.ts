@@ -1,0 +1,54 @@
+/** Guards for the parameters of requests, standard and our own: the server puts them at its door. */
+import { isCount, isNullOr, isPlaceName, isRecord, isText } from './guards';
+import type { Position, Range } from './position';
+import type { CountsParams, LocateParams, PictureParams, PlaceAtParams } from './requests';
+
+/** A point in a text. */
+export function isPosition(value: unknown): value is Position {
+  return isRecord(value) && isCount(value['line']) && isCount(value['character']);
+}
+
+/** A stretch of a text. */
+export function isRange(value: unknown): value is Range {
+  return isRecord(value) && isPosition(value['start']) && isPosition(value['end']);
+}
+
+/** Parameters of a standard request about a document. */
+export function isAboutDocument(value: unknown): value is { textDocument: { uri: string } } {
+  return isRecord(value) && isRecord(value['textDocument']) && isText(value['textDocument']['uri']);
+}
+
+/** Parameters of a standard request about a position in a document. */
+export function isAboutPosition(value: unknown): value is { textDocument: { uri: string }; position: Position } {
+  return isRecord(value) && isAboutDocument(value) && isPosition(value['position']);
+}
+
+/** Parameters of `bandkeep/picture`. */
+export function isPictureParams(value: unknown): value is PictureParams {
+  return isRecord(value) && isText(value['uri']) && isNullOr(value['channel'], isText) && isNullOr(value['position'], isPosition);
+}
+
+/** Parameters of `bandkeep/locate`. */
+export function isLocateParams(value: unknown): value is LocateParams {
+  return isRecord(value) && isText(value['uri']) && isPlaceName(value['place']);
+}
+
+/** Parameters of `bandkeep/placeAt`. */
+export function isPlaceAtParams(value: unknown): value is PlaceAtParams {
+  return isRecord(value) && isText(value['uri']) && isPosition(value['position']);
+}
+
+/** Parameters of `bandkeep/counts`. */
+export function isCountsParams(value: unknown): value is CountsParams {
+  return isRecord(value) && isText(value['uri']);
+}
+
+/** Parameters of `textDocument/codeAction`. */
+export function isAboutRange(value: unknown): value is { textDocument: { uri: string }; range: Range } {
+  return isRecord(value) && isAboutDocument(value) && isRange(value['range']);
+}
+
+/** The server's options as the client may hand them over. */
+export function docsBaseOf(options: unknown): string | null {
+  return isRecord(options) && isText(options['docsBase']) ? options['docsBase'] : null;
+}
