@@ -1,12 +1,94 @@
 /** Responses made of responses: in series, turned over, and constant. */
-import type { Response } from './response';
+import type { Enclosure, Response } from './response';
 
+/**
+ * Responses in series: the gains multiply, their logarithms, bounds and slopes add.
+ *
+ * @param responses any number; none gives the constant 1, one is handed back as it is.
+ * @returns a slope of null where any part has none; bounds of (−∞, ∞) where a null meets a pole.
+ * Source: interval arithmetic, common practice.
+ * @example product([constantResponse(-1), constantResponse(0.25)]).logGain(100) // -0.75
+ */
 export function product(responses: readonly Response[]): Response {
-  throw new RangeError(`not yet ${String(responses.length)}`);
+  const [first] = responses;
+  if (first === undefined) return constantResponse(0);
+  return responses.length === 1 ? first : new Product(responses);
 }
+
+/**
+ * One over a response: its smallest gain becomes the largest.
+ *
+ * @param response any; its exact nulls become +Infinity.
+ * Source: elementary.
+ * @example inverse(constantResponse(-2)).logGain(100) // 2
+ */
 export function inverse(response: Response): Response {
-  throw new RangeError(`not yet ${String(response.logGain(0))}`);
+  return new Inverse(response);
 }
+
+/**
+ * The same gain at every frequency, 0 Hz and infinity included.
+ *
+ * @param logGain natural logarithm of the gain.
+ * Source: elementary.
+ * @example constantResponse(-0.5).bounds(0, Infinity).high // -0.5
+ */
 export function constantResponse(logGain: number): Response {
-  throw new RangeError(`not yet ${String(logGain)}`);
+  return { logGain: () => logGain, bounds: () => ({ low: logGain, high: logGain }), slope: () => ({ low: 0, high: 0 }), turnsHz: [] };
+}
+
+class Product implements Response {
+  constructor(private readonly parts: readonly Response[]) {}
+
+  logGain(frequencyHz: number): number {
+    let sum = 0;
+    for (const part of this.parts) sum += part.logGain(frequencyHz);
+    // A null in series with a pole of infinite gain has no value of its own; no gain at all is what a null leaves.
+    return Number.isNaN(sum) && !Number.isNaN(frequencyHz) ? -Infinity : sum;
+  }
+
+  bounds(lowHz: number, highHz: number): Enclosure {
+    let low = 0;
+    let high = 0;
+    for (const part of this.parts) {
+      const bounds = part.bounds(lowHz, highHz);
+      low += bounds.low;
+      high += bounds.high;
+    }
+    return { low: Number.isNaN(low) ? -Infinity : low, high: Number.isNaN(high) ? Infinity : high };
+  }
+
+  slope(lowHz: number, highHz: number): Enclosure | null {
+    let low = 0;
+    let high = 0;
+    for (const part of this.parts) {
+      const slope = part.slope(lowHz, highHz);
+      if (slope === null) return null;
+      low += slope.low;
+      high += slope.high;
+    }
+    return Number.isNaN(low) || Number.isNaN(high) ? null : { low, high };
+  }
+}
+
+class Inverse implements Response {
+  readonly turnsHz?: readonly number[];
+
+  constructor(private readonly inner: Response) {
+    if (inner.turnsHz !== undefined) this.turnsHz = inner.turnsHz;
+  }
+
+  logGain(frequencyHz: number): number {
+    return -this.inner.logGain(frequencyHz);
+  }
+
+  bounds(lowHz: number, highHz: number): Enclosure {
+    const { low, high } = this.inner.bounds(lowHz, highHz);
+    return { low: -high, high: -low };
+  }
+
+  slope(lowHz: number, highHz: number): Enclosure | null {
+    const slope = this.inner.slope(lowHz, highHz);
+    return slope === null ? null : { low: -slope.high, high: -slope.low };
+  }
 }

@@ -14,4 +14,6 @@ export interface Response {
   bounds(lowHz: number, highHz: number): Enclosure;
   /** An enclosure of d ln|H| / df in 1/Hz over a finite interval, or null where none is known (a null lies inside). */
   slope(lowHz: number, highHz: number): Enclosure | null;
+  /** Every frequency above 0 Hz where the gain turns between rising and falling, ascending, if all are known: it is monotone between them. */
+  readonly turnsHz?: readonly number[];
 }
