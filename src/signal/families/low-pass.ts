@@ -1,0 +1,19 @@
+/** What low-pass families share: the check of their arguments, and poles laid out by evenly spaced angles. */
+import type { Root } from '../sections';
+
+/** Throws unless the order is a whole number from 1 and the corner a finite frequency above 0. */
+export function checkFamily(order: number, cornerHz: number): void {
+  if (!Number.isInteger(order) || order < 1) throw new RangeError(`An order must be a whole number from 1, not ${order}.`);
+  if (!(cornerHz > 0) || !Number.isFinite(cornerHz)) throw new RangeError(`A corner must be a frequency above 0 Hz, not ${cornerHz}.`);
+}
+
+/** Poles at the angles π(2i + 1)/(2·order) from the imaginary axis: the upper half as `poleAt` places it, its mirror image, and the real one. */
+export function mirrored(order: number, poleAt: (angle: number) => Root): readonly Root[] {
+  const poles: Root[] = [];
+  for (let i = 0; 2 * i + 1 < order; i += 1) {
+    const pole = poleAt((Math.PI * (2 * i + 1)) / (2 * order));
+    poles.push(pole, { re: pole.re, im: -pole.im });
+  }
+  if (order % 2 === 1) poles.push({ re: poleAt(Math.PI / 2).re, im: 0 });
+  return poles;
+}
