@@ -1,0 +1,39 @@
+/** The examples that come with the extension, opened as untitled copies so that nobody breaks the originals. */
+import * as vscode from 'vscode';
+import { languageId } from './specs';
+
+/** An example to choose. */
+export interface Example {
+  readonly file: string;
+  readonly label: string;
+  readonly detail: string;
+}
+
+/** All examples; a test compares them with the folder. */
+export const examples: readonly Example[] = [
+  {
+    file: 'gate-bearing.bandkeep.yaml',
+    label: 'Sluice gate bearing',
+    detail: 'Capture: a vibration pick-up beside a noisy drive. Everything passes.',
+  },
+  {
+    file: 'gate-bearing-broken.bandkeep.yaml',
+    label: 'Sluice gate bearing, broken',
+    detail: 'The same with an alias and a flatness limit broken, to be cured by quick fixes.',
+  },
+  {
+    file: 'fish-sounder.bandkeep.yaml',
+    label: 'Fish sounder',
+    detail: 'Generate: a held output, its copies, and the filter that keeps them down.',
+  },
+];
+
+/** Lets the reader choose an example and opens a copy of it. */
+export async function openExample(extensionUri: vscode.Uri): Promise<void> {
+  const chosen = await vscode.window.showQuickPick(examples, { placeHolder: 'Which example?', matchOnDetail: true });
+  if (chosen === undefined) return;
+  const bytes = await vscode.workspace.fs.readFile(vscode.Uri.joinPath(extensionUri, 'examples', chosen.file));
+  const content = new TextDecoder().decode(bytes);
+  const document = await vscode.workspace.openTextDocument({ language: languageId, content });
+  await vscode.window.showTextDocument(document);
+}
