@@ -6,11 +6,12 @@ import type { RemedyKind } from '../findings/finding';
 export interface Fix {
   /** What it changes and the margin it leaves, e.g. "Raise the rate to 64 kHz (÷384): alias margin 4.6 dB". */
   readonly title: string;
-  readonly kind: RemedyKind;
+  /** The kind of change, or `two` where only two changes together work. */
+  readonly kind: RemedyKind | 'two';
   /** The margin of the cured limit after the change, in the limit's unit; null where the finding has no limit. */
   readonly margin: number | null;
   readonly edits: readonly Edit[];
-  /** Titles' tail for a new warning it brings, or null. */
+  /** What it leaves behind that was not there before (a new warning), as the title's tail says it; null for nothing. */
   readonly leaves: string | null;
 }
 

@@ -1,0 +1,86 @@
+/** `alias-over-limit`: a source lands in a protected range above the alias limit. */
+import type { AliasFigure, Figures, LimitFigure } from '../analysis/figures';
+import type { Channel, Source } from '../spec/channel';
+import type { Path } from '../spec/place';
+import { formatDb } from '../units/format';
+import { findingIn, limitAndFilter } from './build';
+import type { Finding } from './finding';
+import { frequencyWords } from './frequency-words';
+import type { FindingKind, Help, Subject } from './kind';
+import { brokenLimit, nominalPasses } from './limits';
+import { decimalsFor, limitWords, worstCaseWords } from './wording';
+
+const help: Help = {
+  summary: 'Something unwanted lands in a protected range above the alias limit.',
+  means: `Sampling at a rate fs makes every frequency f indistinguishable from |f − k·fs| for every whole k. A source of the list
+\`unwanted\` comes out inside a protected range, and after the filter and the aperture have had their say it is still stronger
+than \`limits.alias\` allows. The level is the largest over the whole source, over every fold up to infinity and over all
+tolerances; it is proved, not sampled. There is one finding for each source that breaks the limit.`,
+  matters: `Nothing behind the sampler can tell the landed tone from a real one. It looks like a bearing fault, a tide, a word: it is
+in the data for good.`,
+  cure: `Keep it out before the sampler: a higher order or a lower corner takes more of it away, a higher rate moves the frequency that
+lands there further out, where the filter already helps. Each quick fix has been tried on the whole file. Where the source can
+be weakened or moved instead, state what will really arrive. Where the limit is stricter than the job needs, change the limit.`,
+  example: {
+    spec: `bandkeep: 1
+channels:
+  gate-bearing:
+    direction: capture
+    wanted: { band: 5 Hz .. 10 kHz, level: -3 dBFS }
+    unwanted: { name: drive hash, band: 40 kHz .. 3 MHz, level: -55 dBFS }
+    rate: 51.2 kHz
+    filter: { family: butterworth, order: 4, corner: 14 kHz }
+    limits: { alias: -96 dBFS }
+`,
+    from: 'order: 4',
+    to: 'order: 5',
+  },
+};
+
+/** The finding code `alias-over-limit`. */
+export const aliasOverLimit: FindingKind = {
+  code: 'alias-over-limit',
+  severity: 'error',
+  group: 'sampling',
+  help,
+  remedies: ['rate', 'corner', 'order'],
+  check: (subject) => {
+    const limit = brokenLimit(subject.figures, 'alias');
+    if (limit === null) return [];
+    return subject.figures.aliases.filter((alias) => (alias.margin ?? 0) < 0).map((alias) => over(subject, limit, alias));
+  },
+};
+
+/** Where the frequency of a source stands. */
+export function sourcePath(channel: Channel, index: number): Path {
+  const kind: Source['kind'] = channel.unwanted[index]?.kind ?? 'anything';
+  return kind === 'anything' ? ['unwanted', index] : ['unwanted', index, kind];
+}
+
+/** "`drive hash` at 41.2 kHz lands on 10 kHz at −91.2 dBFS". */
+export function landingWords(figures: Figures, alias: AliasFigure, value: string): string {
+  const from = alias.frequency === null ? '' : ` at ${frequencyWords(figures, alias.frequency)}`;
+  const onto =
+    Number.isFinite(alias.frequency) && alias.lands !== null ? frequencyWords(figures, alias.lands) : 'the protected range';
+  return `\`${alias.source}\`${from} lands on ${onto} at ${value}`;
+}
+
+function over({ channel, figures }: Subject, limit: LimitFigure, alias: AliasFigure): Finding {
+  const strongest = limit.where?.source === alias.source;
+  const value = limit.unit === 'dBc' ? alias.relative : alias.level;
+  const nominal = strongest ? limit.nominal : limit.unit === 'dBc' ? null : alias.nominal;
+  const margin = alias.margin ?? 0;
+  const decimals = decimalsFor('alias', margin);
+  const worst = { worstAt: alias.worstAt, nominal, nominalPasses: nominalPasses(limit, nominal), decimals };
+  const landing = landingWords(figures, alias, formatDb(value ?? -Infinity, limit.unit, decimals));
+  return findingIn(channel, {
+    code: 'alias-over-limit',
+    severity: 'error',
+    message: `${landing}, ${formatDb(-margin, 'dB', decimals)} over the alias limit of ${limitWords(limit)}${worstCaseWords(worst)}.`,
+    path: sourcePath(channel, alias.index),
+    ref: limit.ref ?? channel.unwanted[alias.index]?.ref ?? null,
+    related: limitAndFilter(channel, limit),
+    figures: { value, nominal, limit: limit.at, margin, frequency: alias.frequency, lands: alias.lands, source: alias.source },
+    limit: 'alias',
+  });
+}

@@ -1,0 +1,35 @@
+/** How checks look at limits: the figure of one, its place in the spec, whether its nominal value would pass. */
+import type { Figures, LimitFigure } from '../analysis/figures';
+import type { Channel, LimitKey } from '../spec/channel';
+import type { Place } from '../spec/place';
+
+/** The figure of a limit that was asked for and judged, or null. */
+export function judgedLimit(figures: Figures, key: LimitKey): LimitFigure | null {
+  return figures.limits.find((figure) => figure.limit === key && figure.judged) ?? null;
+}
+
+/** The figure of a limit that was judged and is broken, or null. */
+export function brokenLimit(figures: Figures, key: LimitKey): LimitFigure | null {
+  const figure = judgedLimit(figures, key);
+  return figure === null || figure.passes ? null : figure;
+}
+
+/** Where a limit's quantity stands, in short form and in long form. */
+export function limitPlace(channel: Channel, key: LimitKey): Place {
+  return { channel: channel.name, path: ['limits', key, 'at'] };
+}
+
+/** Whether the limit would hold at nominal values. */
+export function nominalPasses(figure: LimitFigure, nominal: number | null): boolean {
+  if (nominal === null) return false;
+  return figure.sense === 'at-most' ? nominal <= figure.at : nominal >= figure.at;
+}
+
+/** The margin below which a limit that holds is called thin: its own, or 1 dB for levels and ratios, or a tenth of the limit. */
+export function thinBelow(channel: Channel, figure: LimitFigure): number {
+  const own = channel.limits.find((limit) => limit.key === figure.limit)?.margin ?? null;
+  if (own !== null) return own;
+  return inDecibels.has(figure.limit) ? 1 : Math.abs(figure.at) / 10;
+}
+
+const inDecibels: ReadonlySet<LimitKey> = new Set<LimitKey>(['alias', 'image', 'snr', 'headroom']);

@@ -1,0 +1,48 @@
+/** Phrases that several findings share: amounts with their unit, and what was reached at the worst case. */
+import type { LimitFigure, WorstAt } from '../analysis/figures';
+import { formatDb, formatSignedPercent, plainNumber } from '../units/format';
+
+/** Digits behind the point that a limit's figures are printed with, more where the margin would round to nothing. */
+export function decimalsFor(limit: string, margin: number): number {
+  const usual = limit === 'flatness' ? 2 : 1;
+  const needed = [1, 2, 3].find((decimals) => Math.abs(margin) >= 0.5 * 10 ** -decimals) ?? 3;
+  return Math.max(usual, needed);
+}
+
+/** A limit as the spec states it: "−96 dBFS". */
+export function limitWords(figure: Pick<LimitFigure, 'at' | 'unit'>): string {
+  return formatDb(figure.at, figure.unit, 3);
+}
+
+/** The tolerances at a worst case: "corner +4 %", with the part's name where more than one varies; null where none does. */
+export function worstWords(worstAt: WorstAt | null): string | null {
+  const entries = Object.entries(worstAt ?? {}).filter(([, deviation]) => deviation !== 0);
+  const only = entries.length === 1;
+  const words = entries
+    .slice(0, 3)
+    .map(([label, deviation]) => `${only ? lastPart(label) : label} ${formatSignedPercent(deviation)}`);
+  const more = entries.length - words.length;
+  if (words.length === 0) return null;
+  return words.join('; ') + (more > 0 ? ` and ${more} more` : '');
+}
+
+/** What a parenthesis about the worst case needs to know. */
+export interface WorstCase {
+  readonly worstAt: WorstAt | null;
+  readonly nominal: number | null;
+  /** Whether the limit would hold without tolerances. */
+  readonly nominalPasses: boolean;
+  readonly decimals: number;
+}
+
+/** " (worst case, corner +4 %; nominal −92.6)", or nothing where no tolerance is at work. */
+export function worstCaseWords({ worstAt, nominal, nominalPasses, decimals }: WorstCase): string {
+  const worst = worstWords(worstAt);
+  if (worst === null) return '';
+  const plain = nominal === null ? '' : `; nominal ${plainNumber(nominal, decimals)}${nominalPasses ? ', which would pass' : ''}`;
+  return ` (worst case, ${worst}${plain})`;
+}
+
+function lastPart(label: string): string {
+  return label.slice(label.lastIndexOf(',') + 1).trim();
+}

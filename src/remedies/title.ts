@@ -1,0 +1,61 @@
+/** Titles of fixes: what changes, the margin it leaves, and what else it moves. */
+import type { Figures, LimitFigure } from '../analysis';
+import { decimalsFor, type Finding } from '../findings';
+import { formatDb } from '../units/format';
+import { changesWords } from './change';
+import type { Fix } from './fix';
+import { ownMargin, type Session } from './session';
+import type { Trial } from './trial';
+
+/** The fix that a trial has proved. */
+export function fixOf(session: Session, trial: Trial): Fix {
+  const { finding } = session;
+  const margin = finding.limit === null ? null : ownMargin(finding, trial.figures);
+  const leaves = leavesWords(trial);
+  const effect = effectWords(session, trial.figures);
+  const title = `${changesWords(trial.changes)}${effect === '' ? '' : `: ${effect}`}${leaves === null ? '' : `; ${leaves}`}`;
+  const [first] = trial.changes;
+  const kind = trial.changes.length > 1 || first === undefined ? 'two' : first.kind;
+  return { title, kind, margin, edits: trial.changes.flatMap((change) => change.edits), leaves };
+}
+
+/** "alias margin 4.2 dB, flatness 0.22 dB": the margin that was asked for, then the limits that the change has moved. */
+function effectWords({ finding, figures }: Session, after: Figures | null): string {
+  const limits = (after?.limits ?? []).filter((figure) => figure.judged && figure.margin !== null);
+  const own = limits.find((figure) => figure.limit === finding.limit) ?? (finding.limit === null ? tightest(limits) : undefined);
+  const moved = limits.filter((figure) => figure !== own && isMoved(figure, figures));
+  return [...(own === undefined ? [] : [marginWords(own)]), ...moved.map(valueWords)].join(', ');
+}
+
+function tightest(limits: readonly LimitFigure[]): LimitFigure | undefined {
+  return [...limits].sort((a, b) => (a.margin ?? 0) - (b.margin ?? 0))[0];
+}
+
+/** Flatness is worth a word when it moves either way, any other limit when it has lost a noticeable part. */
+function isMoved(figure: LimitFigure, before: Figures): boolean {
+  const was = before.limits.find(({ limit }) => limit === figure.limit)?.margin ?? null;
+  if (was === null || figure.margin === null) return false;
+  const gained = figure.margin - was;
+  return figure.limit === 'flatness' ? Math.abs(gained) >= 0.005 : gained <= -0.05;
+}
+
+function marginWords({ limit, margin }: LimitFigure): string {
+  return `${limit} margin ${formatDb(margin ?? 0, 'dB', decimalsFor(limit, margin ?? 0))}`;
+}
+
+function valueWords({ limit, value, unit, margin }: LimitFigure): string {
+  return `${limit} ${formatDb(value ?? 0, unit, decimalsFor(limit, margin ?? 0))}`;
+}
+
+/** What a change leaves behind that was not there before, or null. */
+function leavesWords({ newWarnings, worsened }: Trial): string | null {
+  const warnings = newWarnings.map((finding) => `\`${finding.code}\`${aboutWords(finding)}`);
+  const worse = [...new Set(worsened.map((finding) => `${finding.limit ?? finding.code} even further from its limit`))];
+  const all = [...new Set(warnings), ...worse];
+  return all.length === 0 ? null : `leaves ${all.join(', ')}`;
+}
+
+function aboutWords({ limit, channel }: Finding): string {
+  if (limit !== null) return ` (${limit}${channel === null ? '' : ` of \`${channel}\``})`;
+  return channel === null ? '' : ` (\`${channel}\`)`;
+}

@@ -1,0 +1,70 @@
+/** What a changed text comes to: read whole, judged whole, and held against the judgement before the change. */
+import type { Figures } from '../analysis';
+import { counts, judging, type Finding, type Judgement, type Store } from '../findings';
+import { read } from '../spec';
+import type { Change } from './change';
+
+/** One set of changes, tried on the whole file. */
+export interface Trial {
+  readonly changes: readonly Change[];
+  /** The channel's figures after the changes; null where it is no longer whole. */
+  readonly figures: Figures | null;
+  /** Findings of the code that the changes should have cleared. */
+  readonly remaining: readonly Finding[];
+  /** Errors anywhere in the file that were not there before. */
+  readonly newErrors: readonly Finding[];
+  /** Warnings anywhere in the file that were not there before. */
+  readonly newWarnings: readonly Finding[];
+  /** Errors that were there before, with a margin that has become smaller. */
+  readonly worsened: readonly Finding[];
+}
+
+/** Whether the changes clear the finding's code in its channel and add no error anywhere. */
+export function works(trial: Trial): boolean {
+  return trial.figures !== null && trial.remaining.length === 0 && trial.newErrors.length === 0;
+}
+
+/** Whether they do so and leave nothing behind that was not there before. */
+export function worksCleanly(trial: Trial): boolean {
+  return works(trial) && trial.newWarnings.length === 0 && trial.worsened.length === 0;
+}
+
+/** Reads and judges the changed text, with the same store, so that only changed channels are analysed. */
+export function* trying(
+  before: Judgement,
+  finding: Finding,
+  changed: { readonly changes: readonly Change[]; readonly text: string },
+  store: Store,
+): Generator<void, Trial> {
+  const after = yield* judging(read(changed.text, before.reading), store);
+  const known = new Map(before.findings.map((old) => [identity(old), old]));
+  const fresh = after.findings.filter((found) => found.accepted === null && !known.has(identity(found)));
+  return {
+    changes: changed.changes,
+    figures: after.channels.find((channel) => channel.entry.name === finding.channel)?.figures ?? null,
+    remaining: after.findings.filter((found) => isSameTarget(found, finding)),
+    newErrors: fresh.filter((found) => found.severity === 'error'),
+    newWarnings: fresh.filter((found) => found.severity === 'warning'),
+    worsened: after.findings.filter((found) => counts(found) && isWorse(found, known.get(identity(found)))),
+  };
+}
+
+/** What makes a finding of the changed text the same as one before. Spans move, so a finding that has only a span is known by its words. */
+function identity(finding: Finding): string {
+  const where = 'place' in finding.at ? [finding.at.place.path, finding.figures?.source] : finding.message;
+  return JSON.stringify([finding.code, finding.channel, finding.limit, where]);
+}
+
+/** Of the same code in the same channel; a thin margin is thin for one limit. */
+function isSameTarget(found: Finding, finding: Finding): boolean {
+  return found.code === finding.code && found.channel === finding.channel && found.limit === finding.limit;
+}
+
+/** Differences below this are rounding, or a proof's own gap. */
+const noticeableDb = 0.01;
+
+function isWorse(found: Finding, old: Finding | undefined): boolean {
+  const was = old?.figures?.margin ?? null;
+  const is = found.figures?.margin ?? null;
+  return was !== null && is !== null && is < was - noticeableDb;
+}
