@@ -1,0 +1,94 @@
+/** Hovers: the answer for the innermost place under the cursor, then what the declaration says of its key. */
+import type { Hover, Position } from 'vscode-languageserver-types';
+import { placeAt, type DefinedName, type Path, type PlaceAt } from '../spec';
+import type { ClientAbilities } from './client-abilities';
+import { writeHover, type Answer } from './hovers/answer';
+import { channelHover } from './hovers/channel';
+import { bitsHover, jitterHover } from './hovers/converter';
+import { keyProse } from './hovers/key-prose';
+import { levelHover } from './hovers/level';
+import { limitHover } from './hovers/limit';
+import { nameHover } from './hovers/name';
+import { pulseHover } from './hovers/pulse';
+import { rateHover } from './hovers/rate';
+import { sourceHover } from './hovers/source';
+import { stageHover } from './hovers/stage';
+import type { Subject } from './hovers/subject';
+import { wantedHover } from './hovers/wanted';
+import type { SpecDocument } from './spec-document';
+import { offsetOf, rangeOf } from './text-range';
+
+/** The hover at a position, or null where nothing stands there. */
+export function hover(document: SpecDocument, position: Position, abilities: ClientAbilities): Hover | null {
+  const { reading } = document;
+  const at = placeAt(reading, offsetOf(reading, position));
+  if (at === null) return null;
+  const answer = answerAt(document, at);
+  const prose = at.about === null || (answer !== null && at.part === 'value') ? null : keyProse(keyName(at), at.about);
+  if (answer === null && prose === null) return null;
+  const value = writeHover(answer, prose, abilities.markdown);
+  return { contents: { kind: abilities.markdown ? 'markdown' : 'plaintext', value }, range: rangeOf(reading, at.span) };
+}
+
+function keyName({ place: { path } }: PlaceAt): string | null {
+  const last = path.at(-1);
+  return typeof last === 'string' ? last : null;
+}
+
+/** What has been computed of the place: in a channel, of a name, or in a definition as its first whole user sees it. */
+function answerAt(document: SpecDocument, { place, part }: PlaceAt): Answer | null {
+  if (place.channel !== null) return answerIn(document, place.channel, place.path);
+  const [space, name, ...rest] = place.path;
+  const defined = document.reading.names.find((entry) => entry.space === space && entry.name === name);
+  if (defined === undefined) return null;
+  if (rest.length === 0 && part === 'key') return nameHover(document, defined);
+  return answerForUser(document, defined, rest) ?? (rest.length === 0 ? nameHover(document, defined) : null);
+}
+
+function answerForUser(document: SpecDocument, defined: DefinedName, rest: Path): Answer | null {
+  const whole = document.judgement.channels.find(({ entry, figures }) => figures !== null && defined.users.includes(entry.name));
+  if (whole === undefined) return null;
+  if (defined.space === 'filters') return answerIn(document, whole.entry.name, ['filter', ...rest]);
+  return rest[0] === 'jitter' ? answerIn(document, whole.entry.name, ['jitter']) : null;
+}
+
+function answerIn(document: SpecDocument, name: string, path: Path): Answer | null {
+  const judged = document.judgement.channels.find(({ entry }) => entry.name === name);
+  const channel = judged?.entry.channel ?? null;
+  const figures = judged?.figures ?? null;
+  return channel === null || figures === null ? null : answerOf({ document, channel, figures, path });
+}
+
+function answerOf(subject: Subject): Answer | null {
+  const [head] = subject.path;
+  if (head === undefined) return channelHover(subject);
+  if (isLevel(subject.path)) return levelHover(subject);
+  switch (head) {
+    case 'wanted':
+      return wantedHover(subject);
+    case 'unwanted':
+      return sourceHover(subject);
+    case 'rate':
+    case 'rate-choices':
+      return rateHover(subject);
+    case 'aperture':
+    case 'hold':
+      return pulseHover(subject);
+    case 'filter':
+      return stageHover(subject);
+    case 'limits':
+      return subject.path.length === 1 ? channelHover(subject) : limitHover(subject);
+    case 'bits':
+    case 'full-scale':
+      return bitsHover(subject);
+    case 'jitter':
+      return jitterHover(subject);
+    default:
+      return null;
+  }
+}
+
+function isLevel(path: Path): boolean {
+  const last = path.at(-1);
+  return last === 'level' && path.length > 1 && path[0] !== 'limits';
+}

@@ -1,0 +1,23 @@
+/** Hover of a channel's name: whether it passes, and each limit's margin. */
+import type { LimitFigure } from '../../analysis';
+import { formatDb, formatFrequency } from '../../units';
+import type { Answer, Row } from './answer';
+import type { Subject } from './subject';
+import { marginWords } from './words';
+
+/** The channel as a whole. */
+export function channelHover({ document, channel, figures }: Subject): Answer {
+  const judged = document.judgement.channels.find(({ entry }) => entry.channel === channel);
+  const verdict = judged?.passes === true ? 'passes' : 'does not pass';
+  return {
+    headline: `\`${channel.name}\` ${verdict}: ${figures.direction} at ${formatFrequency(figures.rate)}`,
+    rows: figures.limits.map(limitRow),
+    formula: null,
+  };
+}
+
+function limitRow(limit: LimitFigure): Row {
+  if (limit.value === null || limit.margin === null) return [limit.limit, 'not judged'];
+  const decimals = limit.limit === 'flatness' ? 2 : 1;
+  return [limit.limit, `${formatDb(limit.value, limit.unit, decimals)}, ${marginWords(limit.margin, decimals)}`];
+}

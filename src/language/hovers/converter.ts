@@ -1,0 +1,62 @@
+/** Hovers of bits, full scale and jitter: the size of a step, and the noise that follows. */
+import { formatDb, formatTime, formatVoltage } from '../../units';
+import { knownRows, type Answer } from './answer';
+import type { Subject } from './subject';
+
+/** dB for each bit of a full-scale sine over its quantisation noise, and the constant: 20·log10 2 and 10·log10 1.5. */
+const perBitDb = 20 * Math.log10(2);
+const sineOverStepDb = 10 * Math.log10(1.5);
+
+/** The converter's step and quantisation noise, or null where bits are not known. */
+export function bitsHover({ channel, figures }: Subject): Answer | null {
+  const { bits, fullScaleVpp } = channel;
+  if (bits === null) return fullScaleVpp === null ? null : fullScaleAnswer(fullScaleVpp);
+  const snrDb = perBitDb * bits + sineOverStepDb;
+  const densityDb = -snrDb - 10 * Math.log10(figures.halfRate);
+  const step = fullScaleVpp === null ? null : fullScaleVpp / 2 ** bits;
+  return {
+    headline: step === null ? `${bits} bits: ${formatDb(snrDb)} for a full-scale sine` : `One LSB is ${formatVoltage(step)}`,
+    rows: knownRows(
+      ['full scale', fullScaleVpp === null ? null : formatVoltage(fullScaleVpp, 'V pp')],
+      ['full-scale sine to noise', formatDb(snrDb)],
+      ['density up to half the rate', formatDb(densityDb, 'dBFS/√Hz')],
+      ['in the wanted band', figures.noise.quantisation === null ? null : formatDb(figures.noise.quantisation, 'dBFS')],
+      ['share of all noise', shareOf(figures.noise.quantisation, figures.noise.total)],
+    ),
+    formula: 'Quantisation noise: 6.02·N + 1.76 dB below a full-scale sine, spread evenly up to half the rate',
+  };
+}
+
+function fullScaleAnswer(fullScaleVpp: number): Answer {
+  const rms = fullScaleVpp / (2 * Math.SQRT2);
+  return {
+    headline: `0 dBFS is ${formatVoltage(rms, 'V rms')}`,
+    rows: [['full scale', formatVoltage(fullScaleVpp, 'V pp')]],
+    formula: null,
+  };
+}
+
+/** The jitter of sampler and clock together, and what it does to the test tone. */
+export function jitterHover({ channel, figures }: Subject): Answer | null {
+  const own = channel.jitterSeconds;
+  const clock = channel.rate.clock?.jitterSeconds ?? 0;
+  const both = Math.hypot(own, clock);
+  if (both === 0) return { headline: 'No jitter', rows: [], formula: null };
+  const { frequency } = figures.testTone;
+  const toneDb = -20 * Math.log10(2 * Math.PI * frequency * both);
+  return {
+    headline: `${formatTime(both)} rms in all: ${formatDb(toneDb)} signal to jitter noise`,
+    rows: knownRows(
+      ['of the sampler', formatTime(own)],
+      ['of the clock', formatTime(clock)],
+      ['in the wanted band', figures.noise.jitter === null ? null : formatDb(figures.noise.jitter, 'dBFS')],
+      ['share of all noise', shareOf(figures.noise.jitter, figures.noise.total)],
+    ),
+    formula: 'Noise of jitter: 20·log10(2π·f·σ) below a tone at f',
+  };
+}
+
+function shareOf(partDb: number | null, totalDb: number | null): string | null {
+  if (partDb === null || totalDb === null || !Number.isFinite(totalDb)) return null;
+  return `${Math.round(100 * 10 ** ((partDb - totalDb) / 10))} %`;
+}

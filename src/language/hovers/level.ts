@@ -1,0 +1,46 @@
+/** Hover of a level: the same level in every unit that the channel knows enough for. */
+import type { Channel, Path } from '../../spec';
+import { formatDb, formatVoltage } from '../../units';
+import { knownRows, type Answer, type Row } from './answer';
+import { indexIn, type Subject } from './subject';
+
+/** A sine's peak-to-peak value over its rms value. */
+const peakToPeakOverRms = 2 * Math.SQRT2;
+/** The reference of dBm. */
+const milliwatt = 1e-3;
+
+/** The level at the subject's path, or null where none stands there. */
+export function levelHover({ channel, path }: Subject): Answer | null {
+  const levelDb = levelAt(channel, path);
+  if (levelDb === null) return null;
+  return {
+    headline: formatDb(levelDb, 'dBFS'),
+    rows: levelRows(channel, levelDb),
+    formula: '0 dBFS is the sine whose peaks just reach full scale',
+  };
+}
+
+/** A level in dBFS in all other units that are known. */
+export function levelRows({ fullScaleVpp, impedanceOhm, bits }: Channel, levelDb: number): Row[] {
+  const ratio = 10 ** (levelDb / 20);
+  const rms = fullScaleVpp === null ? null : (fullScaleVpp * ratio) / peakToPeakOverRms;
+  return knownRows(
+    ['V rms', rms === null ? null : formatVoltage(rms, 'V rms')],
+    ['V pp', rms === null ? null : formatVoltage(rms * peakToPeakOverRms, 'V pp')],
+    ['dBm', rms === null || impedanceOhm === null ? null : formatDb(10 * Math.log10(rms ** 2 / impedanceOhm / milliwatt), 'dBm')],
+    ['LSB, peak to peak', bits === null ? null : (2 ** bits * ratio).toPrecision(4)],
+  );
+}
+
+function levelAt(channel: Channel, path: Path): number | null {
+  switch (path[0]) {
+    case 'wanted':
+      return channel.wanted[indexIn(path)]?.levelDb ?? null;
+    case 'unwanted':
+      return channel.unwanted[indexIn(path)]?.levelDb ?? null;
+    case 'test-tone':
+      return channel.testTone.levelDb;
+    default:
+      return null;
+  }
+}

@@ -1,0 +1,92 @@
+/** Hover of a limit: how it stands, and what contributes, strongest first. */
+import type { Figures, LimitFigure, NoiseFigures } from '../../analysis';
+import { formatDb, formatSignedPercent } from '../../units';
+import { knownRows, type Answer, type Row } from './answer';
+import { levelRows } from './level';
+import type { Subject } from './subject';
+import { frequencyOr, marginWords } from './words';
+
+/** How many contributions are listed. */
+const listed = 5;
+
+/** The limit at the subject's path, or null where there is none. */
+export function limitHover({ channel, figures, path }: Subject): Answer | null {
+  const limit = figures.limits.find((figure) => figure.limit === path[1]);
+  if (limit === undefined) return null;
+  return {
+    headline: headlineOf(limit),
+    rows: [
+      ...standingRows(limit),
+      ...contributions(limit, figures),
+      ...(limit.unit === 'dBFS' ? levelRows(channel, limit.at).map(([unit, value]): Row => [`the limit in ${unit}`, value]) : []),
+    ],
+    formula: formulas[limit.limit],
+  };
+}
+
+const formulas: Readonly<Record<LimitFigure['limit'], string>> = {
+  alias: 'Proved maximum over every source and every fold up to infinity',
+  image: 'Proved maximum over every copy up to infinity',
+  flatness: 'Largest |20·log10(G(f)/G(reference))| in the wanted band, proved',
+  snr: 'Test tone over the sum of the noise powers in the wanted band',
+  headroom: 'Full scale over the sum of all peak amplitudes',
+};
+
+function headlineOf(limit: LimitFigure): string {
+  if (limit.value === null || limit.margin === null)
+    return `\`${limit.limit}\` is not judged: nothing in this channel can break it`;
+  return `\`${limit.limit}\` ${level(limit, limit.value)}, ${marginWords(limit.margin, decimalsOf(limit))}`;
+}
+
+function standingRows(limit: LimitFigure): Row[] {
+  const worst = Object.entries(limit.worstAt ?? {}).map(([label, deviation]) => `${label} ${formatSignedPercent(deviation)}`);
+  return knownRows(
+    ['limit', level(limit, limit.at)],
+    ['nominal', limit.nominal === null ? null : level(limit, limit.nominal)],
+    ['reached at', limit.where === null ? null : frequencyOr(limit.where.frequency, '')],
+    ['worst case at', worst.length === 0 ? null : worst.join(', ')],
+  );
+}
+
+function decimalsOf(limit: LimitFigure): number {
+  return limit.limit === 'flatness' ? 2 : 1;
+}
+
+function level(limit: LimitFigure, value: number): string {
+  return formatDb(value, limit.unit, decimalsOf(limit));
+}
+
+function contributions(limit: LimitFigure, figures: Figures): Row[] {
+  switch (limit.limit) {
+    case 'alias':
+      return strongest(figures.aliases.map(({ source, level: value }) => [`\`${source}\``, value]));
+    case 'image':
+      return strongest(figures.images.map(({ copy, side, level: value }) => [`copy ${copy}, ${side}`, value]));
+    case 'snr':
+      return strongest(noiseParts(figures.noise));
+    case 'flatness':
+    case 'headroom':
+      return [];
+  }
+}
+
+/** The parts of the noise that exist, dBFS. */
+function noiseParts(noise: NoiseFigures): (readonly [label: string, valueDb: number | null])[] {
+  return [
+    ['quantisation', noise.quantisation],
+    ['jitter', noise.jitter],
+    ['jitter on unwanted sources', noise.jitterUnwanted],
+    ['noise sources', noise.sources],
+    ['stages', noise.stages],
+    ['thermal', noise.thermal],
+    ['converter', noise.converter],
+  ];
+}
+
+function strongest(parts: readonly (readonly [label: string, valueDb: number | null])[]): Row[] {
+  return parts
+    .flatMap(([label, valueDb]) => (valueDb === null ? [] : [{ label, valueDb }]))
+    .sort((a, b) => b.valueDb - a.valueDb)
+    .slice(0, listed)
+    .map(({ label, valueDb }) => [label, formatDb(valueDb, 'dBFS')]);
+}

@@ -1,0 +1,59 @@
+/** Hover of a rate: what it makes of the wanted band, how much room it has, and which other allowed rates pass. */
+import type { Figures } from '../../analysis';
+import { formatFrequency } from '../../units';
+import { knownRows, type Answer, type Row } from './answer';
+import { passingRates } from './passing-rates';
+import type { Subject } from './subject';
+import { turnWords } from './words';
+
+/** The channel's rate. */
+export function rateHover({ channel, figures }: Subject): Answer {
+  const zone = figures.zone === null ? '' : `, the wanted band in zone ${figures.zone}`;
+  const { clock } = channel.rate;
+  return {
+    headline: `${formatFrequency(figures.rate)}: half rate ${formatFrequency(figures.halfRate)}${zone}`,
+    rows: [
+      ...knownRows(
+        ['from', clock === null ? null : clockWords(clock)],
+        ['comes out', figures.inverted === null ? null : turnWords(figures.inverted)],
+        [figures.direction === 'capture' ? 'data rate' : 'output rate', formatFrequency(figures.outputRate)],
+      ),
+      ...copyRows(figures),
+      ...windowRows(figures),
+      ...passingRows(passingRates(channel)),
+    ],
+    formula: 'A band stays whole in zone n while 2·high/n ≤ fs ≤ 2·low/(n − 1)',
+  };
+}
+
+function clockWords(clock: { name: string; frequencyHz: number; multiply: number; divide: number }): string {
+  const times = clock.multiply === 1 ? '' : ` ×${clock.multiply}`;
+  return `\`${clock.name}\`, ${formatFrequency(clock.frequencyHz)}${times} ÷${clock.divide}`;
+}
+
+/** Where the first copies of the wanted band leave. */
+function copyRows({ direction, rate, wanted }: Figures): Row[] {
+  const [band] = wanted;
+  if (direction === 'capture' || band === undefined || band.zone !== 1) return [];
+  const low = `${formatFrequency(rate - band.high)} .. ${formatFrequency(rate - band.low)}`;
+  return [['first copies', `${low} and ${formatFrequency(rate + band.low)} .. ${formatFrequency(rate + band.high)}`]];
+}
+
+/** The rates that keep the band whole in this zone, with the room to each side. */
+function windowRows({ rate, rateWindow }: Figures): Row[] {
+  if (rateWindow === null) return [];
+  const { low, high } = rateWindow;
+  const open = !Number.isFinite(high);
+  const room = (hz: number): string =>
+    `${formatFrequency(Math.abs(hz))} (${Math.round((Math.abs(hz) / rate) * 1e6).toLocaleString('en-US')} ppm)`;
+  return knownRows(
+    ['keeps the band whole', open ? `${formatFrequency(low)} and more` : `${formatFrequency(low)} .. ${formatFrequency(high)}`],
+    ['room below', room(rate - low)],
+    ['room above', open ? null : room(high - rate)],
+  );
+}
+
+function passingRows(rates: readonly number[] | null): Row[] {
+  if (rates === null) return [];
+  return [['next allowed rates that pass', rates.length === 0 ? 'none' : rates.map((hz) => formatFrequency(hz)).join(', ')]];
+}

@@ -1,0 +1,16 @@
+/** The server's entry on Node: speaks over standard streams (`--stdio`) or to its parent process (`--node-ipc`). */
+import { setImmediate } from 'node:timers';
+import { createConnection } from 'vscode-languageserver/node';
+import { startServer } from './start-server';
+
+const usage = 'Usage: bandkeep language-server --stdio | --node-ipc\n';
+
+if (process.argv.some((argument) => /^--(stdio|node-ipc|socket|pipe)\b/.test(argument))) {
+  startServer(createConnection(), {
+    now: () => performance.now(),
+    yieldControl: () => new Promise((resolve) => setImmediate(resolve)),
+  });
+} else {
+  process.stderr.write(usage);
+  process.exitCode = 2;
+}

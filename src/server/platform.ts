@@ -1,0 +1,9 @@
+/** What the server needs from the machine it runs on; each entry hands in its own. */
+
+/** A clock and a way to let waiting messages through. */
+export interface Platform {
+  /** Milliseconds, never running backwards. */
+  now(): number;
+  /** Settles after the messages that are waiting have had their turn. No timer, no delay. */
+  yieldControl(): Promise<void>;
+}

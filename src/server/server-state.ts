@@ -1,0 +1,11 @@
+/** What the parts of one running server share. */
+import type { ClientProfile } from './client-profile';
+import type { OpenSpecs } from './open-specs';
+import type { Proofs } from './proofs';
+
+/** One server's state; `profile` is the plain client's until `initialize` has come. */
+export interface ServerState {
+  profile: ClientProfile;
+  readonly specs: OpenSpecs;
+  readonly proofs: Proofs;
+}
