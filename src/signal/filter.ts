@@ -110,7 +110,9 @@ class FilterResponse implements Response {
     const below = this.turnsHz.filter((turn) => turn <= lowHz).length;
     if (below < this.turnsHz.filter((turn) => turn < highHz).length) return slope;
     const falling = (this.turnsHz.length - below) % 2 === 0;
-    return falling ? { low: Math.min(slope.low, 0), high: Math.min(slope.high, 0) } : { low: Math.max(slope.low, 0), high: Math.max(slope.high, 0) };
+    return falling
+      ? { low: Math.min(slope.low, 0), high: Math.min(slope.high, 0) }
+      : { low: Math.max(slope.low, 0), high: Math.max(slope.high, 0) };
   }
 }
 

@@ -34,7 +34,12 @@ export function inverse(response: Response): Response {
  * @example constantResponse(-0.5).bounds(0, Infinity).high // -0.5
  */
 export function constantResponse(logGain: number): Response {
-  return { logGain: () => logGain, bounds: () => ({ low: logGain, high: logGain }), slope: () => ({ low: 0, high: 0 }), turnsHz: [] };
+  return {
+    logGain: () => logGain,
+    bounds: () => ({ low: logGain, high: logGain }),
+    slope: () => ({ low: 0, high: 0 }),
+    turnsHz: [],
+  };
 }
 
 class Product implements Response {

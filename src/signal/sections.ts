@@ -54,25 +54,28 @@ export class Sections {
     return { low: least, high: most };
   }
 
-  /** An enclosure of the logarithm's derivative in u over a finite interval: the sum of each factor's exact range. */
+  /**
+   * An enclosure of the logarithm's derivative in u over a finite interval: the sum of each factor's exact range, met with the mean-value
+   * form, which is the tighter one where factors cancel, as they do in a ripple.
+   */
   slopeRange(low: number, high: number): Enclosure {
+    const middle = 0.5 * (low + high);
     let least = 0;
     let most = 0;
+    let atMiddle = 0;
+    let leastBend = 0;
+    let mostBend = 0;
     for (const section of this.sections) {
-      if (section.pair) {
-        const sharpness = Math.sqrt(section.width);
-        const fromLow = low - section.centre;
-        const fromHigh = high - section.centre;
-        const atLow = pairSlope(fromLow, section.width);
-        const atHigh = pairSlope(fromHigh, section.width);
-        most += fromLow < sharpness && sharpness < fromHigh ? 1 / sharpness : Math.max(atLow, atHigh);
-        least += fromLow < -sharpness && -sharpness < fromHigh ? -1 / sharpness : Math.min(atLow, atHigh);
-      } else {
-        most += 1 / (low + section.width);
-        least += 1 / (high + section.width);
-      }
+      const slopes = section.pair ? pairSlopes(section, low, high) : realSlopes(section, low, high);
+      const bends = section.pair ? pairBends(section, low, high) : realBends(section, low, high);
+      least += slopes.low;
+      most += slopes.high;
+      leastBend += bends.low;
+      mostBend += bends.high;
+      atMiddle += section.pair ? pairSlope(middle - section.centre, section.width) : 1 / (middle + section.width);
     }
-    return { low: least, high: most };
+    const reach = 0.5 * (high - low) * Math.max(Math.abs(leastBend), Math.abs(mostBend));
+    return { low: Math.max(least, atMiddle - reach), high: Math.min(most, atMiddle + reach) };
   }
 }
 
@@ -90,7 +93,48 @@ function valueAt(section: Section, u: number): number {
   return (offset * offset + section.width) / section.scale;
 }
 
-/** d/du of ln((u − centre)² + width), with extremes ±1/√width at u − centre = ±√width. */
+/** d/du of ln((u − centre)² + width). */
 function pairSlope(offset: number, width: number): number {
   return (2 * offset) / (offset * offset + width);
+}
+
+/** Its range: extremes ±1/√width stand at u − centre = ±√width. */
+function pairSlopes({ centre, width }: Section, low: number, high: number): Enclosure {
+  const turn = Math.sqrt(width);
+  const from = low - centre;
+  const to = high - centre;
+  const atLow = pairSlope(from, width);
+  const atHigh = pairSlope(to, width);
+  return {
+    low: from < -turn && -turn < to ? -1 / turn : Math.min(atLow, atHigh),
+    high: from < turn && turn < to ? 1 / turn : Math.max(atLow, atHigh),
+  };
+}
+
+function realSlopes({ width }: Section, low: number, high: number): Enclosure {
+  return { low: 1 / (high + width), high: 1 / (low + width) };
+}
+
+/** d²/du² of ln((u − centre)² + width). */
+function pairBend(offset: number, width: number): number {
+  const sum = offset * offset + width;
+  return (2 * (width - offset * offset)) / (sum * sum);
+}
+
+/** Its range: 2/width at the centre, −1/(4·width) at u − centre = ±√(3·width). */
+function pairBends({ centre, width }: Section, low: number, high: number): Enclosure {
+  const turn = Math.sqrt(3 * width);
+  const from = low - centre;
+  const to = high - centre;
+  const atLow = pairBend(from, width);
+  const atHigh = pairBend(to, width);
+  const turns = (from < turn && turn < to) || (from < -turn && -turn < to);
+  return {
+    low: turns ? -1 / (4 * width) : Math.min(atLow, atHigh),
+    high: from < 0 && 0 < to ? 2 / width : Math.max(atLow, atHigh),
+  };
+}
+
+function realBends({ width }: Section, low: number, high: number): Enclosure {
+  return { low: -1 / (low + width) ** 2, high: -1 / (high + width) ** 2 };
 }

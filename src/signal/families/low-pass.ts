@@ -4,7 +4,8 @@ import type { Root } from '../sections';
 /** Throws unless the order is a whole number from 1 and the corner a finite frequency above 0. */
 export function checkFamily(order: number, cornerHz: number): void {
   if (!Number.isInteger(order) || order < 1) throw new RangeError(`An order must be a whole number from 1, not ${order}.`);
-  if (!(cornerHz > 0) || !Number.isFinite(cornerHz)) throw new RangeError(`A corner must be a frequency above 0 Hz, not ${cornerHz}.`);
+  if (!(cornerHz > 0) || !Number.isFinite(cornerHz))
+    throw new RangeError(`A corner must be a frequency above 0 Hz, not ${cornerHz}.`);
 }
 
 /** Poles at the angles π(2i + 1)/(2·order) from the imaginary axis: the upper half as `poleAt` places it, its mirror image, and the real one. */

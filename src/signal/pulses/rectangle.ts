@@ -42,7 +42,9 @@ class RectangleResponse implements Response {
     const lobe = Math.floor(low);
     if (low > farLobes) return { low: -Infinity, high: -Math.log(Math.PI * low) + logSlack };
     const within = high <= lobe + 1;
-    const most = within ? lobeMaximum(lobe, low, high) : Math.max(lobeMaximum(lobe, low, lobe + 1), lobeMaximum(lobe + 1, lobe + 1, high));
+    const most = within
+      ? lobeMaximum(lobe, low, high)
+      : Math.max(lobeMaximum(lobe, low, lobe + 1), lobeMaximum(lobe + 1, lobe + 1, high));
     const least = within ? Math.min(logSinc(low), logSinc(high)) : -Infinity;
     return { low: least - logSlack, high: most + logSlack };
   }

@@ -62,7 +62,7 @@ function betweenLines(ends: Ends, slope: Enclosure): { readonly upper: number; r
   const offset = (ends.atHigh - ends.atLow - slope.low * width) / (slope.high - slope.low);
   const upper = ends.atLow + slope.high * offset;
   if (!Number.isFinite(upper)) return null;
-  return { upper, meetHz: ends.lowHz + Math.min(Math.max(offset, 0.5 * width), 0.5 * width) };
+  return { upper, meetHz: ends.lowHz + Math.min(Math.max(offset, 0.3 * width), 0.7 * width) };
 }
 
 /** Halfway; by the geometric mean over more than four octaves, with 1e−9 Hz and 1e15 Hz as the ends of every scale. */

@@ -22,7 +22,8 @@ export function largestOverBands(response: Response, bands: readonly Enclosure[]
   const frontier = new Frontier(toNepers(options.gapDb));
   const curve = curveOf(response);
   for (const band of bands) {
-    if (!(band.low >= 0 && band.low <= band.high)) throw new RangeError(`A band must run upwards from 0 Hz, not ${band.low} .. ${band.high}.`);
+    if (!(band.low >= 0 && band.low <= band.high))
+      throw new RangeError(`A band must run upwards from 0 Hz, not ${band.low} .. ${band.high}.`);
     if (response.turnsHz === undefined) openInterval(frontier, curve, band.low, band.high);
     else noteTurns(frontier, curve, response.turnsHz, band);
   }

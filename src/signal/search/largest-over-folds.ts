@@ -73,7 +73,9 @@ class Curves implements LadderCurves {
   curve(rung: number): Curve {
     const { inner, outer, rateHz } = this.question;
     const tag = this.tag(rung);
-    return inner === null ? plainCurve(outer, tag) : new PairedCurve(tag, outer, inner, innerAxis(rung, rateHz.low), this.ladder.band);
+    return inner === null
+      ? plainCurve(outer, tag)
+      : new PairedCurve(tag, outer, inner, innerAxis(rung, rateHz.low), this.ladder.band);
   }
 
   noteInfinity(frontier: Frontier): void {
