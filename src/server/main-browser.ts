@@ -2,9 +2,13 @@
 import { BrowserMessageReader, BrowserMessageWriter, createConnection } from 'vscode-languageserver/browser';
 import { startServer } from './start-server';
 
+/** Set by the bundler from package.json. */
+declare const BANDKEEP_VERSION: string;
+
 const turns = new MessageChannel();
 
 startServer(createConnection(new BrowserMessageReader(self), new BrowserMessageWriter(self)), {
+  version: BANDKEEP_VERSION,
   now: () => performance.now(),
   yieldControl: () =>
     new Promise((resolve) => {

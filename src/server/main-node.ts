@@ -3,10 +3,14 @@ import { setImmediate } from 'node:timers';
 import { createConnection } from 'vscode-languageserver/node';
 import { startServer } from './start-server';
 
+/** Set by the bundler from package.json. */
+declare const BANDKEEP_VERSION: string;
+
 const usage = 'Usage: bandkeep language-server --stdio | --node-ipc\n';
 
 if (process.argv.some((argument) => /^--(stdio|node-ipc|socket|pipe)\b/.test(argument))) {
   startServer(createConnection(), {
+    version: BANDKEEP_VERSION,
     now: () => performance.now(),
     yieldControl: () => new Promise((resolve) => setImmediate(resolve)),
   });

@@ -28,7 +28,7 @@ export function startServer(connection: Connection, platform: Platform): void {
   connection.onInitialize((params) => {
     state.profile = profileOf(params);
     if (state.profile.pullsDiagnostics) answerPulls(connection, state);
-    return whatWeOffer(state.profile);
+    return whatWeOffer(state.profile, platform.version);
   });
   keepDocuments(connection, state, report);
   answerEditor(connection, state);
@@ -36,9 +36,9 @@ export function startServer(connection: Connection, platform: Platform): void {
   connection.listen();
 }
 
-function whatWeOffer(profile: ClientProfile): InitializeResult {
+function whatWeOffer(profile: ClientProfile, version: string): InitializeResult {
   return {
-    serverInfo: { name: 'bandkeep' },
+    serverInfo: { name: 'bandkeep', version },
     capabilities: {
       positionEncoding: PositionEncodingKind.UTF16,
       textDocumentSync: { openClose: true, change: TextDocumentSyncKind.Incremental },
