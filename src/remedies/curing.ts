@@ -1,0 +1,76 @@
+/** The search for changes that cure a finding: single changes first, cheapest kind first, then two at once. */
+import { remediesOf, type Finding, type Judgement, type Store } from '../findings';
+import { formatDb, formatFrequency } from '../units/format';
+import { cornerSearch, type CornerBound, type CornerOutcome } from './corner';
+import type { Blocked, Cure, Fix } from './fix';
+import { orderTrial } from './order';
+import { rateTrials } from './rate';
+import { beginSession, type Session } from './session';
+import { familyStages } from './stages';
+import { fixOf } from './title';
+import type { Trial } from './trial';
+import { pairTrials } from './two-at-once';
+
+/** How many fixes are offered for one finding. */
+const mostFixes = 5;
+
+/** Searches for the fixes of a finding at once. */
+export function cure(judgement: Judgement, finding: Finding, store: Store): Cure {
+  const steps = curing(judgement, finding, store);
+  let step = steps.next();
+  while (step.done !== true) step = steps.next();
+  return step.value;
+}
+
+/** Searches for the fixes of a finding, in steps of one trial each. */
+export function* curing(judgement: Judgement, finding: Finding, store: Store): Generator<void, Cure> {
+  const kinds = new Set<string>(remediesOf(finding.code));
+  const session = kinds.size === 0 ? null : beginSession(judgement, finding, store);
+  if (session === null) return { fixes: [], blockedBy: null, note: null, analyses: 0 };
+  const corners = kinds.has('corner') ? yield* cornerOutcomes(session) : [];
+  const singles = [
+    ...(kinds.has('rate') ? yield* rateTrials(session) : []),
+    ...corners.flatMap(({ trial }) => (trial === null ? [] : [trial])),
+    ...(kinds.has('order') ? yield* orderTrials(session) : []),
+  ];
+  const trials = singles.length > 0 ? singles : yield* pairTrials(session, kinds);
+  const fixes = inOrder(trials.map((trial) => fixOf(session, trial)));
+  const blockedBy = fixes.length > 0 ? null : session.nearest;
+  return { fixes, blockedBy, note: noteOf(corners, blockedBy), analyses: session.analyses };
+}
+
+function* cornerOutcomes(session: Session): Generator<void, readonly CornerOutcome[]> {
+  const outcomes: CornerOutcome[] = [];
+  for (const stage of familyStages(session.channel)) outcomes.push(yield* cornerSearch(session, stage));
+  return outcomes;
+}
+
+function* orderTrials(session: Session): Generator<void, readonly Trial[]> {
+  const trials: (Trial | null)[] = [];
+  for (const stage of familyStages(session.channel)) trials.push(yield* orderTrial(session, stage));
+  return trials.filter((trial) => trial !== null);
+}
+
+/** Each kind in its place, but those that leave something behind last; the sort keeps the order of equals. */
+function inOrder(fixes: readonly Fix[]): readonly Fix[] {
+  return [...fixes].sort((a, b) => Number(a.leaves !== null) - Number(b.leaves !== null)).slice(0, mostFixes);
+}
+
+/** Why a corner alone does not do it, and, where nothing does, what comes nearest. */
+function noteOf(corners: readonly CornerOutcome[], blockedBy: Blocked | null): string | null {
+  const conflicts = corners.some(({ trial }) => trial !== null) ? [] : corners.flatMap(({ conflict }) => conflict ?? []);
+  const [conflict] = conflicts;
+  const corner =
+    conflict === undefined ? [] : [`No corner alone does it: ${boundWords(conflict.own)}, ${boundWords(conflict.other)}.`];
+  const nearest = blockedBy === null ? [] : [blockedWords(blockedBy)];
+  const words = [...corner, ...nearest].join(' ');
+  return words === '' ? null : words;
+}
+
+function boundWords({ limit, hz, sense }: CornerBound): string {
+  return `the ${limit} limit asks for ${formatFrequency(hz)} ${sense}`;
+}
+
+function blockedWords({ limit, misses, candidate }: Blocked): string {
+  return `Nothing simple works. What comes nearest (${candidate}) misses the ${limit} limit by ${formatDb(misses, 'dB', 2)}.`;
+}

@@ -1,0 +1,85 @@
+/** The change of a channel's rate: the next allowed one that works, and the lowest. */
+import { sameRate } from '../findings';
+import { editValue, spanOf, type ClockShare, type Edit, type Place } from '../spec';
+import { formatFrequency } from '../units/format';
+import type { Change } from './change';
+import { firstThatWorks, type AttemptAt } from './first-that-works';
+import { rewriteFrequency } from './quantity-text';
+import { rateOptions, type RateOption, type RateOptions } from './rate-options';
+import type { Session } from './session';
+import { works, worksCleanly, type Trial } from './trial';
+
+/** Proved changes of the rate, on top of changes that are made anyway; the next higher rate first, then the lowest. */
+export function* rateTrials(session: Session, base: readonly Change[] = []): Generator<void, readonly Trial[]> {
+  for (const options of rateOptions(session.channel)) {
+    const next = yield* upwards(session, options, base);
+    const lowest = base.length > 0 && next.length > 0 ? [] : yield* downwards(session, options, base);
+    if (next.length + lowest.length > 0) return [...next, ...lowest];
+  }
+  return [];
+}
+
+/** The change to one rate, or null where the spec's form of a rate cannot say it. */
+export function rateChange(session: Session, option: RateOption): Change | null {
+  const { rate } = session.channel;
+  const share = rate.clock === null ? null : shareFor(rate.clock, option);
+  if (rate.clock !== null && share === null) return null;
+  const edits = share === null ? [plainEdit(session, option.hz)] : shareEdits(session, share);
+  const verb = option.hz > rate.hz ? 'Raise' : 'Lower';
+  const divided = share === null ? '' : ` (÷${share.divide})`;
+  const made = edits.filter((edit) => edit !== null);
+  if (made.length < edits.length) return null;
+  return { kind: 'rate', says: `${verb} the rate to ${formatFrequency(option.hz)}${divided}`, edits: made };
+}
+
+type Share = Pick<ClockShare, 'multiply' | 'divide'>;
+
+/** The whole numbers that give a rate from the clock that the channel names, or null. */
+function shareFor(clock: ClockShare, option: RateOption): Share | null {
+  const multiply = option.clock?.multiply ?? clock.multiply;
+  const divide = (clock.frequencyHz * multiply) / option.hz;
+  const whole = Math.round(divide);
+  return whole >= 1 && sameRate(divide, whole) ? { multiply, divide: whole } : null;
+}
+
+function plainEdit({ reading, channel }: Session, hz: number): Edit | null {
+  const place: Place = { channel: channel.name, path: ['rate'] };
+  const { start, end } = spanOf(reading, place);
+  return editValue(reading, place, rewriteFrequency(reading.text.slice(start, end), channel.rate.hz, hz));
+}
+
+function shareEdits({ reading, channel }: Session, share: Share): readonly (Edit | null)[] {
+  const keys = (['multiply', 'divide'] as const).filter((key) => share[key] !== channel.rate.clock?.[key]);
+  return keys.map((key) => editValue(reading, { channel: channel.name, path: ['rate', key] }, String(share[key])));
+}
+
+/** The first rate above that works without a new warning; where each rate has been chosen by somebody, also the first that works at all. */
+function* upwards(session: Session, { above, chosen }: RateOptions, base: readonly Change[]): Generator<void, readonly Trial[]> {
+  const attemptAt = attempting(session, above, base);
+  const first = yield* firstThatWorks(above.length, attemptAt, works);
+  if (first === null || worksCleanly(first.trial)) return first === null ? [] : [first.trial];
+  const clean = yield* firstThatWorks(above.length, attemptAt, worksCleanly, first.index + 1);
+  if (clean === null) return [first.trial];
+  return chosen ? [first.trial, clean.trial] : [clean.trial];
+}
+
+/** How many lower rates are looked at, from the lowest up. */
+const lowerRates = 24;
+
+/** The lowest rate below that works without a new warning, of a few spread evenly where there are many. */
+function* downwards(session: Session, { below }: RateOptions, base: readonly Change[]): Generator<void, readonly Trial[]> {
+  const stride = Math.max(1, Math.ceil(below.length / lowerRates));
+  const attemptAt = attempting(session, below, base);
+  for (let index = 0; index < below.length; index += stride) {
+    const trial = yield* attemptAt(index);
+    if (trial !== null && worksCleanly(trial)) return [trial];
+  }
+  return [];
+}
+
+function attempting(session: Session, options: readonly RateOption[], base: readonly Change[]): AttemptAt {
+  return function* (index) {
+    const option = options[index];
+    return option === undefined ? null : yield* session.attempt([...base, rateChange(session, option)]);
+  };
+}

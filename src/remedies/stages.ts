@@ -1,0 +1,43 @@
+/** The stages of a channel whose order and corner a designer chooses, and what titles call them. */
+import type { Channel, Stage, StageForm } from '../spec';
+
+/** The forms that have an order and a corner to choose. */
+export type FamilyForm = Extract<StageForm, { order: number }>;
+
+/** A stage that a fix may change. */
+export interface FamilyStage {
+  readonly index: number;
+  readonly form: FamilyForm;
+  /** "`pick-up guard`", "`pick-up guard`, stage 2", "the filter". */
+  readonly words: string;
+}
+
+/** The family stages of a channel, in the order of the path. An amplifier's bandwidth or an RC's parts are not for a fix to choose. */
+export function familyStages(channel: Channel): readonly FamilyStage[] {
+  const found = channel.stages.flatMap((stage, index) => {
+    const form = familyForm(stage);
+    return form === null ? [] : [{ index, form, stage }];
+  });
+  return found.map(({ index, form, stage }) => ({
+    index,
+    form,
+    words: stageWords(
+      stage,
+      found.map((other) => other.stage),
+    ),
+  }));
+}
+
+function familyForm({ form }: Stage): FamilyForm | null {
+  return form.kind === 'butterworth' || form.kind === 'chebyshev' ? form : null;
+}
+
+/** The shortest name that tells the stage from the others that a fix could mean. */
+function stageWords(stage: Stage, family: readonly Stage[]): string {
+  if (stage.name !== null) return `\`${stage.name}\``;
+  const comma = stage.label.lastIndexOf(', stage ');
+  const filter = comma < 0 ? null : stage.label.slice(0, comma);
+  if (filter === null) return family.length === 1 ? 'the filter' : stage.label;
+  const alone = family.filter((other) => other.name === null && other.label.startsWith(`${filter}, stage `)).length === 1;
+  return alone ? `\`${filter}\`` : `\`${filter}\`${stage.label.slice(comma)}`;
+}
