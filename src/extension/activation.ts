@@ -17,6 +17,8 @@ export type MakeClient = (options: LanguageClientOptions) => BaseLanguageClient;
 export interface BandkeepApi {
   /** Fires when the panel has painted a picture. */
   readonly onDidDraw: vscode.Event<Drawn>;
+  /** Fires with the reason when there is no picture of the newest text. */
+  readonly onDidGoStale: vscode.Event<string>;
   /** Why the panel's picture is not of the newest text; null where it is. */
   staleReason(): string | null;
 }
@@ -40,5 +42,5 @@ export function start(context: vscode.ExtensionContext, makeClient: MakeClient):
   link.start().catch((error: unknown) => {
     log.error(`The language server did not start: ${String(error)}`);
   });
-  return { onDidDraw: panel.onDidDraw, staleReason: () => panel.staleReason };
+  return { onDidDraw: panel.onDidDraw, onDidGoStale: panel.onDidGoStale, staleReason: () => panel.staleReason };
 }

@@ -22,6 +22,9 @@ export class PanelHost implements vscode.Disposable {
   private readonly painted = new vscode.EventEmitter<Drawn>();
   /** Fires when the page has painted a picture. */
   readonly onDidDraw = this.painted.event;
+  private readonly wentStale = new vscode.EventEmitter<string>();
+  /** Fires with the reason when there is no picture of the newest text. */
+  readonly onDidGoStale = this.wentStale.event;
   /** Draws the newest text; asks that come while it is busy become one more. */
   readonly redraw = coalesced(() => this.draw());
   /** Lights the item of the cursor's line, and draws the channel that the cursor has entered. */
@@ -68,6 +71,7 @@ export class PanelHost implements vscode.Disposable {
   dispose(): void {
     this.page?.close();
     this.painted.dispose();
+    this.wentStale.dispose();
   }
 
   private events(): PageEvents {
@@ -134,6 +138,7 @@ export class PanelHost implements vscode.Disposable {
     if (subject !== this.subject) return;
     if (typeof result === 'string') {
       this.page.say(this.newest.none(subject, result));
+      this.wentStale.fire(result);
       return;
     }
     subject.shown = result.channel;

@@ -1,0 +1,13 @@
+// `npm run package`: builds afresh and packs what the allow-list lets in as bandkeep-VERSION.vsix.
+import { rmSync } from 'node:fs';
+import { join } from 'node:path';
+import { buildBundles, installPackages, requireNode, root } from './prepare-clone.mjs';
+import { runNode } from './run-command.mjs';
+
+requireNode();
+await installPackages();
+rmSync(join(root, 'dist'), { recursive: true, force: true });
+await buildBundles();
+const vsce = join(root, 'node_modules', '@vscode', 'vsce', 'vsce');
+const { code } = await runNode([vsce, 'package', '--no-dependencies', '--skip-license', ...process.argv.slice(2)], { cwd: root });
+process.exitCode = code;
