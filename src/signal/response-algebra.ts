@@ -1,4 +1,5 @@
 /** Responses made of responses: in series, turned over, and constant. */
+import { negated, plus, unlessNaN } from './interval-arithmetic';
 import type { Enclosure, Response } from './response';
 
 /**
@@ -60,19 +61,16 @@ class Product implements Response {
       low += bounds.low;
       high += bounds.high;
     }
-    return { low: Number.isNaN(low) ? -Infinity : low, high: Number.isNaN(high) ? Infinity : high };
+    return { low: unlessNaN(low, -Infinity), high: unlessNaN(high, Infinity) };
   }
 
   slope(lowHz: number, highHz: number): Enclosure | null {
-    let low = 0;
-    let high = 0;
+    let sum: Enclosure | null = { low: 0, high: 0 };
     for (const part of this.parts) {
-      const slope = part.slope(lowHz, highHz);
-      if (slope === null) return null;
-      low += slope.low;
-      high += slope.high;
+      sum = plus(sum, part.slope(lowHz, highHz));
+      if (sum === null) return null;
     }
-    return Number.isNaN(low) || Number.isNaN(high) ? null : { low, high };
+    return sum;
   }
 }
 
@@ -88,12 +86,11 @@ class Inverse implements Response {
   }
 
   bounds(lowHz: number, highHz: number): Enclosure {
-    const { low, high } = this.inner.bounds(lowHz, highHz);
-    return { low: -high, high: -low };
+    return negated(this.inner.bounds(lowHz, highHz));
   }
 
   slope(lowHz: number, highHz: number): Enclosure | null {
     const slope = this.inner.slope(lowHz, highHz);
-    return slope === null ? null : { low: -slope.high, high: -slope.low };
+    return slope === null ? null : negated(slope);
   }
 }

@@ -1,5 +1,5 @@
 /** Proved search over one interval: the sign of the slope settles it, else two lines through the end values bound it, else it is split. */
-import type { Enclosure } from '../response';
+import type { Enclosure, Response } from '../response';
 import type { Frontier, Node } from './frontier';
 
 /** What is maximised over an interval of frequencies. */
@@ -10,6 +10,16 @@ export interface Curve {
   /** An upper bound over an interval. */
   upper(lowHz: number, highHz: number): number;
   slope(lowHz: number, highHz: number): Enclosure | null;
+}
+
+/** A response as a curve. */
+export function curveOf(response: Response, tag: number): Curve {
+  return {
+    tag,
+    logGain: (frequencyHz) => response.logGain(frequencyHz),
+    upper: (lowHz, highHz) => response.bounds(lowHz, highHz).high,
+    slope: (lowHz, highHz) => response.slope(lowHz, highHz),
+  };
 }
 
 /** Evaluates both ends and opens the interval. */

@@ -3,7 +3,7 @@ import type { Enclosure, Response } from '../response';
 import type { Extreme, SearchOptions } from './extreme';
 import { Frontier } from './frontier';
 import { gapOf, toNepers } from './gap';
-import { openInterval, type Curve } from './interval';
+import { curveOf, openInterval, type Curve } from './interval';
 
 /**
  * The largest gain of a response over bands, proved: no frequency in them gives more than `logGain`.
@@ -20,7 +20,7 @@ import { openInterval, type Curve } from './interval';
 export function largestOverBands(response: Response, bands: readonly Enclosure[], options: SearchOptions = {}): Extreme | null {
   if (bands.length === 0) return null;
   const frontier = new Frontier(toNepers(options.gapDb));
-  const curve = curveOf(response);
+  const curve = curveOf(response, 0);
   for (const band of bands) {
     if (!(band.low >= 0 && band.low <= band.high))
       throw new RangeError(`A band must run upwards from 0 Hz, not ${band.low} .. ${band.high}.`);
@@ -29,15 +29,6 @@ export function largestOverBands(response: Response, bands: readonly Enclosure[]
   }
   const logGain = frontier.prove();
   return { logGain, frequencyHz: frontier.bestHz, gapDb: gapOf(logGain, frontier.best), evaluations: frontier.evaluations };
-}
-
-function curveOf(response: Response): Curve {
-  return {
-    tag: 0,
-    logGain: (frequencyHz) => response.logGain(frequencyHz),
-    upper: (lowHz, highHz) => response.bounds(lowHz, highHz).high,
-    slope: (lowHz, highHz) => response.slope(lowHz, highHz),
-  };
 }
 
 function noteTurns(frontier: Frontier, curve: Curve, turnsHz: readonly number[], band: Enclosure): void {

@@ -1,11 +1,12 @@
 /** The proved largest gain over every fold, to infinity. */
-import type { Enclosure, Response } from '../response';
+import type { Enclosure } from '../response';
 import type { FoldExtreme, FoldQuestion, SearchOptions } from './extreme';
 import { Frontier } from './frontier';
 import { gapOf, toNepers } from './gap';
-import type { Curve } from './interval';
+import { curveOf, type Curve } from './interval';
 import { foldOf, isLower, Ladder } from './ladder';
-import { innerAxis, openRun, type LadderCurves } from './run';
+import { openRun, type LadderCurves } from './run';
+import { innerAxis, Sight, SightCurve } from './sight';
 
 /**
  * The largest of |outer(F)|·|inner(x)| over every F = k·rate ± x with x in the bands and F in the allowed intervals, proved to infinity.
@@ -54,92 +55,44 @@ interface Rung {
 function checkQuestion(question: FoldQuestion): void {
   const { low, high } = question.rateHz;
   if (!(low > 0 && low <= high && high < Infinity)) throw new RangeError(`A rate must be above 0 Hz, not ${low} .. ${high}.`);
-  if (question.inner !== null && low !== high) throw new RangeError('A gain at x needs an exact rate.');
+  if ((question.inner !== null || question.coupled !== undefined) && low !== high)
+    throw new RangeError('A gain at x needs an exact rate.');
 }
 
 class Curves implements LadderCurves {
-  readonly outer: Response;
-  readonly innerUpper: number;
+  private readonly sight: Sight | null;
 
   constructor(
     private readonly question: FoldQuestion,
     readonly ladder: Ladder,
     private readonly rungs: Rung[],
   ) {
-    this.outer = question.outer;
-    this.innerUpper = question.inner === null ? 0 : question.inner.bounds(ladder.band.low, ladder.band.high).high;
+    const { inner, outer, coupled = [] } = question;
+    this.sight = inner === null && coupled.length === 0 ? null : new Sight(outer, inner, coupled);
+  }
+
+  upper(hull: Enclosure): number {
+    return this.sight === null ? this.question.outer.bounds(hull.low, hull.high).high : this.sight.upper(hull, this.ladder.band);
   }
 
   curve(rung: number): Curve {
-    const { inner, outer, rateHz } = this.question;
+    const { outer, rateHz } = this.question;
     const tag = this.tag(rung);
-    return inner === null
-      ? plainCurve(outer, tag)
-      : new PairedCurve(tag, outer, inner, innerAxis(rung, rateHz.low), this.ladder.band);
+    return this.sight === null
+      ? curveOf(outer, tag)
+      : new SightCurve(tag, this.sight, innerAxis(rung, rateHz.low), this.ladder.band);
   }
 
   noteInfinity(frontier: Frontier): void {
-    const { inner, outer } = this.question;
+    const { outer } = this.question;
     const { low, high } = this.ladder.band;
     frontier.evaluations += 1;
-    const atEnds = inner === null ? 0 : Math.max(inner.logGain(low), inner.logGain(high));
-    const logGain = outer.logGain(Infinity) + atEnds;
+    const gain = (x: number): number => this.sight?.logGain(Infinity, x) ?? outer.logGain(Infinity);
+    const logGain = Math.max(gain(low), gain(high));
     if (logGain > frontier.best) frontier.note(logGain, Infinity, this.tag(Infinity));
   }
 
   private tag(rung: number): number {
     return this.rungs.push({ ladder: this.ladder, rung }) - 1;
-  }
-}
-
-function plainCurve(outer: Response, tag: number): Curve {
-  return {
-    tag,
-    logGain: (frequencyHz) => outer.logGain(frequencyHz),
-    upper: (lowHz, highHz) => outer.bounds(lowHz, highHz).high,
-    slope: (lowHz, highHz) => outer.slope(lowHz, highHz),
-  };
-}
-
-/** outer(F)·inner(x) along one rung, where x = offset + direction·F. */
-class PairedCurve implements Curve {
-  constructor(
-    readonly tag: number,
-    private readonly outer: Response,
-    private readonly inner: Response,
-    private readonly axis: { readonly offset: number; readonly direction: 1 | -1 },
-    private readonly band: Enclosure,
-  ) {}
-
-  logGain(frequencyHz: number): number {
-    const sum = this.outer.logGain(frequencyHz) + this.inner.logGain(this.innerHz(frequencyHz));
-    return Number.isNaN(sum) ? -Infinity : sum;
-  }
-
-  upper(lowHz: number, highHz: number): number {
-    const inner = this.inner.bounds(...this.innerInterval(lowHz, highHz));
-    const sum = this.outer.bounds(lowHz, highHz).high + inner.high;
-    return Number.isNaN(sum) ? Infinity : sum;
-  }
-
-  slope(lowHz: number, highHz: number): Enclosure | null {
-    const outer = this.outer.slope(lowHz, highHz);
-    const inner = outer === null ? null : this.inner.slope(...this.innerInterval(lowHz, highHz));
-    if (outer === null || inner === null) return null;
-    const turned = this.axis.direction === 1 ? inner : { low: -inner.high, high: -inner.low };
-    const low = outer.low + turned.low;
-    const high = outer.high + turned.high;
-    return Number.isNaN(low) || Number.isNaN(high) ? null : { low, high };
-  }
-
-  /** Held inside the band against rounding. */
-  private innerHz(frequencyHz: number): number {
-    return Math.min(Math.max(this.axis.offset + this.axis.direction * frequencyHz, this.band.low), this.band.high);
-  }
-
-  private innerInterval(lowHz: number, highHz: number): [number, number] {
-    const atLow = this.innerHz(lowHz);
-    const atHigh = this.innerHz(highHz);
-    return this.axis.direction === 1 ? [atLow, atHigh] : [atHigh, atLow];
   }
 }

@@ -1,15 +1,14 @@
 /** A run of rungs, bounded as one interval before any of them is looked at; the tail to infinity is one more run. */
-import type { Response } from '../response';
+import type { Enclosure } from '../response';
 import type { Frontier, Node } from './frontier';
 import { openInterval, type Curve } from './interval';
-import { foldOf, isLower, type Ladder } from './ladder';
+import type { Ladder } from './ladder';
 
 /** The curves of one ladder: what is maximised on each rung, and an upper bound over a run of them. */
 export interface LadderCurves {
   readonly ladder: Ladder;
-  readonly outer: Response;
-  /** The largest inner gain over the band, as a bound; 0 without an inner response. */
-  readonly innerUpper: number;
+  /** An upper bound over everything in a stretch of frequencies. */
+  upper(hull: Enclosure): number;
   /** The curve of one rung. */
   curve(rung: number): Curve;
   /** Notes the value that is approached at infinity. */
@@ -27,7 +26,7 @@ export function openRun(frontier: Frontier, curves: LadderCurves, first: number,
   const hull = ladder.hull(first, last);
   if (hull.low > hull.high) return;
   frontier.evaluations += 1;
-  const upper = curves.outer.bounds(hull.low, hull.high).high + curves.innerUpper;
+  const upper = curves.upper(hull);
   if (!frontier.mayWin(upper)) return;
   probe(frontier, curves, first);
   frontier.open(new RunNode(curves, first, last, length, upper));
@@ -71,10 +70,4 @@ class RunNode implements Node {
     openRun(frontier, this.curves, this.first, cut, Math.ceil(count / 2));
     openRun(frontier, this.curves, cut + stride, this.last, this.length * 2);
   }
-}
-
-/** Where x stands for a frequency on a rung: x = offset + direction·F. */
-export function innerAxis(rung: number, rateHz: number): { readonly offset: number; readonly direction: 1 | -1 } {
-  const multiple = foldOf(rung) * rateHz;
-  return isLower(rung) ? { offset: multiple, direction: -1 } : { offset: -multiple, direction: 1 };
 }
