@@ -7,7 +7,7 @@ import { findingIn, limitAndFilter } from './build';
 import type { Finding } from './finding';
 import { frequencyWords } from './frequency-words';
 import type { FindingKind, Help, Subject } from './kind';
-import { brokenLimit, nominalPasses } from './limits';
+import { breaks, brokenLimit, nominalPasses } from './limits';
 import { decimalsFor, limitWords, worstCaseWords } from './wording';
 
 const help: Help = {
@@ -47,7 +47,7 @@ export const aliasOverLimit: FindingKind = {
   check: (subject) => {
     const limit = brokenLimit(subject.figures, 'alias');
     if (limit === null) return [];
-    return subject.figures.aliases.filter((alias) => (alias.margin ?? 0) < 0).map((alias) => over(subject, limit, alias));
+    return subject.figures.aliases.filter((alias) => breaks(alias.margin)).map((alias) => over(subject, limit, alias));
   },
 };
 

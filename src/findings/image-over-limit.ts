@@ -5,7 +5,7 @@ import { findingIn, limitAndFilter, limitPath } from './build';
 import type { Finding } from './finding';
 import { frequencyWords } from './frequency-words';
 import type { FindingKind, Help, Subject } from './kind';
-import { brokenLimit, nominalPasses } from './limits';
+import { breaks, brokenLimit, nominalPasses } from './limits';
 import { decimalsFor, limitWords, worstCaseWords } from './wording';
 
 const help: Help = {
@@ -43,7 +43,7 @@ export const imageOverLimit: FindingKind = {
     const limit = brokenLimit(subject.figures, 'image');
     if (limit === null) return [];
     return copies(subject.figures)
-      .filter((image) => (image.margin ?? 0) < 0)
+      .filter((image) => breaks(image.margin))
       .map((image) => over(subject, limit, image));
   },
 };

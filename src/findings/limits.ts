@@ -33,3 +33,8 @@ export function thinBelow(channel: Channel, figure: LimitFigure): number {
 }
 
 const inDecibels: ReadonlySet<LimitKey> = new Set<LimitKey>(['alias', 'image', 'snr', 'headroom']);
+
+/** Whether a margin is on the wrong side of its limit by more than rounding. */
+export function breaks(margin: number | null): boolean {
+  return margin !== null && margin < -1e-9;
+}

@@ -50,6 +50,8 @@ function unjudged({ channel, figures }: Subject, figure: LimitFigure): Finding {
   });
 }
 
+const foldsFirst = 'the wanted band folds onto itself. Cure that first';
+
 /** What would have to be there for the limit to mean something. */
 function missing(channel: Channel, figure: LimitFigure, folded: boolean): string {
   switch (figure.limit) {
@@ -59,9 +61,10 @@ function missing(channel: Channel, figure: LimitFigure, folded: boolean): string
         : 'no part of what is unwanted can land in a protected range';
     case 'snr':
       return 'the channel has no noise. Give it `bits`, or `jitter`';
-    case 'image':
     case 'flatness':
+      return folded ? foldsFirst : 'a path without a filter is flat by nature. Give it its `filter`';
+    case 'image':
     case 'headroom':
-      return folded ? 'the wanted band folds onto itself. Cure that first' : 'the channel has nothing that could break it';
+      return folded ? foldsFirst : 'the channel has nothing that could break it';
   }
 }

@@ -50,11 +50,16 @@ export function wantedWords(channel: Channel, index: number): string {
   return `the wanted band ${band.name === null ? '' : `\`${band.name}\`, `}${bandWords(band.lowHz, band.highHz)}${guard}`;
 }
 
-/** "700 kHz, half the rate" or "2.1 MHz, 3 times half the rate". */
+/** "700 kHz, half the rate of 1.4 MHz" or "2.1 MHz, 3 times half the rate of 1.4 MHz". */
 export function edgeWords(figures: Pick<Figures, 'outputRate'>, edgeHz: number): string {
-  const times = Math.round(edgeHz / (figures.outputRate / 2));
-  const share = `${times <= 1 ? '' : `${formatCount(times, 'time')} `}half the rate of ${formatFrequency(figures.outputRate)}`;
-  return `${formatFrequency(edgeHz)}, ${share}`;
+  const halves = Math.round(edgeHz / (figures.outputRate / 2));
+  const whole = halves % 2 === 0 ? halves / 2 : null;
+  const share = whole === null ? shareWords(halves, 'half the rate') : shareWords(whole, 'the rate');
+  return `${formatFrequency(edgeHz)}, ${share} of ${formatFrequency(figures.outputRate)}`;
+}
+
+function shareWords(count: number, what: string): string {
+  return count === 1 ? what : `${formatCount(count, 'time')} ${what}`;
 }
 
 function folds({ channel, figures }: Subject, fault: SamplingFault): Finding {

@@ -20,7 +20,7 @@ export function worstWords(worstAt: WorstAt | null): string | null {
   const only = entries.length === 1;
   const words = entries
     .slice(0, 3)
-    .map(([label, deviation]) => `${only ? lastPart(label) : label} ${formatSignedPercent(deviation)}`);
+    .map(([label, deviation]) => `${only ? shortLabel(label) : label} ${deviationWords(deviation)}`);
   const more = entries.length - words.length;
   if (words.length === 0) return null;
   return words.join('; ') + (more > 0 ? ` and ${more} more` : '');
@@ -43,6 +43,14 @@ export function worstCaseWords({ worstAt, nominal, nominalPasses, decimals }: Wo
   return ` (worst case, ${worst}${plain})`;
 }
 
-function lastPart(label: string): string {
-  return label.slice(label.lastIndexOf(',') + 1).trim();
+/** Of a lone corner or gain nobody has to be told whose it is; a frequency may be the clock's or a source's. */
+function shortLabel(label: string): string {
+  const part = label.slice(label.lastIndexOf(',') + 1).trim();
+  return part === 'corner' || part === 'gain' ? part : label;
+}
+
+/** A relative deviation with its sign: "+4 %", "−25 ppm". */
+function deviationWords(deviation: number): string {
+  if (Math.abs(deviation) >= 1e-3) return formatSignedPercent(deviation);
+  return `${deviation > 0 ? '+' : ''}${plainNumber(deviation * 1e6, 1)} ppm`;
 }

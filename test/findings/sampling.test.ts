@@ -11,7 +11,7 @@ describe('wanted-folds and wanted-touches', () => {
   it('names the multiple of half the rate that the band crosses', () => {
     const faults = [{ kind: 'wanted-folds', index: 0, onto: null, edgeHz: 1.4e6 }] as const;
     assert.deepEqual(messages('wanted-folds', echo, figures({ ...at, faults })), [
-      'The wanted band 1.2 MHz .. 1.6 MHz crosses 1.4 MHz, 2 times half the rate of 1.4 MHz, and folds onto itself. Choose another rate.',
+      'The wanted band 1.2 MHz .. 1.6 MHz crosses 1.4 MHz, the rate of 1.4 MHz, and folds onto itself. Choose another rate.',
     ]);
   });
 
