@@ -1,0 +1,34 @@
+/** Between decibels at the edges and the natural logarithms that gains are handled as inside. */
+
+/** Decibels in one neper: 20 / ln 10. */
+export const decibelsPerNeper = 20 / Math.LN10;
+
+/** ln of an amplitude ratio as dB. */
+export function toDb(logGain: number): number {
+  return logGain * decibelsPerNeper;
+}
+
+/** dB as ln of an amplitude ratio. */
+export function toLogGain(db: number): number {
+  return db / decibelsPerNeper;
+}
+
+/** The power ratio of a level in dB. */
+export function powerOf(db: number): number {
+  return 10 ** (db / 10);
+}
+
+/** A power ratio as dB; −Infinity for none. */
+export function powerDb(power: number): number {
+  return 10 * Math.log10(power);
+}
+
+/** Levels added as powers; null where there are none. */
+export function sumOfLevels(levelsDb: readonly number[]): number | null {
+  return levelsDb.length === 0 ? null : powerDb(levelsDb.reduce((sum, level) => sum + powerOf(level), 0));
+}
+
+/** Parts that exist, added as powers; null where none exists. */
+export function sumOfParts(levelsDb: readonly (number | null)[]): number | null {
+  return sumOfLevels(levelsDb.filter((level) => level !== null));
+}

@@ -1,0 +1,73 @@
+/** How flat the wanted band comes out: the proved largest departure of the gain from its value at the reference, and the droop at the top edge. */
+import { inverse } from '../signal/response-algebra';
+import { largestOverBands } from '../signal/search';
+import type { Extreme } from '../signal/search';
+import type { Channel } from '../spec/channel';
+import { lossDb } from './channel-path';
+import type { ChannelPath } from './channel-path';
+import { toDb } from './decibels';
+import type { WorstAt } from './figures';
+import { wantedRanges } from './source-range';
+import { partsVary } from './tolerances';
+import { nominalPath, worstPath } from './worst-path';
+import type { WorstPath } from './worst-path';
+
+/** The largest departure either way, in dB. */
+export interface Flatness {
+  readonly valueDb: number;
+  readonly nominalDb: number;
+  readonly frequencyHz: number;
+  readonly gapDb: number;
+  readonly worstAt: WorstAt | null;
+  readonly evaluations: number;
+}
+
+/** Flatness over all wanted bands, nominally and at the worst of the tolerances; null without a wanted band. */
+export function flatnessOf(channel: Channel, path: ChannelPath): Flatness | null {
+  const referenceHz = channel.referenceHz;
+  const plain = nominalPath(path, referenceHz);
+  const nominal = departure(channel, plain, plain);
+  if (nominal === null) return null;
+  const nominalDb = toDb(nominal.extreme.logGain);
+  if (!partsVary(channel)) return figureOf(nominal, nominalDb, nominal.extreme.evaluations);
+  const most = worstPath(path, { sense: 'largest', referenceHz, axis: 'hertz' });
+  const least = worstPath(path, { sense: 'smallest', referenceHz, axis: 'hertz' });
+  const worst = departure(channel, most, least) ?? nominal;
+  return figureOf(worst, nominalDb, nominal.extreme.evaluations + worst.extreme.evaluations);
+}
+
+/** Loss in dB from the reference to the top wanted edge; a gain counts negative. Null without a wanted band. */
+export function droopOf(channel: Channel, path: ChannelPath): number | null {
+  if (channel.wanted.length === 0) return null;
+  const top = Math.max(...channel.wanted.map((band) => band.highHz));
+  return lossDb(path.total, top, channel.referenceHz);
+}
+
+interface Departure {
+  readonly extreme: Extreme;
+  readonly path: WorstPath;
+}
+
+/** The larger of the largest rise and the largest loss. */
+function departure(channel: Channel, most: WorstPath, least: WorstPath): Departure | null {
+  const bands = wantedRanges(channel);
+  const rise = largestOverBands(most.response, bands);
+  const loss = largestOverBands(inverse(least.response), bands);
+  if (rise === null || loss === null) return null;
+  const evaluations = rise.evaluations + loss.evaluations;
+  return loss.logGain >= rise.logGain
+    ? { extreme: { ...loss, evaluations }, path: least }
+    : { extreme: { ...rise, evaluations }, path: most };
+}
+
+function figureOf({ extreme, path }: Departure, nominalDb: number, evaluations: number): Flatness {
+  const valueDb = Math.max(toDb(extreme.logGain), 0);
+  return {
+    valueDb,
+    nominalDb: Math.min(Math.max(nominalDb, 0), valueDb),
+    frequencyHz: extreme.frequencyHz,
+    gapDb: extreme.gapDb,
+    worstAt: path.worstAt(extreme.frequencyHz),
+    evaluations,
+  };
+}

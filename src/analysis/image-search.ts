@@ -1,0 +1,140 @@
+/** The proved strongest point of one copy or of a run of copies, as a level or against the same tone's own output, nominally or at the worst parts. */
+import { alongCopy, tiedRatio } from '../signal/copy-axis';
+import type { Enclosure, Response } from '../signal/response';
+import { inverse, product } from '../signal/response-algebra';
+import { largestOverBands, largestOverFolds } from '../signal/search';
+import type { StretchedResponse } from '../signal/stretched';
+import type { ChannelPath } from './channel-path';
+import { axisOf, leavesAt } from './copies';
+import type { Copy, CopyRun, WantedCopy } from './copies';
+import { followsRate } from './pulse';
+import { cornerLabel, deviation, factorsOf, partsVary, varies } from './tolerances';
+import type { WorstAt } from './figures';
+import { axisFactors, nominalPath, worstPath } from './worst-path';
+import type { WorstPath } from './worst-path';
+
+/** How images are measured: their own level, or against the same tone's wanted output. */
+export type Measure = 'level' | 'relative';
+
+/** What is searched. */
+export interface ImageQuestion {
+  readonly path: ChannelPath;
+  readonly measure: Measure;
+  readonly parts: 'nominal' | 'worst';
+  readonly copies: WantedCopy;
+}
+
+/** A copy's strongest point; frequencies are multiples of the rate, written at its nominal value. */
+export interface ImagePoint {
+  readonly copy: Copy;
+  readonly measure: Measure;
+  readonly logGain: number;
+  readonly basebandHz: number;
+  readonly frequencyHz: number;
+  readonly gapDb: number;
+  readonly evaluations: number;
+  /** The corner factor of each stage there. */
+  readonly corners: readonly number[];
+  /** ln of the stages' gain tolerances in `logGain`. */
+  readonly gainLog: number;
+  readonly worstAt: WorstAt | null;
+}
+
+/** The strongest point of one copy. */
+export function strongestOfCopy(question: ImageQuestion, copy: Copy): ImagePoint | null {
+  const run = { firstFold: copy.fold, lastFold: copy.fold };
+  if (question.measure === 'level' || !movesParts(question)) return strongestOfRun(question, run, copy.side);
+  return strongestTied(question, copy);
+}
+
+/**
+ * The strongest point of a run of copies. Against the wanted output with parts that vary it is a bound: the copy at its largest over
+ * the wanted output at its smallest, which copies as far out as these never reach in practice.
+ */
+export function strongestOfRun(
+  question: ImageQuestion,
+  run: CopyRun,
+  sides: 'both' | 'upper' | 'lower' = 'both',
+): ImagePoint | null {
+  const { path, copies } = question;
+  const rate = path.rateHz;
+  const most = pathFor(question, 'largest');
+  const found = largestOverFolds({
+    rateHz: { low: rate, high: rate },
+    outer: most.response,
+    inner: question.measure === 'level' ? null : againstWanted(question),
+    bands: [copies.baseband],
+    within: null,
+    ...run,
+    sides,
+  });
+  if (found === null) return null;
+  const copy: Copy = { fold: found.fold, side: found.side };
+  return {
+    copy,
+    measure: question.measure,
+    logGain: found.logGain,
+    basebandHz: found.landsHz,
+    frequencyHz: found.frequencyHz,
+    gapDb: found.gapDb,
+    evaluations: found.evaluations,
+    corners: most.cornersAt(found.frequencyHz),
+    gainLog: most.gainLog,
+    worstAt: most.worstAt(found.frequencyHz),
+  };
+}
+
+function movesParts({ parts, path }: ImageQuestion): boolean {
+  return parts === 'worst' && partsVary(path.channel);
+}
+
+function pathFor(question: ImageQuestion, sense: 'largest' | 'smallest'): WorstPath {
+  const { path } = question;
+  if (!movesParts(question)) return nominalPath(path, null);
+  return worstPath(path, { sense, referenceHz: null, axis: 'periods' });
+}
+
+/** One over the wanted output along x, at its smallest. */
+function againstWanted(question: ImageQuestion): Response {
+  const axis = axisOf(question.copies.wanted, question.path.rateHz);
+  return inverse(alongCopy(pathFor(question, 'smallest').response, axis));
+}
+
+/** Copy over wanted output along x, each part seen at both frequencies at once, so that what a part does to both cancels. */
+function strongestTied(question: ImageQuestion, copy: Copy): ImagePoint | null {
+  const { path, copies } = question;
+  const rate = path.rateHz;
+  const axes = { copy: axisOf(copy, rate), wanted: axisOf(copies.wanted, rate) };
+  const periods = axisFactors(path.channel).periods;
+  const tie = (response: Response, factors: Enclosure): StretchedResponse =>
+    factors.low === factors.high
+      ? { ...plainRatio(response, axes.copy, axes.wanted), factorAt: () => 1 }
+      : tiedRatio(response, factors, axes.copy, axes.wanted);
+  const stages = path.stages.map(({ stage, response }) => {
+    const own = factorsOf(stage.cornerTolerance);
+    return { stage, own, tied: tie(response, { low: own.low * periods.low, high: own.high * periods.high }) };
+  });
+  const pulse = tie(path.pulse, followsRate(path.channel.pulse) ? { low: 1, high: 1 } : periods);
+  const found = largestOverBands(product([pulse, ...stages.map((one) => one.tied)]), [copies.baseband]);
+  if (found === null) return null;
+  const corners = stages.map(({ own, tied }) => Math.min(Math.max(tied.factorAt(found.frequencyHz), own.low), own.high));
+  const deviations = stages.flatMap(({ stage }, index) =>
+    varies(stage.cornerTolerance) ? [[cornerLabel(stage), deviation(corners[index] ?? 1, stage.cornerTolerance)] as const] : [],
+  );
+  return {
+    copy,
+    measure: question.measure,
+    logGain: found.logGain,
+    basebandHz: found.frequencyHz,
+    frequencyHz: leavesAt(copy, rate, found.frequencyHz),
+    gapDb: found.gapDb,
+    evaluations: found.evaluations,
+    corners,
+    gainLog: 0,
+    worstAt: Object.fromEntries(deviations),
+  };
+}
+
+function plainRatio(response: Response, copy: ReturnType<typeof axisOf>, wanted: ReturnType<typeof axisOf>): Response {
+  return product([alongCopy(response, copy), inverse(alongCopy(response, wanted))]);
+}

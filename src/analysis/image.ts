@@ -1,0 +1,156 @@
+/** What a generate channel lets out besides the wanted band: the strongest point of every copy, and the strongest of all to infinity. */
+import type { Channel, Limit, WantedBand } from '../spec/channel';
+import { gainWithCornersDb } from './capture-view';
+import type { ChannelPath } from './channel-path';
+import { copiesOf, leavesAt, reportedFolds } from './copies';
+import type { WantedCopy } from './copies';
+import { toDb } from './decibels';
+import type { ImageFigure, WorstAt } from './figures';
+import { strongestOfCopy, strongestOfRun } from './image-search';
+import type { ImagePoint, Measure } from './image-search';
+import { deviation, joinWorst, partsVary, rateLabel, rateRange, varies } from './tolerances';
+import { axisFactors } from './worst-path';
+
+/** The images of a channel. */
+export interface Images {
+  /** The strongest of each copy and side, k up to 8. */
+  readonly figures: readonly ImageFigure[];
+  readonly strongest: ImageFigure | null;
+  readonly nominalLevelDb: number | null;
+  readonly nominalRelativeDb: number | null;
+  readonly evaluations: number;
+}
+
+/** Every copy's strongest point, measured as the image limit measures it; by level where there is none. */
+export function imagesOf(channel: Channel, path: ChannelPath, limit: Limit | null): Images {
+  const none: Images = { figures: [], strongest: null, nominalLevelDb: null, nominalRelativeDb: null, evaluations: 0 };
+  if (channel.direction !== 'generate') return none;
+  const measure: Measure = limit?.unit === 'dBc' ? 'relative' : 'level';
+  const found = channel.wanted.flatMap((band) => imagesOfBand(channel, path, band, measure));
+  if (found.length === 0) return none;
+  const key = (one: Image): number => (measure === 'relative' ? one.relativeDb : one.levelDb);
+  const nominalKey = (one: Image): number => (measure === 'relative' ? one.nominalRelativeDb : one.nominalLevelDb);
+  const figures = strongestOfEach(found, key).map((one) => figureOf(one, limit, key(one)));
+  const strongest = found.reduce((best, one) => (key(one) > key(best) ? one : best));
+  const nominal = found.reduce((best, one) => (nominalKey(one) > nominalKey(best) ? one : best));
+  return {
+    figures,
+    strongest: figureOf(
+      { ...strongest, nominalLevelDb: Math.min(nominal.nominalLevelDb, strongest.levelDb) },
+      limit,
+      key(strongest),
+    ),
+    nominalLevelDb: nominal.nominalLevelDb,
+    nominalRelativeDb: nominal.nominalRelativeDb,
+    evaluations: found.reduce((sum, one) => sum + one.evaluations, 0),
+  };
+}
+
+/** A copy's strongest point in levels, worst and nominal. */
+interface Image {
+  readonly copy: ImagePoint['copy'];
+  readonly fromHz: number;
+  readonly frequencyHz: number;
+  readonly levelDb: number;
+  readonly relativeDb: number;
+  readonly nominalLevelDb: number;
+  readonly nominalRelativeDb: number;
+  readonly gapDb: number;
+  readonly worstAt: WorstAt | null;
+  readonly evaluations: number;
+}
+
+function imagesOfBand(channel: Channel, path: ChannelPath, band: WantedBand, measure: Measure): readonly Image[] {
+  const range = { low: band.lowHz, high: band.highHz };
+  const nominalCopies = copiesOf(range, path.rateHz);
+  const nominal = pointsOf({ path, measure, parts: 'nominal', copies: nominalCopies });
+  if (!partsVary(channel)) {
+    return nominal.map((point) => imageOf(path, band, nominalCopies, point, point));
+  }
+  const { low, high } = axisFactors(channel).periods;
+  const copies = copiesOf({ low: range.low * low, high: range.high * high }, path.rateHz);
+  const worst = pointsOf({ path, measure, parts: 'worst', copies });
+  return worst.flatMap((point, index) => {
+    const still = nominal[index];
+    return still === undefined ? [] : [imageOf(path, band, copies, point, still)];
+  });
+}
+
+/** The single copies, then the runs; the same order for every set of parts. */
+function pointsOf(question: Parameters<typeof strongestOfCopy>[0]): readonly ImagePoint[] {
+  const single = question.copies.single.map((copy) => strongestOfCopy(question, copy));
+  const runs = question.copies.runs.map((run) => strongestOfRun(question, run));
+  return [...single, ...runs].filter((point) => point !== null);
+}
+
+function imageOf(path: ChannelPath, band: WantedBand, copies: WantedCopy, worst: ImagePoint, nominal: ImagePoint): Image {
+  const levels = levelsOf(path, band, copies, worst);
+  const still = nominal === worst ? levels : levelsOf(path, band, copies, nominal);
+  const scale = rateScale(path.channel, band, leavesAt(copies.wanted, path.rateHz, worst.basebandHz));
+  const { rate } = path.channel;
+  const clock = worst !== nominal && varies(rate.tolerance) ? { [rateLabel(rate)]: deviation(scale, rate.tolerance) } : null;
+  return {
+    copy: worst.copy,
+    fromHz: leavesAt(copies.wanted, path.rateHz, worst.basebandHz) * scale,
+    frequencyHz: worst.frequencyHz * scale,
+    ...levels,
+    nominalLevelDb: Math.min(still.levelDb, levels.levelDb),
+    nominalRelativeDb: Math.min(still.relativeDb, levels.relativeDb),
+    gapDb: worst.gapDb,
+    worstAt: joinWorst(worst.worstAt, clock),
+    evaluations: worst.evaluations + (nominal === worst ? 0 : nominal.evaluations),
+  };
+}
+
+/** The level and the level against the same tone's wanted output, with the same parts for both. */
+function levelsOf(
+  path: ChannelPath,
+  band: WantedBand,
+  copies: WantedCopy,
+  point: ImagePoint,
+): { readonly levelDb: number; readonly relativeDb: number } {
+  const wantedHz = leavesAt(copies.wanted, path.rateHz, point.basebandHz);
+  const gainDb = toDb(point.logGain);
+  if (point.measure === 'relative') {
+    return { relativeDb: gainDb, levelDb: band.levelDb + gainWithCornersDb(path, point.frequencyHz, point.corners) };
+  }
+  const wantedDb = gainWithCornersDb(path, wantedHz, point.corners) + toDb(point.gainLog);
+  return { levelDb: band.levelDb + gainDb, relativeDb: gainDb - wantedDb };
+}
+
+/** The rate, over nominal, at which the wanted frequency that was found lies in its band: nominal where it does. */
+function rateScale(channel: Channel, band: WantedBand, wantedHz: number): number {
+  const { low, high } = rateRange(channel.rate);
+  const nominal = channel.rate.hz;
+  const inside = (scale: number): boolean =>
+    band.lowHz * (1 - 1e-12) <= wantedHz * scale && wantedHz * scale <= band.highHz * (1 + 1e-12);
+  return [1, low / nominal, high / nominal].find(inside) ?? 1;
+}
+
+/** The strongest of each copy and side that is reported, whatever band it copies. */
+function strongestOfEach(images: readonly Image[], key: (image: Image) => number): readonly Image[] {
+  const best = new Map<string, Image>();
+  for (const image of images) {
+    if (image.copy.fold > reportedFolds) continue;
+    const name = `${String(image.copy.fold)} ${image.copy.side}`;
+    const known = best.get(name);
+    if (known === undefined || key(image) > key(known)) best.set(name, image);
+  }
+  return [...best.values()];
+}
+
+function figureOf(image: Image, limit: Limit | null, measured: number): ImageFigure {
+  return {
+    copy: image.copy.fold,
+    side: image.copy.fold === 0 ? 'baseband' : image.copy.side,
+    from: image.fromHz,
+    frequency: image.frequencyHz,
+    level: image.levelDb,
+    nominal: image.nominalLevelDb,
+    relative: image.relativeDb,
+    limit: limit?.at ?? null,
+    margin: limit === null ? null : limit.at - measured,
+    gap: image.gapDb,
+    worstAt: image.worstAt,
+  };
+}

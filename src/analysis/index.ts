@@ -1,0 +1,32 @@
+/** What the analysis offers to the other layers: figures of a channel, and its path as responses. */
+export { analyse } from './analyse';
+export { createFigureStore, type FigureStore } from './figure-store';
+export type {
+  AliasFigure,
+  Figures,
+  ImageFigure,
+  LimitFigure,
+  NoiseFigures,
+  Overlap,
+  SamplingFault,
+  WantedFigure,
+  Where,
+  WorstAt,
+} from './figures';
+export {
+  channelPath,
+  gainDb,
+  lossDb,
+  pathDelay,
+  pathPhaseRad,
+  relativeTo,
+  type ChannelPath,
+  type StagePath,
+} from './channel-path';
+export { worstPath, type Axis, type WorstPath, type WorstQuestion } from './worst-path';
+export { halfPowerHz } from './half-power';
+export { followsRate, pulseNulls, pulseSeconds } from './pulse';
+export { appearance } from './wanted';
+export { rateRange } from './tolerances';
+export { foldFrequency, rateWindows, type Landing, type RateWindow } from '../signal/folding';
+export type { Enclosure, Response } from '../signal/response';

@@ -1,0 +1,127 @@
+/** Each limit of a channel against the figure it is about: worst case, nominal, margin, and whether anything could have broken it. */
+import type { Channel, Limit, LimitKey } from '../spec/channel';
+import type { Aliases } from './alias';
+import type { LimitFigure, Where, WorstAt } from './figures';
+import type { Flatness } from './flatness';
+import type { Headroom } from './headroom';
+import type { Images } from './image';
+import type { Noise } from './noise';
+
+/** The figures that limits are judged on. */
+export interface Judged {
+  readonly aliases: Aliases;
+  readonly images: Images;
+  readonly flatness: Flatness | null;
+  readonly noise: Noise;
+  readonly headroom: Headroom | null;
+}
+
+/** The limit of a kind, or null. */
+export function limitOf(channel: Channel, key: LimitKey): Limit | null {
+  return channel.limits.find((limit) => limit.key === key) ?? null;
+}
+
+/** Every limit of a channel, judged. */
+export function judgeLimits(channel: Channel, judged: Judged): readonly LimitFigure[] {
+  return channel.limits.map((limit) => figureOf(limit, measured(channel, limit, judged)));
+}
+
+/** What a limit is held against; null where nothing in the channel can break it. */
+interface Measured {
+  readonly value: number;
+  readonly nominal: number;
+  readonly gap: number | null;
+  readonly where: Where | null;
+  readonly worstAt: WorstAt | null;
+}
+
+/** A limit that is met to within this, in dB, is met: what lies below is rounding. */
+const rounding = 1e-9;
+
+function measured(channel: Channel, limit: Limit, judged: Judged): Measured | null {
+  switch (limit.key) {
+    case 'alias':
+      return aliasMeasured(channel, limit, judged.aliases);
+    case 'image':
+      return imageMeasured(limit, judged.images);
+    case 'flatness':
+      return flatnessMeasured(channel, judged.flatness);
+    case 'snr':
+      return snrMeasured(channel, judged.noise);
+    case 'headroom':
+      return headroomMeasured(judged.headroom);
+  }
+}
+
+function figureOf(limit: Limit, found: Measured | null): LimitFigure {
+  const sense = limit.key === 'snr' || limit.key === 'headroom' ? 'at-least' : 'at-most';
+  const head = { limit: limit.key, ref: limit.ref, unit: limit.unit, sense, at: limit.at } as const;
+  if (found === null) {
+    return {
+      ...head,
+      value: null,
+      nominal: null,
+      margin: null,
+      gap: null,
+      judged: false,
+      passes: false,
+      where: null,
+      worstAt: null,
+    };
+  }
+  const margin = sense === 'at-most' ? limit.at - found.value : found.value - limit.at;
+  return { ...head, ...found, margin, judged: true, passes: margin >= -rounding };
+}
+
+/** Sources that land nowhere are an answer, no sources are none. */
+function aliasMeasured(channel: Channel, limit: Limit, aliases: Aliases): Measured | null {
+  if (channel.direction !== 'capture' || channel.unwanted.length === 0) return null;
+  const { strongest } = aliases;
+  if (strongest === null) return { value: -Infinity, nominal: -Infinity, gap: 0, where: null, worstAt: null };
+  const relative = limit.unit === 'dBc';
+  const where: Where = {
+    frequency: strongest.frequency ?? Infinity,
+    source: strongest.source,
+    ...(strongest.lands === null ? {} : { lands: strongest.lands }),
+  };
+  return {
+    value: (relative ? strongest.relative : strongest.level) ?? -Infinity,
+    nominal: (relative ? aliases.nominalRelativeDb : aliases.nominalLevelDb) ?? -Infinity,
+    gap: strongest.gap,
+    where,
+    worstAt: strongest.worstAt,
+  };
+}
+
+function imageMeasured(limit: Limit, images: Images): Measured | null {
+  const { strongest } = images;
+  if (strongest === null) return null;
+  const relative = limit.unit === 'dBc';
+  const value = relative ? strongest.relative : strongest.level;
+  return {
+    value,
+    nominal: Math.min((relative ? images.nominalRelativeDb : images.nominalLevelDb) ?? value, value),
+    gap: strongest.gap,
+    where: { frequency: strongest.frequency, lands: strongest.from },
+    worstAt: strongest.worstAt,
+  };
+}
+
+/** Without a pulse and without a filter everything is flat by nature. */
+function flatnessMeasured(channel: Channel, flatness: Flatness | null): Measured | null {
+  if (flatness === null || (channel.pulse.shape === 'instant' && channel.stages.length === 0)) return null;
+  const { valueDb, nominalDb, frequencyHz, gapDb, worstAt } = flatness;
+  return { value: valueDb, nominal: nominalDb, gap: gapDb, where: { frequency: frequencyHz }, worstAt };
+}
+
+function snrMeasured(channel: Channel, { judged }: Noise): Measured | null {
+  if (judged === null) return null;
+  const { valueDb, nominalDb, worstAt } = judged;
+  return { value: valueDb, nominal: nominalDb, gap: 0, where: { frequency: channel.testTone.frequencyHz }, worstAt };
+}
+
+function headroomMeasured(headroom: Headroom | null): Measured | null {
+  if (headroom === null) return null;
+  const { valueDb, nominalDb, worstAt } = headroom;
+  return { value: valueDb, nominal: nominalDb, gap: 0, where: null, worstAt };
+}

@@ -1,0 +1,21 @@
+/** What the noise of either direction is handed on as, before levels and ratios are made of it. */
+import type { WorstAt } from './figures';
+
+/** Parts of noise in dB, against full scale or against the test tone; null where a part does not exist. */
+export interface NoiseParts {
+  readonly quantisation: number | null;
+  readonly jitter: number | null;
+}
+
+/** What the noise of one direction amounts to. */
+export interface DirectionNoise {
+  /** dBFS, nominal. */
+  readonly nominal: NoiseParts;
+  readonly jitterUnwanted: number | null;
+  /** The powers that count under the snr limit over the test tone's own, at the worst of the tolerances. */
+  readonly worstShares: readonly number[];
+  /** The powers, against full scale, of what counts nominally beyond `nominal`. */
+  readonly nominalExtras: readonly number[];
+  readonly worstAt: WorstAt | null;
+  readonly evaluations: number;
+}

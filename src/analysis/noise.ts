@@ -1,0 +1,62 @@
+/** The noise in the wanted band as it comes out, part by part, and the signal-to-noise ratio of the test tone over it. */
+import type { Channel, Limit } from '../spec/channel';
+import type { ChannelPath } from './channel-path';
+import { powerDb, powerOf, sumOfParts } from './decibels';
+import type { NoiseFigures, WorstAt } from './figures';
+import { captureNoise } from './noise-capture';
+import { generateNoise } from './noise-generate';
+import type { DirectionNoise } from './noise-parts';
+import { testToneLevelDb } from './test-tone';
+
+/** Noise and what follows from it. */
+export interface Noise {
+  readonly figures: NoiseFigures;
+  readonly toneDb: number;
+  /** Without unwanted sources, nominal. */
+  readonly snrDb: number | null;
+  /** As the snr limit counts it; null where there is nothing to count. */
+  readonly judged: { readonly valueDb: number; readonly nominalDb: number; readonly worstAt: WorstAt | null } | null;
+  readonly evaluations: number;
+}
+
+/** The noise of a channel; `limit` is its snr limit, which says whether unwanted sources count. */
+export function noiseOf(channel: Channel, path: ChannelPath, limit: Limit | null): Noise {
+  const withUnwanted = limit?.withUnwanted === true;
+  const noise = channel.direction === 'capture' ? captureNoise(channel, path, withUnwanted) : generateNoise(channel);
+  const toneDb = testToneLevelDb(channel, path);
+  const total = sumOfParts([noise.nominal.quantisation, noise.nominal.jitter]);
+  return {
+    figures: {
+      ...noise.nominal,
+      jitterUnwanted: noise.jitterUnwanted,
+      sources: null,
+      stages: null,
+      thermal: null,
+      converter: null,
+      total,
+      volts: total === null || channel.fullScaleVpp === null ? null : rmsVolts(total, channel.fullScaleVpp),
+    },
+    toneDb,
+    snrDb: total === null ? null : toneDb - total,
+    judged: judged(noise, toneDb, total),
+    evaluations: noise.evaluations,
+  };
+}
+
+function judged(noise: DirectionNoise, toneDb: number, total: number | null): Noise['judged'] {
+  if (noise.worstShares.length === 0) return null;
+  const counted = (total === null ? 0 : powerOf(total)) + sum(noise.nominalExtras);
+  const nominalDb = toneDb - powerDb(counted);
+  // Parts are each taken at their own worst, which is a bound that nominal cannot pass but by rounding.
+  const valueDb = Math.min(-powerDb(sum(noise.worstShares)), nominalDb);
+  return { valueDb, nominalDb, worstAt: noise.worstAt };
+}
+
+/** 0 dBFS is the sine whose peaks reach full scale. */
+function rmsVolts(levelDb: number, fullScaleVpp: number): number {
+  return (10 ** (levelDb / 20) * fullScaleVpp) / (2 * Math.SQRT2);
+}
+
+function sum(powers: readonly number[]): number {
+  return powers.reduce((total, power) => total + power, 0);
+}

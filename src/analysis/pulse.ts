@@ -1,0 +1,31 @@
+/** The pulse of an aperture or a hold as a response: its width, its gain and its nulls. */
+import { rectangleResponse } from '../signal/pulses/rectangle';
+import { constantResponse, product } from '../signal/response-algebra';
+import type { Response } from '../signal/response';
+import type { Channel, Pulse } from '../spec/channel';
+
+/** How long the pulse lasts at a rate, in seconds; 0 for `instant`. */
+export function pulseSeconds(pulse: Pulse, rateHz: number): number {
+  if (pulse.shape === 'instant') return 0;
+  return 'seconds' in pulse.width ? pulse.width.seconds : pulse.width.share / rateHz;
+}
+
+/** Whether the width is a share of the period, so that the pulse follows the rate. */
+export function followsRate(pulse: Pulse): boolean {
+  return pulse.shape === 'rectangle' && 'share' in pulse.width;
+}
+
+/** The pulse's response at a rate: an aperture has gain 1 at 0 Hz, a hold of height 1 its area over the period. */
+export function pulseResponse(channel: Pick<Channel, 'direction' | 'pulse'>, rateHz: number): Response {
+  const width = pulseSeconds(channel.pulse, rateHz);
+  if (width === 0) return constantResponse(0);
+  const shape = rectangleResponse(width);
+  const area = channel.direction === 'capture' ? 0 : Math.log(width * rateHz);
+  return Math.abs(area) < 1e-12 ? shape : product([constantResponse(area), shape]);
+}
+
+/** The first frequencies in Hz at which nothing passes the pulse; empty for `instant`. */
+export function pulseNulls(pulse: Pulse, rateHz: number, count: number): readonly number[] {
+  const width = pulseSeconds(pulse, rateHz);
+  return width === 0 ? [] : Array.from({ length: count }, (_, index) => (index + 1) / width);
+}

@@ -1,0 +1,54 @@
+/** Where a source may stand: its whole range, the part outside the wanted bands that can alias, and the part inside that overlaps. */
+import type { Enclosure } from '../signal/response';
+import type { Channel, Source, WantedBand } from '../spec/channel';
+import type { Overlap } from './figures';
+import { intersection, without } from './intervals';
+import { toneRange } from './tolerances';
+
+/** Every frequency at which a source may stand; `anything` stands everywhere. */
+export function sourceRange(source: Source): Enclosure {
+  switch (source.kind) {
+    case 'tone':
+      return toneRange(source);
+    case 'band':
+      return { low: source.lowHz, high: source.highHz };
+    case 'anything':
+      return { low: 0, high: Infinity };
+  }
+}
+
+/** The wanted bands as intervals. */
+export function wantedRanges(channel: Channel): readonly Enclosure[] {
+  return channel.wanted.map(rangeOf);
+}
+
+/** The part of a source that lies outside every wanted band; what only touches an edge of one is not outside. */
+export function outsideWanted(channel: Channel, source: Source): readonly Enclosure[] {
+  return without([sourceRange(source)], wantedRanges(channel));
+}
+
+/** The sources that reach into a wanted band, each once with its widest stretch there. */
+export function overlapsOf(channel: Channel): readonly Overlap[] {
+  return channel.unwanted.flatMap((source, index) => {
+    if (source.kind === 'anything') return [];
+    const range = sourceRange(source);
+    const inside = channel.wanted.flatMap((band) => insideOf(range, rangeOf(band)));
+    const widest = inside.reduce<Enclosure | null>(
+      (best, one) => (best === null || one.high - one.low > best.high - best.low ? one : best),
+      null,
+    );
+    return widest === null ? [] : [{ index, lowHz: widest.low, highHz: widest.high }];
+  });
+}
+
+/** A stretch of positive width, or a fixed tone strictly inside: touching an edge is not overlapping. */
+function insideOf(range: Enclosure, wanted: Enclosure): readonly Enclosure[] {
+  const common = intersection([range], [wanted]);
+  return common.filter(
+    (one) => one.low < one.high || (range.low === range.high && wanted.low < one.low && one.high < wanted.high),
+  );
+}
+
+function rangeOf(band: WantedBand): Enclosure {
+  return { low: band.lowHz, high: band.highHz };
+}
