@@ -14,27 +14,32 @@ export function loneReturns(text: string): Diagnosis | null {
   return cured(first.start, first.end, message, { title: 'Replace lone carriage returns by line feeds', mends });
 }
 
-const badIndentation = /^[ \t\u00a0]*[\t\u00a0][ \t\u00a0]*(?=[^\s#])/gm;
+const indentation = /^[ \t\u00a0]+(?=[^\s#])/gm;
 
 /** Tabs and no-break spaces in front of a line, unless they are text: inside a scalar of several lines. */
 export function badIndents(text: string, parsed: ParsedSlice): Diagnosis | null {
   if (!/^[ \t\u00a0]*[\t\u00a0]/m.test(text)) return null;
   const tabs = parsed.error?.code === 'TAB_AS_INDENT';
   const several = [...scalars(parsed.tree)].flatMap(({ node }) =>
-    text.slice(node.start, node.end).includes('\n') && (node.quoted || /[|>]/.test(text.charAt(node.start)) || parsed.error === null)
+    text.slice(node.start, node.end).includes('\n') &&
+    (node.quoted || /[|>]/.test(text.charAt(node.start)) || parsed.error === null)
       ? [node]
       : [],
   );
-  const bad = [...text.matchAll(badIndentation)].filter(
+  const bad = [...text.matchAll(indentation)].filter(
     ({ index, 0: lead }) =>
-      (tabs || lead.includes('\u00a0')) && !several.some(({ start, end }) => start < index && index < end),
+      (lead.includes('\u00a0') || (tabs && lead.includes('\t'))) &&
+      !several.some(({ start, end }) => start < index && index < end),
   );
   const first = bad[0];
   if (first === undefined) return null;
   const at = first.index + first[0].search(/[\t\u00a0]/);
   const character = text.charAt(at) === '\t' ? 'a tab' : 'a no-break space';
   const message = `There is ${character} in the indentation: use spaces.`;
-  const mends = reindented(text, bad.map(({ index, 0: lead }) => ({ start: index, lead })));
+  const mends = reindented(
+    text,
+    bad.map(({ index, 0: lead }) => ({ start: index, lead })),
+  );
   return cured(at, first.index + first[0].length, message, { title: 'Indent with spaces', mends });
 }
 

@@ -18,7 +18,13 @@ export function cured(start: number, end: number, message: string, cure: CureTex
 }
 
 /** A slip that can be passed over, but what was meant is not known for certain. */
-export function passed(start: number, end: number, message: string, mends: readonly Mend[] | null, cures: CureText[] = []): Diagnosis {
+export function passed(
+  start: number,
+  end: number,
+  message: string,
+  mends: readonly Mend[] | null,
+  cures: CureText[] = [],
+): Diagnosis {
   return { fault: fault(start, end, message, cures), mends, certain: false };
 }
 
