@@ -1,9 +1,10 @@
 /** The labels of a plot, placed for what is in view. */
-import type { Item, Label, Plot, Points, Shape } from '../protocol/picture';
+import type { Item, Label, Plot, Shape } from '../protocol/picture';
 import { toPixel, toValue } from './axis-scale';
 import type { Frame, PaneFrame } from './frame';
 import { placeLabels } from './label-placement';
 import type { LabelRequest, PlacedLabel } from './label-placement';
+import { levelAt } from './level-at';
 import { lineSteps, pixelOf } from './outlines';
 import { createOccupancy } from './occupancy';
 import type { Box, Writing } from './primitive';
@@ -77,15 +78,6 @@ function endsOf(shape: Shape): readonly [number, number] | null {
   const first = points?.x[0];
   const last = points?.x[points.x.length - 1];
   return first === undefined || last === undefined ? null : [first, last];
-}
-
-/** The level of a curve at a frequency, straight between its points. */
-export function levelAt(points: Points, x: number): number {
-  const index = points.x.findIndex((candidate) => candidate >= x);
-  const [x1, y1] = [points.x[index] ?? 0, points.y[index] ?? points.y[points.y.length - 1] ?? 0];
-  if (index <= 0) return y1;
-  const [x0, y0] = [points.x[index - 1] ?? x1, points.y[index - 1] ?? y1];
-  return x1 === x0 ? y1 : y0 + ((y1 - y0) * (x - x0)) / (x1 - x0);
 }
 
 function ribbonRequest(
