@@ -8,6 +8,7 @@ export const bundles = [
   { out: 'extension.js', entry: 'src/extension/main-node.ts', options: { ...node, external: ['vscode'] } },
   { out: 'server.js', entry: 'src/server/main-node.ts', options: node },
   { out: 'panel.js', entry: 'src/preview/main.ts', options: page },
+  { out: 'panel.css', entry: 'src/preview/panel.css', options: { target: 'chrome120' } },
   { out: 'bandkeep.js', entry: 'src/cli/main.ts', options: { ...node, banner: { js: '#!/usr/bin/env node' } }, executable: true },
   { out: 'library.js', entry: 'src/library.ts', options: node },
   {

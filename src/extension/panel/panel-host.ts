@@ -1,7 +1,9 @@
 /** The side panel from the extension's side: one page, the spec and channel it follows, and when it is told what. */
 import * as vscode from 'vscode';
 import type { PageMessage } from '../../protocol/panel-messages';
+import type { PanelPicture } from '../../protocol/picture';
 import type { PlaceName } from '../../protocol/position';
+import type { PictureParams } from '../../protocol/requests';
 import { coalesced } from '../coalesced';
 import type { ServerLink } from '../server-link';
 import { followItem } from './follow-item';
@@ -147,18 +149,24 @@ export class PanelHost implements vscode.Disposable {
   }
 
   /** The picture, or the reason why there is none. */
-  private async pictureOf(subject: Subject) {
+  private async pictureOf(subject: Subject): Promise<PanelPicture | string> {
     try {
       // Opens the spec for the server where no editor has it, as after a reload.
       await vscode.workspace.openTextDocument(subject.spec);
-      const uri = subject.spec.toString();
-      const position = subject.pinned === null ? cursorIn(subject.spec) : null;
-      const result = await this.link.picture({ uri, channel: subject.pinned, position });
+      const result = await this.link.picture(await this.wanted(subject));
       return result.kind === 'picture' ? result.picture : result.reason;
     } catch (error) {
       this.log.error(`No picture of ${subject.spec.toString()}: ${String(error)}`);
       return `The spec could not be drawn: ${error instanceof Error ? error.message : String(error)}`;
     }
+  }
+
+  /** The channel that is held, else the cursor's, else (the cursor being among filters or clocks) the one shown already. */
+  private async wanted({ spec, pinned, shown }: Subject): Promise<PictureParams> {
+    const uri = spec.toString();
+    const position = pinned === null ? cursorIn(spec) : null;
+    const place = position === null ? null : await this.link.placeAt({ uri, position });
+    return { uri, channel: pinned ?? place?.channel ?? shown, position: null };
   }
 
   private async light(): Promise<void> {

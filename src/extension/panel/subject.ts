@@ -20,7 +20,8 @@ export function subjectOf(spec: vscode.Uri): Subject {
 /** The subject that a page kept over a reload; null where it kept none, or nonsense. */
 export function keptSubject(state: unknown): Subject | null {
   if (!isRecord(state) || !isText(state['uri'])) return null;
-  return { ...subjectOf(vscode.Uri.parse(state['uri'])), pinned: isText(state['pinned']) ? state['pinned'] : null };
+  const channel = isText(state['channel']) ? state['channel'] : null;
+  return { spec: vscode.Uri.parse(state['uri']), shown: channel, pinned: state['pinned'] === true ? channel : null };
 }
 
 /** Where the cursor stands in a spec; null where no visible editor has it. */

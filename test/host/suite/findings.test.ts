@@ -57,9 +57,10 @@ describe('a spec in the editor', () => {
   it('answers when a line is hovered', async () => {
     const position = positionOf(document, '40 kHz .. 3 MHz');
     const hovers = await vscode.commands.executeCommand<vscode.Hover[]>('vscode.executeHoverProvider', document.uri, position);
-    const text = hovers
-      .flatMap(({ contents }) => contents.map((part) => (typeof part === 'string' ? part : part.value)))
-      .join('\n');
+    const parts = hovers.flatMap(({ contents }) =>
+      contents.map((part) => (part instanceof vscode.MarkdownString ? part.value : '')),
+    );
+    const text = parts.join(' ');
     assert.match(text, /lands/);
     assert.match(text, /dBFS/);
   });

@@ -1,0 +1,88 @@
+import assert from 'node:assert/strict';
+import { readFileSync, statSync } from 'node:fs';
+import { join } from 'node:path';
+import type { Frame } from 'playwright-core';
+import { Session, themes } from './session';
+
+const spec = 'gate-bearing-broken.bandkeep.yaml';
+
+/** Types at the end of a line that holds a text, as a person would: click it, go to its end, type. */
+async function typeAtEndOf(session: Session, text: string, typed: string): Promise<void> {
+  await session.page.locator('.view-line').getByText(text).first().click();
+  await session.page.keyboard.press('End');
+  await session.page.keyboard.type(typed);
+}
+
+describe('the panel on the screen', () => {
+  let session: Session;
+  let panel: Frame;
+  before(async () => {
+    session = await Session.start('screen');
+    await session.open(spec);
+  });
+  after(async () => {
+    await session.end();
+  });
+
+  it('opens by the button in the title bar and leaves the keyboard to the editor', async () => {
+    await session.page.locator('.view-line').getByText('bandkeep').first().click();
+    await session.clickPanelButton();
+    panel = await session.panel();
+    await typeAtEndOf(session, 'bearing-x:', ' # typed');
+    await session.page.locator('.view-line').getByText('# typed').first().waitFor();
+    for (const _ of ' # typed') await session.page.keyboard.press('Backspace');
+  });
+
+  it('names the channel and says how it stands', async () => {
+    assert.equal(await panel.locator('h1').textContent(), 'bearing-x');
+    assert.equal(await panel.locator('.verdict').getAttribute('data-standing'), 'over');
+    assert.ok((await panel.locator('canvas').count()) >= 2);
+  });
+
+  it('runs under a strict policy that nothing of it breaks', async () => {
+    const policy = await panel.locator('meta[http-equiv="Content-Security-Policy"]').getAttribute('content');
+    assert.match(policy ?? '', /^default-src 'none'; script-src 'nonce-[0-9a-f]{32}'; style-src [^']*;/);
+    assert.doesNotMatch(policy ?? '', /unsafe/);
+    assert.deepEqual(
+      session.complaints.filter((text) => text.includes('Content Security Policy') && text.includes('panel')),
+      [],
+    );
+  });
+
+  for (const theme of ['dark', 'light', 'high-contrast', 'high-contrast-light'] as const) {
+    it(`wears the editor's theme: ${themes[theme]}`, async () => {
+      await session.choose(theme);
+      panel = await session.panel();
+      const path = await session.picture(`gate-bearing-broken-${theme}`);
+      assert.ok(statSync(path).size > 20_000);
+    });
+  }
+
+  it('takes the reader from an item to its line', async () => {
+    await panel
+      .getByRole('button', { name: /line|drive hash/i })
+      .first()
+      .click();
+    await session.page.locator('.monaco-editor.focused').waitFor();
+  });
+
+  it('keeps its page over a save, and dims the last good picture while the channel is broken', async () => {
+    await session.page.keyboard.press('Escape');
+    await typeAtEndOf(session, 'bits: 16', ' x');
+    await session.page.keyboard.press('Control+s');
+    await panel.locator('body.stale').waitFor();
+    assert.match((await panel.locator('#notice').textContent()) ?? '', /bearing-x.*line \d+/);
+    await session.picture('gate-bearing-broken-stale');
+    for (const _ of ' x') await session.page.keyboard.press('Backspace');
+    await session.page.keyboard.press('Control+s');
+    await panel.locator('body:not(.stale)').waitFor();
+    assert.equal(await panel.locator('#notice').isVisible(), false);
+    assert.match(readFileSync(join(session.folder, spec), 'utf8'), /bits: 16\n/);
+  });
+
+  it('comes back after the window is reloaded', async () => {
+    await session.page.reload();
+    panel = await session.panel();
+    await panel.locator('h1').getByText('bearing-x').waitFor();
+  });
+});

@@ -1,0 +1,111 @@
+/** A person's session in the workbench: an example open, the panel a click away, the theme theirs to choose. */
+import { mkdirSync, rmSync } from 'node:fs';
+import { join } from 'node:path';
+import type { Browser, Frame, Page } from 'playwright-core';
+import { browse } from '../../../scripts/browse.mjs';
+import { scratchFolder } from '../../../scripts/scratch-folder.mjs';
+import {
+  installWorkbench,
+  startWorkbench,
+  workbenchAddress,
+  writeMachineSettings,
+  type Workbench,
+} from '../../../scripts/workbench.mjs';
+
+const root = join(__dirname, '..', '..', '..');
+
+/** The workbench's own themes that the panel is looked at in. */
+export const themes = {
+  dark: 'Default Dark Modern',
+  light: 'Default Light Modern',
+  'high-contrast': 'Default High Contrast',
+  'high-contrast-light': 'Default High Contrast Light',
+} as const;
+
+/** The class that a theme's kind puts on the body of a panel. */
+export const themeClasses: Record<keyof typeof themes, string> = {
+  dark: 'vscode-dark',
+  light: 'vscode-light',
+  'high-contrast': 'vscode-high-contrast',
+  'high-contrast-light': 'vscode-high-contrast-light',
+};
+
+/** A running workbench with a browser looking at it. */
+export class Session {
+  /** What the browser's console complained about. */
+  readonly complaints: string[] = [];
+
+  private constructor(
+    private readonly workbench: Workbench,
+    private readonly browser: Browser,
+    private readonly data: string,
+    readonly folder: string,
+    readonly page: Page,
+  ) {
+    page.on('console', (message) => {
+      if (message.type() === 'error') this.complaints.push(message.text());
+    });
+  }
+
+  /** Starts a workbench with fresh settings and a fresh copy of the examples. */
+  static async start(name: string): Promise<Session> {
+    await installWorkbench();
+    const data = join(root, 'out', 'scratch', `${name}-data`);
+    rmSync(data, { recursive: true, force: true });
+    const workbench = await startWorkbench({ data, settings: settingsFor('dark') });
+    const browser = await browse();
+    const page = await browser.newPage({ viewport: { width: 1500, height: 950 } });
+    return new Session(workbench, browser, data, scratchFolder(name), page);
+  }
+
+  /** Opens a spec and waits until its channel's line is on the screen. */
+  async open(file: string): Promise<void> {
+    await this.page.goto(workbenchAddress(this.workbench, { folder: this.folder, file: join(this.folder, file) }));
+    await this.page.locator('.view-lines').getByText('bandkeep', { exact: false }).first().waitFor();
+  }
+
+  /** Opens the panel by its button in the editor's title bar. */
+  async clickPanelButton(): Promise<void> {
+    await this.page.getByRole('button', { name: 'Show Panel to the Side' }).first().click();
+  }
+
+  /** The panel's own frame once it has drawn a plot. */
+  async panel(): Promise<Frame> {
+    const outer = await this.page.locator('iframe.webview.ready').last().elementHandle();
+    const inner = await (await outer.contentFrame())?.waitForSelector('iframe#active-frame');
+    const frame = await inner?.contentFrame();
+    if (!frame) throw new Error('The panel has no page.');
+    await frame.locator('canvas').first().waitFor();
+    return frame;
+  }
+
+  /** Changes the theme and waits until the panel has it. */
+  async choose(theme: keyof typeof themes): Promise<void> {
+    writeMachineSettings(this.data, settingsFor(theme));
+    await (await this.panel()).locator(`body.${themeClasses[theme]}`).waitFor();
+  }
+
+  /** Stores what is on the screen under test-results/screenshots. */
+  async picture(name: string): Promise<string> {
+    const folder = join(root, 'test-results', 'screenshots');
+    mkdirSync(folder, { recursive: true });
+    const path = join(folder, `${name}.png`);
+    await this.page.screenshot({ path });
+    return path;
+  }
+
+  async end(): Promise<void> {
+    await this.browser.close();
+    await this.workbench.stop();
+  }
+}
+
+function settingsFor(theme: keyof typeof themes): Record<string, unknown> {
+  return {
+    'workbench.colorTheme': themes[theme],
+    'workbench.secondarySideBar.defaultVisibility': 'hidden',
+    'workbench.tips.enabled': false,
+    'editor.minimap.enabled': false,
+    'chat.commandCenter.enabled': false,
+  };
+}
