@@ -16,11 +16,16 @@ export interface CornerBound {
   readonly sense: 'or less' | 'or more';
 }
 
+/** Two limits that no corner satisfies together: the finding's own, and the one in its way. */
+export interface CornerConflict {
+  readonly own: CornerBound;
+  readonly other: CornerBound;
+}
+
 /** What a search over one corner has found. */
 export interface CornerOutcome {
   readonly trial: Trial | null;
-  /** Where another limit is in the way: how far the finding's own limit and that one let the corner go. */
-  readonly conflict: { readonly own: CornerBound; readonly other: CornerBound } | null;
+  readonly conflict: CornerConflict | null;
 }
 
 const nothing: CornerOutcome = { trial: null, conflict: null };
@@ -70,7 +75,7 @@ function* sensible(walk: CornerWalk, edge: number): Generator<void, Trial | null
 const farthestRounding = 0.03;
 
 /** Both bounds on the corner, where the finding's limit is satisfied only behind the point at which another breaks. */
-function* conflictAt(session: Session, walk: CornerWalk, edge: number): Generator<void, CornerOutcome['conflict']> {
+function* conflictAt(session: Session, walk: CornerWalk, edge: number): Generator<void, CornerConflict | null> {
   const broken = yield* walk.nearest((trial) => trial.newErrors.length > 0);
   if (broken === null) return null;
   const breaking = yield* walk.at(broken);

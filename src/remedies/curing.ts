@@ -1,7 +1,7 @@
 /** The search for changes that cure a finding: single changes first, cheapest kind first, then two at once. */
 import { remediesOf, type Finding, type Judgement, type Store } from '../findings';
 import { formatDb, formatFrequency } from '../units/format';
-import { cornerSearch, type CornerBound, type CornerOutcome } from './corner';
+import { cornerSearch, type CornerBound, type CornerConflict, type CornerOutcome } from './corner';
 import type { Blocked, Cure, Fix } from './fix';
 import { orderTrial } from './order';
 import { rateTrials } from './rate';
@@ -33,10 +33,16 @@ export function* curing(judgement: Judgement, finding: Finding, store: Store): G
     ...corners.flatMap(({ trial }) => (trial === null ? [] : [trial])),
     ...(kinds.has('order') ? yield* orderTrials(session) : []),
   ];
-  const trials = singles.length > 0 ? singles : yield* pairTrials(session, kinds);
+  const sound = singles.filter(isSound);
+  const trials = sound.length > 0 ? sound : [...(yield* pairTrials(session, kinds)), ...singles];
   const fixes = inOrder(trials.map((trial) => fixOf(session, trial)));
   const blockedBy = fixes.length > 0 ? null : session.nearest;
   return { fixes, blockedBy, note: noteOf(corners, blockedBy), analyses: session.analyses };
+}
+
+/** A fix that takes another broken limit even further away leads round in circles; it is offered only where no other works. */
+function isSound(trial: Trial): boolean {
+  return trial.worsened.length === 0;
 }
 
 function* cornerOutcomes(session: Session): Generator<void, readonly CornerOutcome[]> {
@@ -60,15 +66,15 @@ function inOrder(fixes: readonly Fix[]): readonly Fix[] {
 function noteOf(corners: readonly CornerOutcome[], blockedBy: Blocked | null): string | null {
   const conflicts = corners.some(({ trial }) => trial !== null) ? [] : corners.flatMap(({ conflict }) => conflict ?? []);
   const [conflict] = conflicts;
-  const corner =
-    conflict === undefined ? [] : [`No corner alone does it: ${boundWords(conflict.own)}, ${boundWords(conflict.other)}.`];
+  const corner = conflict === undefined ? [] : [`No corner alone does it: ${conflictWords(conflict)}.`];
   const nearest = blockedBy === null ? [] : [blockedWords(blockedBy)];
   const words = [...corner, ...nearest].join(' ');
   return words === '' ? null : words;
 }
 
-function boundWords({ limit, hz, sense }: CornerBound): string {
-  return `the ${limit} limit asks for ${formatFrequency(hz)} ${sense}`;
+function conflictWords({ own, other }: CornerConflict): string {
+  const bound = ({ hz, sense }: CornerBound): string => `${formatFrequency(hz)} ${sense}`;
+  return `the ${own.limit} limit asks for ${bound(own)}, the ${other.limit} limit for ${bound(other)}`;
 }
 
 function blockedWords({ limit, misses, candidate }: Blocked): string {

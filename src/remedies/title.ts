@@ -1,6 +1,7 @@
 /** Titles of fixes: what changes, the margin it leaves, and what else it moves. */
 import type { Figures, LimitFigure } from '../analysis';
-import { decimalsFor, type Finding } from '../findings';
+import { decimalsFor, thinBelow, type Finding } from '../findings';
+import type { Channel } from '../spec';
 import { formatDb } from '../units/format';
 import { changesWords } from './change';
 import type { Fix } from './fix';
@@ -11,7 +12,7 @@ import type { Trial } from './trial';
 export function fixOf(session: Session, trial: Trial): Fix {
   const { finding } = session;
   const margin = finding.limit === null ? null : ownMargin(finding, trial.figures);
-  const leaves = leavesWords(trial);
+  const leaves = leavesWords(session, trial);
   const effect = effectWords(session, trial.figures);
   const title = `${changesWords(trial.changes)}${effect === '' ? '' : `: ${effect}`}${leaves === null ? '' : `; ${leaves}`}`;
   const [first] = trial.changes;
@@ -20,10 +21,10 @@ export function fixOf(session: Session, trial: Trial): Fix {
 }
 
 /** "alias margin 4.2 dB, flatness 0.22 dB": the margin that was asked for, then the limits that the change has moved. */
-function effectWords({ finding, figures }: Session, after: Figures | null): string {
+function effectWords({ finding, figures, channel }: Session, after: Figures | null): string {
   const limits = (after?.limits ?? []).filter((figure) => figure.judged && figure.margin !== null);
   const own = limits.find((figure) => figure.limit === finding.limit) ?? (finding.limit === null ? tightest(limits) : undefined);
-  const moved = limits.filter((figure) => figure !== own && isMoved(figure, figures));
+  const moved = limits.filter((figure) => figure !== own && isMoved(figure, figures, channel));
   return [...(own === undefined ? [] : [marginWords(own)]), ...moved.map(valueWords)].join(', ');
 }
 
@@ -31,12 +32,12 @@ function tightest(limits: readonly LimitFigure[]): LimitFigure | undefined {
   return [...limits].sort((a, b) => (a.margin ?? 0) - (b.margin ?? 0))[0];
 }
 
-/** Flatness is worth a word when it moves either way, any other limit when it has lost a noticeable part. */
-function isMoved(figure: LimitFigure, before: Figures): boolean {
+/** Flatness is worth a word when it moves either way, any other limit when it has lost and has little left to lose. */
+function isMoved(figure: LimitFigure, before: Figures, channel: Channel): boolean {
   const was = before.limits.find(({ limit }) => limit === figure.limit)?.margin ?? null;
   if (was === null || figure.margin === null) return false;
-  const gained = figure.margin - was;
-  return figure.limit === 'flatness' ? Math.abs(gained) >= 0.005 : gained <= -0.05;
+  if (figure.limit === 'flatness') return Math.abs(figure.margin - was) >= 0.005;
+  return figure.margin <= was - 0.05 && figure.margin < 3 * thinBelow(channel, figure);
 }
 
 function marginWords({ limit, margin }: LimitFigure): string {
@@ -48,14 +49,24 @@ function valueWords({ limit, value, unit, margin }: LimitFigure): string {
 }
 
 /** What a change leaves behind that was not there before, or null. */
-function leavesWords({ newWarnings, worsened }: Trial): string | null {
-  const warnings = newWarnings.map((finding) => `\`${finding.code}\`${aboutWords(finding)}`);
-  const worse = [...new Set(worsened.map((finding) => `${finding.limit ?? finding.code} even further from its limit`))];
-  const all = [...new Set(warnings), ...worse];
-  return all.length === 0 ? null : `leaves ${all.join(', ')}`;
+function leavesWords({ finding }: Session, { newWarnings, worsened }: Trial): string | null {
+  const warnings = newWarnings.map((warning) => warningWords(warning, finding.channel));
+  const worse = worsened.map(
+    (error) => `${error.limit ?? error.code} even further from its limit${elsewhere(error, finding.channel)}`,
+  );
+  const parts = [
+    ...(warnings.length === 0 ? [] : [`leaves a new warning (${[...new Set(warnings)].join(', ')})`]),
+    ...(worse.length === 0 ? [] : [`leaves ${[...new Set(worse)].join(', ')}`]),
+  ];
+  return parts.length === 0 ? null : parts.join('; ');
 }
 
-function aboutWords({ limit, channel }: Finding): string {
-  if (limit !== null) return ` (${limit}${channel === null ? '' : ` of \`${channel}\``})`;
-  return channel === null ? '' : ` (\`${channel}\`)`;
+function warningWords(warning: Finding, channel: string | null): string {
+  const words = warning.code === 'thin-margin' ? `thin ${warning.limit ?? ''} margin` : `\`${warning.code}\``;
+  return `${words}${elsewhere(warning, channel)}`;
+}
+
+/** Names the channel where it is not the one that the finding is in. */
+function elsewhere(finding: Finding, channel: string | null): string {
+  return finding.channel === null || finding.channel === channel ? '' : ` in \`${finding.channel}\``;
 }
