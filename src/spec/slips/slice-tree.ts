@@ -46,8 +46,9 @@ class SliceReader {
     let parsed = parseSlice(this.mended.text);
     if (this.admit(badIndents(this.mended.text, parsed))) parsed = parseSlice(this.mended.text);
     for (let round = 0; round < mostRounds; round += 1) {
-      const further =
-        parsed.error === null ? this.admitAll(slips(this.mended.text, parsed)) : this.admit(errorSlip(this.mended.text, parsed));
+      const slip = errorSlip(this.mended.text, parsed);
+      const further = slip === null ? this.admitAll(slips(this.mended.text, parsed)) : this.admit(slip);
+      this.guessed ||= slip?.certain === false;
       if (!further) break;
       parsed = parseSlice(this.mended.text);
     }
