@@ -25,8 +25,10 @@ export {
 } from './channel-path';
 export { worstPath, type Axis, type WorstPath, type WorstQuestion } from './worst-path';
 export { halfPowerHz } from './half-power';
+export { noiseBandwidthHz } from './noise-bandwidth';
 export { followsRate, pulseNulls, pulseSeconds } from './pulse';
 export { appearance } from './wanted';
 export { rateRange } from './tolerances';
+export { jitterNoiseDb, quantisationSnrDb } from '../signal/noise';
 export { foldFrequency, rateWindows, type Landing, type RateWindow } from '../signal/folding';
 export type { Enclosure, Response } from '../signal/response';
