@@ -6,6 +6,8 @@ export { completion } from './completion';
 export { diagnostics } from './diagnostics';
 export type { DiagnosticOptions } from './diagnostics';
 export { documentSymbols, flatSymbols } from './document-symbols';
+export { drawable } from './drawable';
+export type { Drawable } from './drawable';
 export { hover } from './hover';
 export { openSpec } from './live-spec';
 export type { LiveSpec, SpecCounts } from './live-spec';

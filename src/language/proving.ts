@@ -1,6 +1,6 @@
 /** Which findings still ask for a search for fixes. */
 import type { Range } from 'vscode-languageserver-types';
-import { kindOf, type Finding } from '../findings';
+import { remediesOf, type Finding } from '../findings';
 import type { SpecDocument } from './spec-document';
 import { findingsIn, offsetOf } from './text-range';
 
@@ -20,5 +20,5 @@ export function unprovedIn(document: SpecDocument, range: Range): Finding[] {
 
 /** Faults of the text carry their own cures, and an accepted finding asks for none. */
 export function isCurable(finding: Finding): boolean {
-  return finding.accepted === null && 'place' in finding.at && kindOf(finding.code).remedies.length > 0;
+  return finding.accepted === null && 'place' in finding.at && remediesOf(finding.code).length > 0;
 }

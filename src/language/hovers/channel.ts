@@ -1,6 +1,6 @@
 /** Hover of a channel's name: whether it passes, and each limit's margin. */
 import type { LimitFigure } from '../../analysis';
-import { formatDb, formatFrequency } from '../../units';
+import { formatDb, formatFrequency } from '../../units/format';
 import type { Answer, Row } from './answer';
 import type { Subject } from './subject';
 import { marginWords } from './words';

@@ -1,17 +1,14 @@
 /** Hovers of bits, full scale and jitter: the size of a step, and the noise that follows. */
-import { formatDb, formatTime, formatVoltage } from '../../units';
+import { jitterNoiseDb, quantisationSnrDb } from '../../analysis';
+import { formatDb, formatTime, formatVoltage } from '../../units/format';
 import { knownRows, type Answer } from './answer';
 import type { Subject } from './subject';
-
-/** dB for each bit of a full-scale sine over its quantisation noise, and the constant: 20·log10 2 and 10·log10 1.5. */
-const perBitDb = 20 * Math.log10(2);
-const sineOverStepDb = 10 * Math.log10(1.5);
 
 /** The converter's step and quantisation noise, or null where bits are not known. */
 export function bitsHover({ channel, figures }: Subject): Answer | null {
   const { bits, fullScaleVpp } = channel;
   if (bits === null) return fullScaleVpp === null ? null : fullScaleAnswer(fullScaleVpp);
-  const snrDb = perBitDb * bits + sineOverStepDb;
+  const snrDb = quantisationSnrDb(bits);
   const densityDb = -snrDb - 10 * Math.log10(figures.halfRate);
   const step = fullScaleVpp === null ? null : fullScaleVpp / 2 ** bits;
   return {
@@ -43,7 +40,7 @@ export function jitterHover({ channel, figures }: Subject): Answer | null {
   const both = Math.hypot(own, clock);
   if (both === 0) return { headline: 'No jitter', rows: [], formula: null };
   const { frequency } = figures.testTone;
-  const toneDb = -20 * Math.log10(2 * Math.PI * frequency * both);
+  const toneDb = -jitterNoiseDb(frequency, both);
   return {
     headline: `${formatTime(both)} rms in all: ${formatDb(toneDb)} signal to jitter noise`,
     rows: knownRows(

@@ -1,6 +1,6 @@
 /** What the declaration says of a key: what it holds, in which units, which words, and what holds without it. */
 import type { Key } from '../../spec';
-import { unitsOf } from '../../units';
+import { unitsOf } from '../../units/unit-table';
 
 /** Markdown that reads well as plain text too. */
 export function keyProse(name: string | null, key: Key): string {

@@ -1,6 +1,6 @@
 /** Hover of a level: the same level in every unit that the channel knows enough for. */
 import type { Channel, Path } from '../../spec';
-import { formatDb, formatVoltage } from '../../units';
+import { formatDb, formatVoltage } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { indexIn, type Subject } from './subject';
 

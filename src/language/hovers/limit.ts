@@ -1,6 +1,6 @@
 /** Hover of a limit: how it stands, and what contributes, strongest first. */
 import type { Figures, LimitFigure, NoiseFigures } from '../../analysis';
-import { formatDb, formatSignedPercent } from '../../units';
+import { formatDb, formatSignedPercent } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { levelRows } from './level';
 import type { Subject } from './subject';

@@ -1,5 +1,5 @@
 /** Hover of a clock's or a filter's name: its definition, and who uses it. */
-import { formatCount } from '../../units';
+import { formatCount } from '../../units/format';
 import { spanOf, type DefinedName } from '../../spec';
 import type { SpecDocument } from '../spec-document';
 import type { Answer } from './answer';

@@ -1,6 +1,6 @@
 /** Hover of an aperture or a hold: what its width takes from the band's edges, and where it passes nothing. */
 import { channelPath, gainDb, pulseNulls, pulseSeconds } from '../../analysis';
-import { formatDb, formatFrequency, formatPercent, formatTime } from '../../units';
+import { formatDb, formatFrequency, formatPercent, formatTime } from '../../units/format';
 import type { Answer, Row } from './answer';
 import type { Subject } from './subject';
 

@@ -1,6 +1,6 @@
 /** Hover of a rate: what it makes of the wanted band, how much room it has, and which other allowed rates pass. */
 import type { Figures } from '../../analysis';
-import { formatFrequency } from '../../units';
+import { formatFrequency } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { passingRates } from './passing-rates';
 import type { Subject } from './subject';

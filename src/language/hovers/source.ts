@@ -1,7 +1,7 @@
 /** Hover of an unwanted source: where it lands, at what level, and how far it may drift. */
 import type { AliasFigure, Figures } from '../../analysis';
 import type { Source } from '../../spec';
-import { formatDb, formatFrequency } from '../../units';
+import { formatDb, formatFrequency } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { freedomOf } from './free-frequencies';
 import { indexIn, type Subject } from './subject';

@@ -1,8 +1,17 @@
 /** Hover of a filter or one of its stages: where it cuts, what it costs the wanted band, what it takes from the first fold. */
-import { channelPath, gainDb, lossDb, pathDelay, type ChannelPath, type Figures, type StagePath } from '../../analysis';
-import { formatDb, formatFrequency, formatTime } from '../../units';
+import {
+  channelPath,
+  gainDb,
+  halfPowerHz,
+  lossDb,
+  noiseBandwidthHz,
+  pathDelay,
+  type ChannelPath,
+  type Figures,
+  type StagePath,
+} from '../../analysis';
+import { formatDb, formatFrequency, formatTime } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
-import { halfPowerHz } from './half-power';
 import { indexIn, type Subject } from './subject';
 
 /** The stage at the subject's path, or the whole filter where the path names none. */
@@ -49,6 +58,7 @@ function responseRows(response: PathResponse, figures: Figures): Row[] {
   const first = firstFoldHz(figures);
   return knownRows(
     ['half power at', formatHz(halfPowerHz(response))],
+    ['noise bandwidth', formatHz(noiseBandwidthHz(response))],
     [`gain at ${formatFrequency(figures.reference)}`, formatDb(gainDb(response, figures.reference), 'dB', 2)],
     [
       figures.direction === 'capture' ? 'loss at the first fold' : 'loss at the first image',

@@ -1,6 +1,6 @@
 /** Hover of a wanted band: where it appears, which way round, and what the path takes from its edges. */
 import { channelPath, gainDb, lossDb } from '../../analysis';
-import { formatDb, formatFrequency } from '../../units';
+import { formatDb, formatFrequency } from '../../units/format';
 import { knownRows, type Answer } from './answer';
 import { indexIn, type Subject } from './subject';
 import { bandWords, turnWords } from './words';

@@ -1,5 +1,5 @@
 /** Phrases that several hovers share. */
-import { formatDb, formatFrequency } from '../../units';
+import { formatDb, formatFrequency } from '../../units/format';
 
 /** "4.8 dB over the limit", "0.8 dB inside the limit". */
 export function marginWords(marginDb: number, decimals = 1): string {
