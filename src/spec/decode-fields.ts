@@ -28,6 +28,10 @@ export function decodeFields(
   }
   decide(map, home, first, problems);
   reportMissing(map, first, company, home, problems);
+  const clash = map.check?.(found) ?? null;
+  const blamed = clash === null ? undefined : first.get(clash.key);
+  if (clash !== null && blamed !== undefined)
+    problems.push(errorAt(blamed.value ?? keySpan(blamed), 'contradiction', clash.message));
   return found;
 }
 

@@ -26,7 +26,7 @@ export function decodeScalar(scalar: Scalar, node: ScalarNode): ScalarReading {
     const measured = decodeMeasured(scalar, node);
     if (measured !== null) return measured;
   }
-  if (scalar.name !== undefined) return { value: { name: text } };
+  if (scalar.name !== undefined) return { value: { refersTo: text } };
   if (scalar.text === true) return { value: text };
   return { fault: unknownWord(scalar, node) };
 }

@@ -66,6 +66,7 @@ function decodeList(list: List, node: ListNode, home: Home, problems: LocalProbl
   );
 }
 
+/** A name whose value has any fault maps to null: it exists, but nothing may be built on it. */
 function decodeEntries(map: Entries, node: MapNode, problems: LocalProblem[]): ReadonlyMap<string, unknown> {
   const found = new Map<string, unknown>();
   for (const pair of node.pairs) {
@@ -76,7 +77,9 @@ function decodeEntries(map: Entries, node: MapNode, problems: LocalProblem[]): R
       );
       continue;
     }
-    found.set(pair.key, walk(map.each, pair.value, { span, called: `\`${pair.key}\`` }, problems));
+    const before = problems.length;
+    const value = walk(map.each, pair.value, { span, called: `\`${pair.key}\`` }, problems);
+    found.set(pair.key, problems.length > before ? null : value);
   }
   return found;
 }

@@ -63,6 +63,15 @@ export interface Fields {
   readonly decidedBy?: readonly string[];
   /** A key that brings in whatever is missing, such as `like`. */
   readonly completedBy?: string;
+  /** What its values must hold between them; given the decoded map, where what is faulty is null. */
+  readonly check?: (model: Readonly<Record<string, unknown>>) => Clash | null;
+}
+
+/** Two values of one map that cannot hold together. */
+export interface Clash {
+  /** The key that is to blame. */
+  readonly key: string;
+  readonly message: string;
 }
 
 /** A map with free names: clocks, filters, channels. */
@@ -87,7 +96,7 @@ export interface Key {
 
 /** A name that is defined elsewhere. */
 export interface Named {
-  readonly name: string;
+  readonly refersTo: string;
 }
 
 /** Whole numbers from … to, both included. */

@@ -1,6 +1,7 @@
 /** The constructors that the declaration of the language is written with; the decoded types follow from them. */
 import type { Kind, Quantity, QuantityRange } from '../units/quantity';
 import type {
+  Clash,
   Direction,
   Fields,
   Key,
@@ -54,8 +55,12 @@ export const listOf = <T>(each: Shape<T>, atLeast = 0): Shape<readonly (T | null
 export const fields = <const F extends Readonly<Record<string, Key>>>(
   called: string,
   keys: F,
-  rules: Pick<Fields, 'decidedBy' | 'completedBy'> = {},
-): Shape<Model<F>> => ({ map: { fields: keys, called, ...rules } });
+  rules: Pick<Fields, 'decidedBy' | 'completedBy'> & { readonly check?: (model: Model<F>) => Clash | null } = {},
+): Shape<Model<F>> => {
+  const { check, ...others } = rules;
+  // The decoder hands a map of these keys to the check, so the model's type holds.
+  return { map: { fields: keys, called, ...others, ...(check && { check: (model) => check(model as Model<F>) }) } };
+};
 
 /** A map with free names. */
 export const entries = <T>(called: string, each: Shape<T>): Shape<ReadonlyMap<string, T | null>> => ({ map: { each, called } });

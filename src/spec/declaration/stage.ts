@@ -1,7 +1,11 @@
 /** Declares the stages of an analogue path, and `filters`, where stages get a name. */
 import { either, entries, fields, later, listOf, nameOf, quantity, text, tolerated, whole, within, word } from '../shapes';
-import type { TypeOf } from '../shape';
+import type { Quantity } from '../../units/quantity';
+import type { Clash, TypeOf } from '../shape';
 import { cornerShares, orders, ripples } from './bounds';
+
+/** Half the power, in dB. */
+const halfPowerDb = 10 * Math.log10(2);
 
 const family = word(
   {
@@ -85,6 +89,23 @@ const laterKeys = {
   build: later('The parts that the stage is made of.'),
 } as const;
 
+/** The part of a stage that its check needs. */
+interface FamilyStage {
+  readonly family?: string | null;
+  readonly 'corner-at'?: string | null;
+  readonly ripple?: Quantity | null;
+}
+
+function familyClash(stage: FamilyStage): Clash | null {
+  if (stage['corner-at'] === 'ripple' && stage.family === 'butterworth') {
+    return { key: 'corner-at', message: '`butterworth` has no ripple, so its corner is at `half-power`' };
+  }
+  const { ripple } = stage;
+  if (stage['corner-at'] === 'ripple' || stage['corner-at'] === null || !ripple || ripple.value <= halfPowerDb) return null;
+  const message = 'with more than 3.01 dB of ripple the half-power point lies inside the pass band: state `corner-at: ripple`';
+  return { key: 'ripple', message };
+}
+
 const stage = fields(
   'a stage',
   {
@@ -109,6 +130,7 @@ const stage = fields(
       'poles',
       'measured',
     ],
+    check: familyClash,
   },
 );
 

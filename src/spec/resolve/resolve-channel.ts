@@ -1,0 +1,126 @@
+/** Turns a decoded channel into the plain `Channel` of the analysis: names looked up, defaults applied, levels in dBFS. */
+import type { Channel } from '../channel';
+import type { ChannelModel } from '../declaration/channel';
+import type { Decoded } from '../decode';
+import { checkDirections, checkRequired } from './directions';
+import { mergeLike } from './like';
+import type { Merged } from './like';
+import { fullScaleVpp } from './levels';
+import type { Scale } from './levels';
+import { resolveLimits } from './limits';
+import { oneOrMany } from './one-or-many';
+import { resolvePulse } from './pulse';
+import { resolveRate, resolveRateChoices } from './rate';
+import { Report } from './report';
+import type { Lookup, Resolution, ResolveProblem } from './resolution';
+import { bandBetween, resolveSources } from './sources';
+import { resolveStages } from './stages';
+import { resolveReference, resolveTestTone, resolveWanted } from './wanted';
+
+/**
+ * Resolves one channel; never throws. Every fault is found, whatever else is faulty.
+ * @param own what the channel's own text decodes to
+ */
+export function resolveChannel(name: string, own: Decoded<ChannelModel>, lookup: Lookup): Resolution {
+  const report = new Report();
+  const merged = mergeLike(name, own.value ?? {}, lookup, report);
+  const direction = merged.model.direction ?? null;
+  if (own.value !== null && merged.complete) checkRequired(name, merged, report);
+  if (direction !== null) checkDirections(direction, merged, report);
+  const channel = direction === null ? null : partsOf(name, direction, merged.model, lookup, report);
+  const whole = own.problems.length === 0 && own.value !== null && report.clean;
+  return {
+    channel: whole ? channel : null,
+    direction,
+    ref: merged.model.ref ?? null,
+    problems: atHome(report.problems, merged, lookup),
+    uses: report.uses,
+    merged: merged.model,
+  };
+}
+
+function partsOf(
+  name: string,
+  direction: 'capture' | 'generate',
+  model: ChannelModel,
+  lookup: Lookup,
+  report: Report,
+): Channel | null {
+  const scale = scaleOf(model, report);
+  const wanted = model.wanted ? resolveWanted(model.wanted, scale, report) : null;
+  const unwanted = given(model.unwanted, [], (stated) => resolveSources(stated, scale, report));
+  const rate = model.rate ? resolveRate(model.rate, lookup, report) : null;
+  const rateChoices = given(model['rate-choices'], null, (stated) => resolveRateChoices(stated, lookup, report));
+  const stages = given(model.filter, [], (stated) => resolveStages(stated, lookup, report));
+  const stated = direction === 'capture' ? model.aperture : model.hold;
+  const pulse = stated === null ? null : resolvePulse(direction, stated, rate?.hz ?? null, report);
+  const limits = given(model.limits, [], resolveLimits);
+  const referenceHz = resolveReference(model.reference, wanted ?? [], report);
+  const testTone = resolveTestTone(model['test-tone'], wanted ?? [], scale, report);
+  if (!wanted || !unwanted || !rate || !stages || !pulse || !limits || referenceHz === null || testTone === null) return null;
+  return {
+    name,
+    direction,
+    ...plainParts(model),
+    fullScaleVpp: scale.fullScaleVpp ?? null,
+    wanted,
+    unwanted,
+    rate,
+    rateChoices,
+    stages,
+    pulse,
+    limits,
+    referenceHz,
+    testTone,
+    protect: protectedBands(model, (rate.hz / 2) * (1 + rate.tolerance.high)),
+  };
+}
+
+function scaleOf(model: ChannelModel, report: Report): Scale {
+  const stated = model['full-scale'];
+  return {
+    fullScaleVpp: stated ? fullScaleVpp(stated, ['full-scale'], report) : stated,
+    impedanceOhm: model.impedance ? model.impedance.value : model.impedance,
+  };
+}
+
+function given<T, R>(stated: T | null | undefined, absent: R, resolve: (stated: T) => R | null): R | null {
+  if (stated === undefined) return absent;
+  return stated === null ? null : resolve(stated);
+}
+
+type PlainParts = Pick<Channel, 'ref' | 'guardHz' | 'levelsAt' | 'impedanceOhm' | 'jitterSeconds' | 'bits'>;
+
+function plainParts(model: ChannelModel): PlainParts {
+  return {
+    ref: model.ref ?? null,
+    guardHz: model.guard?.value ?? 0,
+    levelsAt: model['levels-at'] ?? 'input',
+    impedanceOhm: model.impedance?.value ?? null,
+    jitterSeconds: model.jitter?.value ?? 0,
+    bits: model.bits ?? null,
+  };
+}
+
+/** After sampling nothing stands above half the rate, so an open end stops there. */
+function protectedBands(model: ChannelModel, highestHz: number): Channel['protect'] {
+  if (!model.protect) return null;
+  const ranges = oneOrMany(model.protect).flatMap((range) => (range === null ? [] : [bandBetween(range)]));
+  return ranges.map(({ lowHz, highHz }) => ({ lowHz, highHz: highHz === Infinity ? Math.max(lowHz, highestHz) : highHz }));
+}
+
+/**
+ * A fault in something that `like` brought stands in another channel's text. If that channel is faulty itself it says so
+ * there; if not, it is the combination that is at fault, and this channel's `like` is the place to say so.
+ */
+function atHome(problems: readonly ResolveProblem[], { inherited, from }: Merged, lookup: Lookup): readonly ResolveProblem[] {
+  if (from === null) return problems;
+  const base = lookup.resolution(from);
+  const baseIsWhole = base !== undefined && base.channel !== null;
+  return problems.flatMap((problem) => {
+    if (!inherited.has(String(problem.path[0]))) return [problem];
+    if (!baseIsWhole) return [];
+    const message = `${problem.message} (\`${problem.path.join('.')}\` comes from \`${from}\`)`;
+    return [{ ...problem, path: ['like'], part: 'value' as const, message, cures: [] }];
+  });
+}
