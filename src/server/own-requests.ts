@@ -1,6 +1,6 @@
 /** Our own requests: the panel's picture, from a place to its line and back, and the counts of work. */
 import type { Connection } from 'vscode-languageserver';
-import { channelAt, locate, placeNameAt, type SpecDocument } from '../language';
+import { drawable, locate, placeNameAt, type Drawable, type SpecDocument } from '../language';
 import { pictureOf } from '../pictures';
 import { isCountsParams, isLocateParams, isPictureParams, isPlaceAtParams } from '../protocol/request-guards';
 import {
@@ -28,7 +28,7 @@ export function answerOwn(connection: Connection, state: ServerState): void {
     const document = await specs.judged(uri);
     refuseIfCancelled(token);
     if (document === null) return { kind: 'none', version: 0, channel: null, reason: 'This file is not open.' };
-    return pictureFor(document, channel ?? (position && channelAt(document, position)));
+    return pictureFor(document, drawable(document, channel, position));
   });
   connection.onRequest(locateRequest, async (params: LocateParams): Promise<LocateResult> => {
     const { uri, place } = check(params, isLocateParams);
@@ -47,4 +47,9 @@ export function answerOwn(connection: Connection, state: ServerState): void {
     const counts = specs.get(uri)?.counts ?? null;
     return document && counts && { version: document.version, ...counts };
   });
+}
+
+function pictureFor({ version, judgement }: SpecDocument, drawn: Drawable): PictureResult {
+  if (drawn.kind === 'none') return { ...drawn, version };
+  return { kind: 'picture', version, picture: pictureOf(judgement, drawn.channel) };
 }

@@ -12,79 +12,95 @@ interface Search {
 }
 
 /** The proofs of all open specs. */
-export interface Proofs {
+export class Proofs {
+  /** What is left to prove of each document. */
+  private readonly queues = new WeakMap<SpecDocument, Set<Finding>>();
+  private readonly running = new Map<Finding, Promise<void>>();
+  /** What requests wait for; the background makes way for it. */
+  private readonly awaited = new Set<Finding>();
+  private looked: { readonly uri: string; readonly position: Position } | null = null;
+  private awake = false;
+
+  /** `report` hears of a search that failed; it is not tried again on the same version. */
+  constructor(
+    private readonly specs: OpenSpecs,
+    private readonly platform: Platform,
+    private readonly report: (fault: unknown) => void,
+  ) {}
+
   /** Goes on proving whatever is open; called when something may have become provable. */
-  wake(): void;
+  wake(): void {
+    if (!this.awake && this.awaited.size === 0) void this.work();
+  }
+
   /** Remembers where the user is. */
-  lookAt(uri: string, position: Position): void;
+  lookAt(uri: string, position: Position): void {
+    this.looked = { uri, position };
+  }
+
   /** Proves these findings now, ahead of everything else, until a newer version or the caller's cancellation comes. */
-  prove(document: SpecDocument, findings: readonly Finding[], cancelled: () => boolean): Promise<void>;
-}
-
-/** Proofs for these specs; `report` hears of a search that failed, which is not tried again on the same version. */
-export function createProofs(specs: OpenSpecs, platform: Platform, report: (fault: unknown) => void): Proofs {
-  const queues = new WeakMap<SpecDocument, Set<Finding>>();
-  let looked: { readonly uri: string; readonly position: Position } | null = null;
-  let urgent = 0;
-  let awake = false;
-
-  const queueOf = (document: SpecDocument): Set<Finding> => {
-    const queue = queues.get(document) ?? new Set(unproved(document));
-    queues.set(document, queue);
-    return queue;
-  };
-
-  const search = async ({ document, finding }: Search, cancelled: () => boolean): Promise<void> => {
-    const spec = specs.get(document.uri);
-    if (spec === undefined) return;
-    const dropped = (): boolean => cancelled() || !specs.isNewest(document);
-    try {
-      const outcome = await runInSlices(spec.curing(document, finding), { ...platform, cancelled: dropped });
-      if (outcome.kind === 'done') queueOf(document).delete(finding);
-    } catch (fault) {
-      queueOf(document).delete(finding);
-      report(fault);
+  async prove(document: SpecDocument, findings: readonly Finding[], cancelled: () => boolean): Promise<void> {
+    const over = (): boolean => cancelled() || !this.specs.isNewest(document);
+    const queue = this.queueOf(document);
+    for (const finding of findings) queue.add(finding);
+    for (const finding of findings) {
+      this.awaited.add(finding);
+      // Another request may have begun the same search and been cancelled, so it is asked for until it is made.
+      while (queue.has(finding) && !over()) await this.search({ document, finding }, cancelled);
+      this.awaited.delete(finding);
     }
-  };
+    this.wake();
+  }
 
-  const next = (): Search | null => {
-    const inOrder = [...specs.all()].sort((a, b) => Number(b.uri === looked?.uri) - Number(a.uri === looked?.uri));
+  private async work(): Promise<void> {
+    this.awake = true;
+    await this.platform.yieldControl();
+    for (let job = this.next(); job !== null && this.awaited.size === 0; job = this.next()) {
+      const { finding } = job;
+      await this.search(job, () => this.awaited.size > 0 && !this.awaited.has(finding));
+      await this.platform.yieldControl();
+    }
+    this.awake = false;
+  }
+
+  private next(): Search | null {
+    const { looked } = this;
+    const inOrder = [...this.specs.all()].sort((a, b) => Number(b.uri === looked?.uri) - Number(a.uri === looked?.uri));
     for (const { document } of inOrder) {
       if (document === null) continue;
       const near = looked?.uri === document.uri ? channelAt(document, looked.position) : null;
-      const queue = [...queueOf(document)];
+      const queue = [...this.queueOf(document)];
       const finding = queue.find((candidate) => candidate.channel === near) ?? queue[0];
       if (finding !== undefined) return { document, finding };
     }
     return null;
-  };
+  }
 
-  const work = async (): Promise<void> => {
-    awake = true;
-    await platform.yieldControl();
-    for (let job = next(); job !== null && urgent === 0; job = next()) {
-      await search(job, () => urgent > 0);
-      await platform.yieldControl();
+  private queueOf(document: SpecDocument): Set<Finding> {
+    const queue = this.queues.get(document) ?? new Set(unproved(document));
+    this.queues.set(document, queue);
+    return queue;
+  }
+
+  /** Makes a search, or joins the one that is being made. */
+  private async search(search: Search, cancelled: () => boolean): Promise<void> {
+    const { finding } = search;
+    const end = this.running.get(finding) ?? this.begin(search, cancelled);
+    this.running.set(finding, end);
+    await end;
+    this.running.delete(finding);
+  }
+
+  private async begin({ document, finding }: Search, cancelled: () => boolean): Promise<void> {
+    const spec = this.specs.get(document.uri);
+    if (spec === undefined) return;
+    const dropped = (): boolean => cancelled() || !this.specs.isNewest(document);
+    try {
+      const outcome = await runInSlices(spec.curing(document, finding), { ...this.platform, cancelled: dropped });
+      if (outcome.kind === 'done') this.queueOf(document).delete(finding);
+    } catch (fault) {
+      this.queueOf(document).delete(finding);
+      this.report(fault);
     }
-    awake = false;
-  };
-
-  const wake = (): void => {
-    if (!awake && urgent === 0) void work();
-  };
-
-  return {
-    wake,
-    lookAt(uri, position) {
-      looked = { uri, position };
-    },
-    async prove(document, findings, cancelled) {
-      urgent += 1;
-      for (const finding of findings) {
-        if (!cancelled()) await search({ document, finding }, cancelled);
-      }
-      urgent -= 1;
-      wake();
-    },
-  };
+  }
 }

@@ -14,7 +14,7 @@ import { answerEditor } from './editor-requests';
 import { createOpenSpecs } from './open-specs';
 import { answerOwn } from './own-requests';
 import type { Platform } from './platform';
-import { createProofs } from './proofs';
+import { Proofs } from './proofs';
 import type { ServerState } from './server-state';
 
 /** Registers everything the server answers and starts listening. */
@@ -23,7 +23,7 @@ export function startServer(connection: Connection, platform: Platform): void {
     connection.console.error(fault instanceof Error ? (fault.stack ?? fault.message) : String(fault));
   };
   const specs = createOpenSpecs(platform);
-  const state: ServerState = { profile: plainClient, specs, proofs: createProofs(specs, platform, report) };
+  const state: ServerState = { profile: plainClient, specs, proofs: new Proofs(specs, platform, report) };
 
   connection.onInitialize((params) => {
     state.profile = profileOf(params);
