@@ -35,9 +35,16 @@ function familyForm({ form }: Stage): FamilyForm | null {
 /** The shortest name that tells the stage from the others that a fix could mean. */
 function stageWords(stage: Stage, family: readonly Stage[]): string {
   if (stage.name !== null) return `\`${stage.name}\``;
-  const comma = stage.label.lastIndexOf(', stage ');
-  const filter = comma < 0 ? null : stage.label.slice(0, comma);
+  const { filter, number } = partsOf(stage.label);
   if (filter === null) return family.length === 1 ? 'the filter' : stage.label;
-  const alone = family.filter((other) => other.name === null && other.label.startsWith(`${filter}, stage `)).length === 1;
-  return alone ? `\`${filter}\`` : `\`${filter}\`${stage.label.slice(comma)}`;
+  const alike = family.filter((other) => other.name === null && partsOf(other.label).filter === filter);
+  return alike.length === 1 || number === null ? `\`${filter}\`` : `\`${filter}\`, stage ${number}`;
+}
+
+/** A label is "stage 2" in place, "pick-up guard, stage 2" in a named filter, or that filter's name where it has one stage. */
+function partsOf(label: string): { readonly filter: string | null; readonly number: string | null } {
+  const parts = /^(?:(?<filter>.*), )?stage (?<number>\d+)$/su.exec(label)?.groups;
+  return parts === undefined
+    ? { filter: label, number: null }
+    : { filter: parts['filter'] ?? null, number: parts['number'] ?? null };
 }

@@ -19,6 +19,10 @@ describe('the stages that a fix may change', () => {
     assert.deepEqual(named(amplifier, family, second), ['`pick-up guard`, stage 2', '`pick-up guard`, stage 3']);
   });
 
+  it('go by the name of a filter that is one stage', () => {
+    assert.deepEqual(named(stage(butterworthForm(4, 14e3), { label: 'pick-up guard' })), ['`pick-up guard`']);
+  });
+
   it('go by their own name where they have one', () => {
     assert.deepEqual(named({ ...family, name: 'knee' }), ['`knee`']);
   });
