@@ -4,6 +4,7 @@ import { chebyshev } from '../../../src/signal/families/chebyshev';
 import { realPole } from '../../../src/signal/families/real-pole';
 import { filterResponse, type Filter, type Root } from '../../../src/signal/filter';
 import { rectangleResponse } from '../../../src/signal/pulses/rectangle';
+import type { Response } from '../../../src/signal/response';
 import { constantResponse, inverse, product } from '../../../src/signal/response-algebra';
 import { largestOverBands, largestOverFolds, type Extreme, type FoldQuestion } from '../../../src/signal/search';
 import { stretched } from '../../../src/signal/stretched';
@@ -259,14 +260,14 @@ function approachedAtInfinity(): HardCase {
     rateHz: 100e3,
     band: [1e3, 20e3],
     lastFold: 5000,
-    power: (f) => 1 / (1 + power(f) * 1e-3),
+    power: (f) => 1 / (1 + power(f)),
     question: { ...everything, outer: saturating(filterResponse(filter)), bands: enclosure([1e3, 20e3]) },
   });
 }
 
-/** 1/√(1 + |H|²/1000): rises towards 1 as H falls away. */
-function saturating(response: ReturnType<typeof filterResponse>): ReturnType<typeof filterResponse> {
-  const turned = (logGain: number): number => -0.5 * Math.log1p(Math.exp(2 * logGain) * 1e-3);
+/** 1/√(1 + |H|²): rises towards 1 as H falls away. */
+export function saturating(response: Response): Response {
+  const turned = (logGain: number): number => -0.5 * Math.log1p(Math.exp(2 * logGain));
   return {
     logGain: (f) => turned(response.logGain(f)),
     bounds: (low, high) => {
@@ -275,8 +276,8 @@ function saturating(response: ReturnType<typeof filterResponse>): ReturnType<typ
     },
     slope: (low, high) => {
       const slope = response.slope(low, high);
-      const share = Math.exp(2 * response.bounds(low, high).high) * 1e-3;
-      // d/df = −|H|²/1000/(1 + |H|²/1000)·d ln|H|/df, a factor between −1 and 0.
+      const share = Math.exp(2 * response.bounds(low, high).high);
+      // d/df = −|H|²/(1 + |H|²)·d ln|H|/df, a factor between −1 and 0.
       const factor = share / (1 + share);
       return slope === null ? null : { low: Math.min(-slope.high * factor, 0), high: Math.max(-slope.low * factor, 0) };
     },
