@@ -23,13 +23,16 @@ export function fixOf(session: Session, trial: Trial): Fix {
 /** "alias margin 4.2 dB, flatness 0.22 dB": the margin that was asked for, then the limits that the change has moved. */
 function effectWords({ finding, figures, channel }: Session, after: Figures | null): string {
   const limits = (after?.limits ?? []).filter((figure) => figure.judged && figure.margin !== null);
-  const own = limits.find((figure) => figure.limit === finding.limit) ?? (finding.limit === null ? tightest(limits) : undefined);
+  const own =
+    limits.find((figure) => figure.limit === finding.limit) ?? (finding.limit === null ? tightest(limits, channel) : undefined);
   const moved = limits.filter((figure) => figure !== own && isMoved(figure, figures, channel));
   return [...(own === undefined ? [] : [marginWords(own)]), ...moved.map(valueWords)].join(', ');
 }
 
-function tightest(limits: readonly LimitFigure[]): LimitFigure | undefined {
-  return [...limits].sort((a, b) => (a.margin ?? 0) - (b.margin ?? 0))[0];
+/** The limit with the least left of the margin it should have. */
+function tightest(limits: readonly LimitFigure[], channel: Channel): LimitFigure | undefined {
+  const share = (figure: LimitFigure): number => (figure.margin ?? 0) / Math.max(thinBelow(channel, figure), 1e-9);
+  return [...limits].sort((a, b) => share(a) - share(b))[0];
 }
 
 /** Flatness is worth a word when it moves either way, any other limit when it has lost and has little left to lose. */
