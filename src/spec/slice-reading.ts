@@ -36,9 +36,15 @@ export interface SliceReading {
   readonly clocks: readonly Named<ClockModel>[];
   readonly filters: readonly Named<StagesModel>[];
   readonly channels: readonly Named<ChannelModel>[];
-  readonly problems: readonly LocalProblem[];
+  readonly problems: readonly OwnedProblem[];
   /** Whether names that seem to be missing may stand in what was passed over. */
   readonly lossy: boolean;
+}
+
+/** A problem and the channel whose text it stands in. */
+export interface OwnedProblem {
+  readonly problem: LocalProblem;
+  readonly channel: string | null;
 }
 
 /** What an earlier reading knows of a name, so that an unchanged one keeps its value's identity. */
@@ -75,26 +81,36 @@ class SliceReader {
     const { tree, lossy } = this.parsed;
     const pairs = tree?.form === 'map' ? tree.pairs : [];
     for (const pair of pairs) this.section(pair);
-    const named = [...this.clocks, ...this.filters, ...this.channels].flatMap(({ decoded }) => decoded.problems);
     return {
       pairs,
       title: this.title,
       clocks: this.clocks,
       filters: this.filters,
       channels: this.channels,
-      // A fault inside an entry stands in the list of both.
-      problems: [...new Set([...this.faults, ...this.sections, ...named])].filter((problem) => problem !== doubt),
+      problems: this.owned(),
       lossy: lossy || this.slice.doubtful,
     };
+  }
+
+  /** All problems, each with its channel: in a channel's slice that one, else the one whose value holds it. */
+  private owned(): OwnedProblem[] {
+    const channels = new Map<LocalProblem, string>();
+    for (const { name, decoded } of this.channels) for (const problem of decoded.problems) channels.set(problem, name);
+    const owner = this.slice.kind === 'channel' ? (this.channels[0]?.name ?? null) : null;
+    const named = [...this.clocks, ...this.filters, ...this.channels].flatMap(({ decoded }) => decoded.problems);
+    // A fault inside an entry stands in the list of both.
+    const problems = [...new Set([...this.faults, ...this.sections, ...named])].filter((problem) => problem !== doubt);
+    return problems.map((problem) => ({ problem, channel: channels.get(problem) ?? owner }));
   }
 
   /** One key of the file with its value. */
   private section(pair: Pair): void {
     const { key, value } = pair;
     if (value?.form === 'map') {
-      if (key === 'clocks') return this.entries(value, clock, (name) => this.known.clock(name), this.clocks);
-      if (key === 'filters') return this.entries(value, stages, (name) => this.known.filter(name), this.filters);
-      if (key === 'channels') return this.entries(value, channel, (name) => this.known.channel(name), this.channels);
+      if (key === 'clocks') this.entries(value, clock, (name) => this.known.clock(name), this.clocks);
+      if (key === 'filters') this.entries(value, stages, (name) => this.known.filter(name), this.filters);
+      if (key === 'channels') this.entries(value, channel, (name) => this.known.channel(name), this.channels);
+      if (key === 'clocks' || key === 'filters' || key === 'channels') return;
     }
     // The channels themselves may stand in slices of their own.
     if (key === 'channels' && value === null) return;

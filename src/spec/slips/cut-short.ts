@@ -12,7 +12,7 @@ export function* cutShort(text: string, tree: TreeNode | null): Generator<Fault>
   for (const { node, pair } of scalars(tree)) {
     if (node.quoted || /^[|>]/.test(text.charAt(node.start))) continue;
     const isText = /^[^\d.+−±-]/.test(node.text) || (pair !== null && freeText.has(pair.key));
-    if (!isText || !/^[ \t]+#[^\s#]/.test(text.slice(node.end, node.end + 80))) continue;
+    if (!isText || !/^[ \t]+#(?!bandkeep:)[^\s#]/.test(text.slice(node.end, node.end + 80))) continue;
     yield cutAt(text, node.start, node.end);
   }
 }

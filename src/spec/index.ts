@@ -1,0 +1,8 @@
+/** The spec layer as the other layers see it: text in, a reading out, and ways from places to spans and edits. */
+export type { Acceptance, ChannelEntry, DefinedName, Edit, Problem, ProblemCode, Reading } from './reading';
+export type { Place, Path, Span } from './place';
+export type { LineIndex } from './line-index';
+export { lineIndexOf } from './inside';
+export { read } from './read';
+export { exists, spanOf } from './spans';
+export { declaration } from './declaration/top-level';

@@ -1,0 +1,97 @@
+/** A reading with what the spec layer itself keeps of it: slices, names, resolutions; other layers see only `Reading`. */
+import type { ChannelModel } from './declaration/channel';
+import type { ClockModel } from './declaration/clock';
+import type { StagesModel } from './declaration/stage';
+import { lineIndex } from './line-index';
+import type { LineIndex } from './line-index';
+import type { Reading } from './reading';
+import type { NameLists, Resolved } from './resolver';
+import type { Named, SliceReading } from './slice-reading';
+import type { Slice } from './slices/slice';
+
+/** A slice at its place in the file. */
+export interface PlacedSlice {
+  readonly slice: Slice;
+  readonly reading: SliceReading;
+}
+
+/** A clock, a filter or a channel at its place in the file. */
+export interface PlacedName<T> {
+  readonly named: Named<T>;
+  /** Offset in the file that the offsets of its tree count from. */
+  readonly base: number;
+  /** A second one has the same name. */
+  readonly twice: boolean;
+}
+
+/** The names of a file by space; of two alike the first. */
+export interface Names {
+  readonly clocks: ReadonlyMap<string, PlacedName<ClockModel>>;
+  readonly filters: ReadonlyMap<string, PlacedName<StagesModel>>;
+  readonly channels: ReadonlyMap<string, PlacedName<ChannelModel>>;
+}
+
+/** What the spec layer keeps. */
+export interface Inside {
+  readonly slices: readonly PlacedSlice[];
+  /** Slices by all that decides what they read as. */
+  readonly byText: ReadonlyMap<string, SliceReading>;
+  readonly names: Names;
+  readonly lists: NameLists;
+  readonly resolved: ReadonlyMap<string, Resolved>;
+}
+
+/** A reading as `read` makes it. */
+export class SpecReading implements Reading {
+  readonly text: string;
+  readonly title: string | null;
+  readonly entries: Reading['entries'];
+  readonly names: Reading['names'];
+  readonly problems: Reading['problems'];
+  readonly acceptances: Reading['acceptances'];
+  readonly counts: Reading['counts'];
+  private index: LineIndex | null = null;
+
+  constructor(
+    shown: Reading,
+    readonly inside: Inside,
+  ) {
+    this.text = shown.text;
+    this.title = shown.title;
+    this.entries = shown.entries;
+    this.names = shown.names;
+    this.problems = shown.problems;
+    this.acceptances = shown.acceptances;
+    this.counts = shown.counts;
+  }
+
+  /** Made when it is first asked for, and kept. */
+  get lines(): LineIndex {
+    this.index ??= lineIndex(this.text);
+    return this.index;
+  }
+}
+
+/** What the spec layer keeps of a reading; throws RangeError for one that `read` has not made. */
+export function insideOf(reading: Reading): Inside {
+  return ownReading(reading).inside;
+}
+
+/** The line index of a reading's text. */
+export function lineIndexOf(reading: Reading): LineIndex {
+  return ownReading(reading).lines;
+}
+
+function ownReading(reading: Reading): SpecReading {
+  if (!(reading instanceof SpecReading)) throw new RangeError('a reading that `read` has not made');
+  return reading;
+}
+
+/** What there is before anything has been read. */
+export const nothingRead: Inside = {
+  slices: [],
+  byText: new Map(),
+  names: { clocks: new Map(), filters: new Map(), channels: new Map() },
+  lists: { clocks: [], filters: [], channels: [] },
+  resolved: new Map(),
+};
