@@ -10,12 +10,17 @@ import { installWorkbench, startWorkbench, workbenchAddress } from './workbench.
 const example = 'gate-bearing-broken.bandkeep.yaml';
 
 requireNode();
-await installPackages();
-await buildBundles();
 const folder = scratchFolder('start');
-const code = process.argv.includes('--workbench') || process.env.CI ? null : installedCode();
-if (code === null) await serve();
-else await openDesktop(code);
+try {
+  await installPackages();
+  await buildBundles();
+  const code = process.argv.includes('--workbench') || process.env.CI ? null : installedCode();
+  if (code === null) await serve();
+  else await openDesktop(code);
+} catch (error) {
+  console.error(error.message);
+  process.exitCode = 1;
+}
 
 function installedCode() {
   const names = process.platform === 'win32' ? ['code.cmd'] : ['code'];

@@ -13,6 +13,11 @@ async function typeAtEndOf(session: Session, text: string, typed: string): Promi
   await session.page.keyboard.type(typed);
 }
 
+/** Takes back what was typed last. */
+async function erase(session: Session, typed: string): Promise<void> {
+  for (let left = typed.length; left > 0; left -= 1) await session.page.keyboard.press('Backspace');
+}
+
 describe('the panel on the screen', () => {
   let session: Session;
   let panel: Frame;
@@ -30,7 +35,7 @@ describe('the panel on the screen', () => {
     panel = await session.panel();
     await typeAtEndOf(session, 'bearing-x:', ' # typed');
     await session.page.locator('.view-line').getByText('# typed').first().waitFor();
-    for (const _ of ' # typed') await session.page.keyboard.press('Backspace');
+    await erase(session, ' # typed');
   });
 
   it('names the channel and says how it stands', async () => {
@@ -73,7 +78,7 @@ describe('the panel on the screen', () => {
     await panel.locator('body.stale').waitFor();
     assert.match((await panel.locator('#notice').textContent()) ?? '', /bearing-x.*line \d+/);
     await session.picture('gate-bearing-broken-stale');
-    for (const _ of ' x') await session.page.keyboard.press('Backspace');
+    await erase(session, ' x');
     await session.page.keyboard.press('Control+s');
     await panel.locator('body:not(.stale)').waitFor();
     assert.equal(await panel.locator('#notice').isVisible(), false);
