@@ -25,6 +25,8 @@ export function analyse(channel: Channel): Figures {
   const noise = noiseOf(channel, path, limitOf(channel, 'snr'));
   const headroom = headroomOf(channel, path);
   const rate = channel.rate.hz;
+  const shared = commonZone(wanted);
+  // Written out: spreading objects here took longer than the searches.
   return {
     name: channel.name,
     direction: channel.direction,
@@ -32,7 +34,8 @@ export function analyse(channel: Channel): Figures {
     rate,
     outputRate: rate,
     halfRate: rate / 2,
-    ...commonZone(wanted),
+    zone: shared?.zone ?? null,
+    inverted: shared?.inverted ?? null,
     reference: channel.referenceHz,
     rateWindow: rateWindow(channel),
     wanted,
@@ -51,17 +54,21 @@ export function analyse(channel: Channel): Figures {
     snr: noise.snrDb,
     // Distortion and interleave products do not exist yet, so nothing sets the two apart.
     sinad: noise.snrDb,
-    ...effectiveBits(noise.snrDb, noise.toneDb),
+    enob: effectiveBits(noise.snrDb),
+    enobFullScale: noise.snrDb === null ? null : effectiveBits(noise.snrDb - noise.toneDb),
     headroom: headroom?.valueDb ?? null,
     faults: samplingFaults(channel),
     overlaps: channel.direction === 'capture' ? overlapsOf(channel) : [],
-    evaluations: [aliases, images, flatness, delay, noise, headroom].reduce((sum, one) => sum + (one?.evaluations ?? 0), 0),
+    evaluations: totalOf([aliases, images, flatness, delay, noise, headroom]),
   };
 }
 
-/** The zone that all wanted bands share; null where they do not. */
-function commonZone(wanted: readonly WantedFigure[]): Pick<Figures, 'zone' | 'inverted'> {
+/** A band of the zone that all wanted bands share; null where they do not. */
+function commonZone(wanted: readonly WantedFigure[]): WantedFigure | null {
   const [first] = wanted;
-  const shared = first !== undefined && wanted.every((band) => band.zone === first.zone);
-  return shared ? { zone: first.zone, inverted: first.inverted } : { zone: null, inverted: null };
+  return first !== undefined && wanted.every((band) => band.zone === first.zone) ? first : null;
+}
+
+function totalOf(parts: readonly ({ readonly evaluations: number } | null)[]): number {
+  return parts.reduce((sum, part) => sum + (part?.evaluations ?? 0), 0);
 }

@@ -28,12 +28,12 @@ export function flatnessOf(channel: Channel, path: ChannelPath): Flatness | null
   const plain = nominalPath(path, referenceHz);
   const nominal = departure(channel, plain, plain);
   if (nominal === null) return null;
-  const nominalDb = toDb(nominal.extreme.logGain);
-  if (!partsVary(channel)) return figureOf(nominal, nominalDb, nominal.extreme.evaluations);
+  const nominalDb = toDb(nominal.logGain);
+  if (!partsVary(channel)) return figureOf(nominal, nominalDb, nominal.evaluations);
   const most = worstPath(path, { sense: 'largest', referenceHz, axis: 'hertz' });
   const least = worstPath(path, { sense: 'smallest', referenceHz, axis: 'hertz' });
   const worst = departure(channel, most, least) ?? nominal;
-  return figureOf(worst, nominalDb, nominal.extreme.evaluations + worst.extreme.evaluations);
+  return figureOf(worst, nominalDb, nominal.evaluations + worst.evaluations);
 }
 
 /** Loss in dB from the reference to the top wanted edge; a gain counts negative. Null without a wanted band. */
@@ -43,8 +43,7 @@ export function droopOf(channel: Channel, path: ChannelPath): number | null {
   return lossDb(path.total, top, channel.referenceHz);
 }
 
-interface Departure {
-  readonly extreme: Extreme;
+interface Departure extends Extreme {
   readonly path: WorstPath;
 }
 
@@ -54,20 +53,24 @@ function departure(channel: Channel, most: WorstPath, least: WorstPath): Departu
   const rise = largestOverBands(most.response, bands);
   const loss = largestOverBands(inverse(least.response), bands);
   if (rise === null || loss === null) return null;
-  const evaluations = rise.evaluations + loss.evaluations;
-  return loss.logGain >= rise.logGain
-    ? { extreme: { ...loss, evaluations }, path: least }
-    : { extreme: { ...rise, evaluations }, path: most };
+  const worst = loss.logGain >= rise.logGain ? loss : rise;
+  return {
+    logGain: worst.logGain,
+    frequencyHz: worst.frequencyHz,
+    gapDb: worst.gapDb,
+    evaluations: rise.evaluations + loss.evaluations,
+    path: worst === loss ? least : most,
+  };
 }
 
-function figureOf({ extreme, path }: Departure, nominalDb: number, evaluations: number): Flatness {
+function figureOf(extreme: Departure, nominalDb: number, evaluations: number): Flatness {
   const valueDb = Math.max(toDb(extreme.logGain), 0);
   return {
     valueDb,
     nominalDb: Math.min(Math.max(nominalDb, 0), valueDb),
     frequencyHz: extreme.frequencyHz,
     gapDb: extreme.gapDb,
-    worstAt: path.worstAt(extreme.frequencyHz),
+    worstAt: extreme.path.worstAt(extreme.frequencyHz),
     evaluations,
   };
 }

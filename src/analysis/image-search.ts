@@ -3,12 +3,11 @@ import { alongCopy, tiedRatio } from '../signal/copy-axis';
 import type { Enclosure, Response } from '../signal/response';
 import { inverse, product } from '../signal/response-algebra';
 import { largestOverBands, largestOverFolds } from '../signal/search';
-import type { StretchedResponse } from '../signal/stretched';
 import type { ChannelPath } from './channel-path';
 import { axisOf, leavesAt } from './copies';
 import type { Copy, CopyRun, WantedCopy } from './copies';
 import { followsRate } from './pulse';
-import { cornerLabel, deviation, factorsOf, partsVary, varies } from './tolerances';
+import { cornerDeviations, factorsOf, partsVary } from './tolerances';
 import type { WorstAt } from './figures';
 import { axisFactors, nominalPath, worstPath } from './worst-path';
 import type { WorstPath } from './worst-path';
@@ -84,6 +83,12 @@ export function strongestOfRun(
   };
 }
 
+/** One part's ratio along a copy, and the factor that makes it largest. */
+interface Tied {
+  readonly response: Response;
+  factorAt(x: number): number;
+}
+
 function movesParts({ parts, path }: ImageQuestion): boolean {
   return parts === 'worst' && partsVary(path.channel);
 }
@@ -106,21 +111,19 @@ function strongestTied(question: ImageQuestion, copy: Copy): ImagePoint | null {
   const rate = path.rateHz;
   const axes = { copy: axisOf(copy, rate), wanted: axisOf(copies.wanted, rate) };
   const periods = axisFactors(path.channel).periods;
-  const tie = (response: Response, factors: Enclosure): StretchedResponse =>
-    factors.low === factors.high
-      ? { ...plainRatio(response, axes.copy, axes.wanted), factorAt: () => 1 }
-      : tiedRatio(response, factors, axes.copy, axes.wanted);
+  const tie = (response: Response, factors: Enclosure): Tied => {
+    if (factors.low === factors.high) return { response: plainRatio(response, axes.copy, axes.wanted), factorAt: () => 1 };
+    const tied = tiedRatio(response, factors, axes.copy, axes.wanted);
+    return { response: tied, factorAt: (x) => tied.factorAt(x) };
+  };
   const stages = path.stages.map(({ stage, response }) => {
     const own = factorsOf(stage.cornerTolerance);
-    return { stage, own, tied: tie(response, { low: own.low * periods.low, high: own.high * periods.high }) };
+    return { own, tied: tie(response, { low: own.low * periods.low, high: own.high * periods.high }) };
   });
   const pulse = tie(path.pulse, followsRate(path.channel.pulse) ? { low: 1, high: 1 } : periods);
-  const found = largestOverBands(product([pulse, ...stages.map((one) => one.tied)]), [copies.baseband]);
+  const found = largestOverBands(product([pulse.response, ...stages.map((one) => one.tied.response)]), [copies.baseband]);
   if (found === null) return null;
   const corners = stages.map(({ own, tied }) => Math.min(Math.max(tied.factorAt(found.frequencyHz), own.low), own.high));
-  const deviations = stages.flatMap(({ stage }, index) =>
-    varies(stage.cornerTolerance) ? [[cornerLabel(stage), deviation(corners[index] ?? 1, stage.cornerTolerance)] as const] : [],
-  );
   return {
     copy,
     measure: question.measure,
@@ -131,7 +134,7 @@ function strongestTied(question: ImageQuestion, copy: Copy): ImagePoint | null {
     evaluations: found.evaluations,
     corners,
     gainLog: 0,
-    worstAt: Object.fromEntries(deviations),
+    worstAt: cornerDeviations(path.channel.stages, corners),
   };
 }
 

@@ -22,7 +22,7 @@ export function captureNoise(channel: Channel, path: ChannelPath, withUnwanted: 
   const toneDb = testToneLevelDb(channel, path);
   const nominal = partsAt(channel, channel.rate.hz, toneDb);
   const plain = nominalPath(path, levelReference(channel)).response;
-  const disturbed = unwantedJitter(channel, path, plain);
+  const disturbed = unwantedJitter(channel, path, plain, 'nominal');
   const shareDb = bandShareDb(channel, channel.rate.hz);
   const jitterUnwanted = disturbed.levelDb === null ? null : disturbed.levelDb + shareDb;
   const worst = worstTone(channel, path, toneDb);
@@ -70,28 +70,38 @@ function shares(parts: NoiseParts, toneDb: number): readonly number[] {
   return [parts.quantisation, parts.jitter].filter((part) => part !== null).map((part) => powerOf(part - toneDb));
 }
 
-/** Jitter on the unwanted sources before it is spread, dBFS; `anything` stands nowhere in particular and is left out. */
+/**
+ * Jitter on the unwanted sources before it is spread, dBFS. Nominally only tones count, at their own frequency; at worst a tone moves
+ * within its tolerance, and the tone that a band stands for is where f·|H(f)| is largest. `anything` stands nowhere in particular.
+ */
 function unwantedJitter(
   channel: Channel,
   path: ChannelPath,
   response: Response,
+  at: 'nominal' | 'worst',
 ): { readonly levelDb: number | null; readonly evaluations: number } {
   const sigma = jitterSeconds(channel);
   if (sigma === 0) return { levelDb: null, evaluations: 0 };
   const rising = product([frequencyWeight(), response]);
-  const found = channel.unwanted.flatMap((source) => {
-    if (source.kind === 'anything') return [];
-    const range = jitteredRange(source, path);
-    if (range.high === Infinity) return [{ levelDb: Infinity, evaluations: 0 }];
-    const extreme = largestOverBands(rising, [range]);
-    // jitterNoiseDb(1 Hz) is the factor 2πσ that multiplies each frequency.
-    const levelDb = source.levelDb + toDb(extreme?.logGain ?? -Infinity) + jitterNoiseDb(1, sigma);
-    return [{ levelDb, evaluations: extreme?.evaluations ?? 0 }];
-  });
+  const found = channel.unwanted.flatMap((source) =>
+    jitteredRanges(source, path, at).map((range) => {
+      if (range.high === Infinity) return { levelDb: Infinity, evaluations: 0 };
+      const extreme = largestOverBands(rising, [range]);
+      // jitterNoiseDb(1 Hz) is the factor 2πσ that multiplies each frequency.
+      const levelDb = source.levelDb + toDb(extreme?.logGain ?? -Infinity) + jitterNoiseDb(1, sigma);
+      return { levelDb, evaluations: extreme?.evaluations ?? 0 };
+    }),
+  );
   return {
     levelDb: sumOfLevels(found.map((one) => one.levelDb)),
     evaluations: found.reduce((sum, one) => sum + one.evaluations, 0),
   };
+}
+
+function jitteredRanges(source: Source, path: ChannelPath, at: 'nominal' | 'worst'): readonly Enclosure[] {
+  if (source.kind === 'anything') return [];
+  if (at === 'worst') return [jitteredRange(source, path)];
+  return source.kind === 'tone' ? [{ low: source.frequencyHz, high: source.frequencyHz }] : [];
 }
 
 /**
@@ -123,7 +133,7 @@ function unwantedShares(
       at === 'nominal'
         ? nominalPath(path, frequencyHz)
         : worstPath(path, { sense: 'largest', referenceHz: frequencyHz, axis: 'hertz' });
-    const jitter = unwantedJitter(channel, path, relative.response);
+    const jitter = unwantedJitter(channel, path, relative.response, at);
     evaluations += jitter.evaluations;
     const rateHz = at === 'nominal' ? channel.rate.hz : rateRange(channel.rate).low;
     return jitter.levelDb === null ? landings : [...landings, powerOf(jitter.levelDb - levelDb + bandShareDb(channel, rateHz))];

@@ -3,22 +3,22 @@ import { foldFrequency } from '../signal/folding';
 import { integratePower, quantisationSnrDb } from '../signal/noise';
 import type { Response } from '../signal/response';
 import type { Channel } from '../spec/channel';
-import { channelPath, relativeTo } from './channel-path';
+import { channelPath } from './channel-path';
 import type { ChannelPath } from './channel-path';
+import { atCorners, cornerSets } from './corners';
 import { powerDb, powerOf } from './decibels';
 import type { WorstAt } from './figures';
 import type { DirectionNoise } from './noise-parts';
 import { pulseSeconds } from './pulse';
 import { jitterSeconds, noiseBands } from './test-tone';
-import { joinWorst, partsVary, rateLabel, rateRange, varies } from './tolerances';
+import { cornerDeviations, deviation, joinWorst, partsVary, rateLabel, rateRange, varies } from './tolerances';
 import { worstPath } from './worst-path';
 
 /** The noise of a generate channel. */
-export function generateNoise(channel: Channel): DirectionNoise {
-  const path = channelPath(channel);
+export function generateNoise(channel: Channel, path: ChannelPath): DirectionNoise {
+  const nominal = powersOf(path);
   const tone = powerOf(channel.testTone.levelDb);
-  const nominal = powersOf(path, path.total, path.analogue, 1);
-  const worst = worstShares(channel, path);
+  const worst = partsVary(channel) ? worstShares(channel, path) : { shares: sharesOf(path, nominal), worstAt: null };
   return {
     nominal: {
       quantisation: nominal.quantisation === null ? null : powerDb(nominal.quantisation),
@@ -38,15 +38,15 @@ interface Powers {
   readonly jitter: number | null;
 }
 
-function powersOf(path: ChannelPath, total: Response, analogue: Response, toneGain: number): Powers {
-  const { channel } = path;
-  const half = path.rateHz / 2;
+function powersOf(path: ChannelPath): Powers {
+  const { channel, rateHz } = path;
   const sigma = jitterSeconds(channel);
   const over = (response: Response): number =>
-    noiseBands(channel).reduce((sum, band) => sum + integratePower(response, band.low, band.high).value, 0) / half;
+    noiseBands(channel).reduce((sum, band) => sum + integratePower(response, band.low, band.high).value, 0) / (rateHz / 2);
   return {
-    quantisation: channel.bits === null ? null : over(total) / powerOf(quantisationSnrDb(channel.bits)),
-    jitter: sigma === 0 ? null : (over(analogue) * edgePower(path) * (path.rateHz * sigma) ** 2) / toneGain,
+    quantisation: channel.bits === null ? null : over(path.total) / powerOf(quantisationSnrDb(channel.bits)),
+    // The edges' noise passes the filter only, while the tone also has the hold's gain.
+    jitter: sigma === 0 ? null : over(path.analogue) * edgePower(path) * (rateHz * sigma) ** 2,
   };
 }
 
@@ -63,40 +63,35 @@ function edgePower(path: ChannelPath): number {
   return 4 * Math.sin((Math.PI * whole * landsHz) / rateHz) ** 2;
 }
 
-/** Noise over the test tone as it leaves, at the worst corners and at the worse end of the rate. */
+/** Each power over the test tone's own as it leaves by the same path. */
+function sharesOf(path: ChannelPath, powers: Powers): readonly number[] {
+  const { frequencyHz, levelDb } = path.channel.testTone;
+  const gain = Math.exp(2 * path.total.logGain(frequencyHz));
+  const quantisation = powers.quantisation === null ? [] : [powers.quantisation / (gain * powerOf(levelDb))];
+  return powers.jitter === null ? quantisation : [...quantisation, powers.jitter / gain];
+}
+
+/** Noise over the test tone at every combination of corners and where the tone is weakest, at either end of the rate. */
 function worstShares(
   channel: Channel,
   path: ChannelPath,
 ): { readonly shares: readonly number[]; readonly worstAt: WorstAt | null } {
-  const rates = rateRange(channel.rate);
-  const candidates = rates.low === rates.high ? [channel.rate.hz] : [channel.rate.hz, rates.low, rates.high];
-  const found = candidates.map((rateHz) => ({ rateHz, shares: sharesAt(channel, rateHz) }));
+  const { rate } = channel;
+  const { low, high } = rateRange(rate);
+  const weakest = worstPath(path, { sense: 'smallest', referenceHz: null, axis: 'hertz' }).cornersAt(
+    channel.testTone.frequencyHz,
+  );
+  const sets = [...cornerSets(path), weakest];
+  const found = [...new Set([rate.hz, low, high])].flatMap((rateHz) => {
+    const moved = channelPath(channel, rateHz);
+    return sets.map((corners) => {
+      const there = atCorners(moved, corners);
+      return { rateHz, corners, shares: sharesOf(there, powersOf(there)) };
+    });
+  });
   const worst = found.reduce((best, one) => (sum(one.shares) > sum(best.shares) ? one : best));
-  if (!partsVary(channel)) return { shares: worst.shares, worstAt: null };
-  const tone = channel.testTone.frequencyHz;
-  const question = { sense: 'smallest', referenceHz: null, axis: 'hertz' } as const;
-  const clock = varies(channel.rate.tolerance) ? { [rateLabel(channel.rate)]: worst.rateHz / channel.rate.hz - 1 } : null;
-  return { shares: worst.shares, worstAt: joinWorst(worstPath(path, question).worstAt(tone), clock) };
-}
-
-function sharesAt(channel: Channel, rateHz: number): readonly number[] {
-  const still: Channel = { ...channel, rate: { ...channel.rate, hz: rateHz, tolerance: { low: 0, high: 0 } } };
-  const path = channelPath(still);
-  const tone = channel.testTone;
-  const question = { sense: 'largest', referenceHz: tone.frequencyHz, axis: 'hertz' } as const;
-  const total = worstPath(path, question).response;
-  // The edges' noise passes the filter only, while the tone also has the hold's gain.
-  const bare: ChannelPath = {
-    ...path,
-    pulse: path.pulse,
-    total: path.analogue,
-    channel: { ...still, pulse: { shape: 'instant' } },
-  };
-  const analogue = partsVary(still) ? worstPath(bare, question).response : relativeTo(path.analogue, tone.frequencyHz);
-  const toneGain = Math.exp(2 * path.pulse.logGain(tone.frequencyHz));
-  const powers = powersOf(path, total, analogue, toneGain);
-  const quantisation = powers.quantisation === null ? [] : [powers.quantisation / powerOf(tone.levelDb)];
-  return powers.jitter === null ? quantisation : [...quantisation, powers.jitter];
+  const clock = varies(rate.tolerance) ? { [rateLabel(rate)]: deviation(worst.rateHz / rate.hz, rate.tolerance) } : null;
+  return { shares: worst.shares, worstAt: joinWorst(cornerDeviations(channel.stages, worst.corners), clock) };
 }
 
 function sum(powers: readonly number[]): number {

@@ -22,12 +22,13 @@ export interface Noise {
 /** The noise of a channel; `limit` is its snr limit, which says whether unwanted sources count. */
 export function noiseOf(channel: Channel, path: ChannelPath, limit: Limit | null): Noise {
   const withUnwanted = limit?.withUnwanted === true;
-  const noise = channel.direction === 'capture' ? captureNoise(channel, path, withUnwanted) : generateNoise(channel);
+  const noise = channel.direction === 'capture' ? captureNoise(channel, path, withUnwanted) : generateNoise(channel, path);
   const toneDb = testToneLevelDb(channel, path);
   const total = sumOfParts([noise.nominal.quantisation, noise.nominal.jitter]);
   return {
     figures: {
-      ...noise.nominal,
+      quantisation: noise.nominal.quantisation,
+      jitter: noise.nominal.jitter,
       jitterUnwanted: noise.jitterUnwanted,
       sources: null,
       stages: null,

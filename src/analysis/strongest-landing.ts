@@ -29,7 +29,9 @@ export function largestOf(extremes: readonly (Extreme | null)[]): Extreme | null
   const [first, ...others] = found;
   if (first === undefined) return null;
   const best = others.reduce((largest, one) => (one.logGain > largest.logGain ? one : largest), first);
-  return found.length === 1 ? best : { ...best, evaluations: found.reduce((sum, one) => sum + one.evaluations, 0) };
+  if (found.length === 1) return best;
+  const { logGain, frequencyHz, gapDb } = best;
+  return { logGain, frequencyHz, gapDb, evaluations: found.reduce((sum, one) => sum + one.evaluations, 0) };
 }
 
 /** A tone that stands still needs no search. */

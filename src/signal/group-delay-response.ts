@@ -46,14 +46,14 @@ class DelayResponse implements Response {
     let steepestDown = 0;
     let steepestUp = 0;
     for (const hump of this.humps) {
-      const at = [lowHz, highHz, ...steepestPoints(hump).filter((f) => lowHz < f && f < highHz)].map((f) => slopeAt(hump, f));
-      steepestDown += Math.min(...at);
-      steepestUp += Math.max(...at);
+      const slopes = slopeRange(hump, lowHz, highHz);
+      steepestDown += slopes.low;
+      steepestUp += slopes.high;
     }
     const range = this.range(lowHz, highHz);
     if (!(range.low > 0)) return null;
-    const low = Math.min(steepestDown / range.low, steepestDown / range.high);
-    const high = Math.max(steepestUp / range.low, steepestUp / range.high);
+    const low = steepestDown / (steepestDown < 0 ? range.low : range.high);
+    const high = steepestUp / (steepestUp > 0 ? range.low : range.high);
     return { low: low - logSlack * Math.abs(low), high: high + logSlack * Math.abs(high) };
   }
 
@@ -79,7 +79,17 @@ function slopeAt({ strength, width, centre }: Hump, frequencyHz: number): number
   return (-2 * strength * offset) / (width * width + offset * offset) ** 2;
 }
 
-function steepestPoints({ width, centre }: Hump): readonly number[] {
-  const offset = width / Math.sqrt(3);
-  return [centre - offset, centre + offset];
+/** A hump rises most at centre − width/√3 and falls most at centre + width/√3; between those and beyond its slope is monotonic. */
+function slopeRange(hump: Hump, lowHz: number, highHz: number): Enclosure {
+  const offset = hump.width * steepestOffset;
+  const atLow = slopeAt(hump, lowHz);
+  const atHigh = slopeAt(hump, highHz);
+  const rises = hump.centre - offset;
+  const falls = hump.centre + offset;
+  return {
+    low: lowHz < falls && falls < highHz ? slopeAt(hump, falls) : Math.min(atLow, atHigh),
+    high: lowHz < rises && rises < highHz ? slopeAt(hump, rises) : Math.max(atLow, atHigh),
+  };
 }
+
+const steepestOffset = 1 / Math.sqrt(3);
