@@ -1,5 +1,5 @@
 /** Walks over a slice's tree. */
-import type { MapNode, Pair, ScalarNode, TreeNode } from './tree';
+import type { Pair, ScalarNode, TreeNode } from './tree';
 
 /** A node with what it belongs to. */
 export interface Visit {
@@ -10,21 +10,25 @@ export interface Visit {
 }
 
 /** Every node, outer ones first, in the order of the text. */
-export function* visits(tree: TreeNode | null, parent: TreeNode | null = null, pair: Pair | null = null): Generator<Visit> {
-  if (tree === null) return;
-  yield { node: tree, parent, pair };
-  if (tree.form === 'list') for (const item of tree.items) yield* visits(item, tree);
-  if (tree.form === 'map') for (const child of tree.pairs) yield* visits(child.value, tree, child);
+export function visits(tree: TreeNode | null): readonly Visit[] {
+  const found: Visit[] = [];
+  if (tree !== null) visit({ node: tree, parent: null, pair: null }, found);
+  return found;
+}
+
+function visit(here: Visit, found: Visit[]): void {
+  found.push(here);
+  const { node } = here;
+  if (node.form === 'list') {
+    for (const item of node.items) if (item !== null) visit({ node: item, parent: node, pair: null }, found);
+  } else if (node.form === 'map') {
+    for (const pair of node.pairs) if (pair.value !== null) visit({ node: pair.value, parent: node, pair }, found);
+  }
 }
 
 /** Every scalar. */
-export function* scalars(tree: TreeNode | null): Generator<Visit & { readonly node: ScalarNode }> {
-  for (const visit of visits(tree)) if (visit.node.form === 'scalar') yield { ...visit, node: visit.node };
-}
-
-/** Every map. */
-export function* maps(tree: TreeNode | null): Generator<MapNode> {
-  for (const { node } of visits(tree)) if (node.form === 'map') yield node;
+export function scalars(tree: TreeNode | null): readonly (Visit & { readonly node: ScalarNode })[] {
+  return visits(tree).flatMap((found) => (found.node.form === 'scalar' ? [{ ...found, node: found.node }] : []));
 }
 
 /** Whether a list or a map is written with brackets. */
