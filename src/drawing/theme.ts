@@ -52,6 +52,7 @@ const inks = {
   harm: 'harm',
   limit: 'harm',
   path: 'path',
+  total: 'wanted',
   pulse: 'path',
   stage: 'muted',
   envelope: 'wanted',

@@ -9,6 +9,7 @@ const roles: readonly Role[] = [
   'harm',
   'copy',
   'path',
+  'total',
   'stage',
   'pulse',
   'envelope',

@@ -89,7 +89,19 @@ export interface Series {
 
 /** What an item stands for; the page and the exports choose colour, dash and pattern by it. */
 export type Role =
-  'wanted' | 'source' | 'landing' | 'harm' | 'copy' | 'path' | 'stage' | 'pulse' | 'envelope' | 'limit' | 'noise' | 'rule';
+  | 'wanted'
+  | 'source'
+  | 'landing'
+  | 'harm'
+  | 'copy'
+  | 'path'
+  | 'total'
+  | 'stage'
+  | 'pulse'
+  | 'envelope'
+  | 'limit'
+  | 'noise'
+  | 'rule';
 
 /** One thing that is drawn, read out, lit and followed as a whole. */
 export interface Item {

@@ -1,0 +1,2 @@
+/** What the other layers use of pictures. */
+export { pictureOf } from './picture-of';

@@ -1,0 +1,203 @@
+/** The whole path over all that matters: the total, every stage, aperture or hold, and the tolerances' envelope. */
+import { gainDb, lossDb, pulseNulls, worstPath } from '../analysis';
+import type { Response } from '../analysis';
+import { partsVary } from '../analysis/tolerances';
+import type { FrequencyAxis, Item, LevelAxis, Plot, Points, Stroke } from '../protocol/picture';
+import { formatFrequency } from '../units/format';
+import { frequencyAxis } from './axes';
+import { item, joinedBothWays, seriesOf } from './items';
+import { sampleCurve } from './sample-curve';
+import type { Subject } from './subject';
+import { levelWords, sentences } from './words';
+
+/** The plot's only pane. */
+export const magnitudePane = 'magnitude';
+
+/** The plot. */
+export function magnitudePlot(subject: Subject): Plot {
+  const x = axisOf(subject);
+  const y = levelsOf(subject, x);
+  const draw = (response: Response): Points =>
+    sampleCurve((f) => gainDb(response, f), {
+      lowHz: x.lowHz,
+      highHz: x.highHz,
+      through: pulseNulls(subject.channel.pulse, subject.channel.rate.hz, 12),
+      floor: y.low,
+      tolerance: (y.high - y.low) / 3000,
+    });
+  const items = joinedBothWays([
+    ...envelopeItems(subject, draw),
+    ...stageItems(subject, draw, x),
+    ...pulseItems(subject, draw),
+    totalItem(subject, draw),
+    halfRateItem(subject, y),
+  ]);
+  return {
+    id: 'magnitude',
+    title: 'Magnitude',
+    words: sentences(
+      `Gain of ${subject.path.stages.length === 1 ? 'one stage' : `${subject.path.stages.length} stages`} and of all together`,
+      `${levelWords(-lossAtHalfRate(subject), 'dB')} at half the rate`,
+    ),
+    panes: [{ id: magnitudePane, x, y }],
+    series: seriesOf(
+      [...items].sort((a, b) => rankOf(a) - rankOf(b)),
+      new Map(),
+    ),
+    items,
+    table: tableOf(subject),
+  };
+}
+
+function axisOf({ channel }: Subject): FrequencyAxis {
+  const lows = channel.wanted.map((band) => band.lowHz).filter((f) => f > 0);
+  const high = Math.max(10 * channel.rate.hz, ...channel.wanted.map((band) => 4 * band.highHz));
+  const axis = frequencyAxis('Hz', Math.min(...lows, high / 1e4), high);
+  return { ...axis, lowHz: 0 };
+}
+
+function levelsOf({ path, nominal }: Subject, x: FrequencyAxis): LevelAxis {
+  const shown = [path.total.logGain(0), path.total.logGain(x.logLowHz), nominal.logGain(x.logLowHz)].filter((value) =>
+    Number.isFinite(value),
+  );
+  const top = Math.max(0, ...shown.map((value) => (value * 20) / Math.LN10));
+  const end = gainDb(path.analogue, x.highHz);
+  const low = Math.max(-140, Math.min(-60, 20 * Math.floor((Number.isFinite(end) ? end : -140) / 20)));
+  return { title: 'dB', unit: 'dB', low, high: 10 * Math.ceil((top + 3) / 10) };
+}
+
+function totalItem(subject: Subject, draw: (response: Response) => Points): Item {
+  const points = draw(subject.path.total);
+  return item({
+    id: 'total',
+    series: 'total',
+    pane: magnitudePane,
+    role: 'total',
+    name: 'total',
+    words: sentences(
+      `Gain of the whole path, ${subject.channel.direction === 'capture' ? 'aperture' : 'hold'} included, at nominal values`,
+    ),
+    place: subject.placeOf(['filter']),
+    shapes: [{ kind: 'curve', points, stroke: 'solid', weight: 'bold' }],
+  });
+}
+
+const strokes: readonly Stroke[] = ['dashed', 'dash-dot', 'long-dash', 'dotted'];
+
+function stageItems(subject: Subject, draw: (response: Response) => Points, x: FrequencyAxis): Item[] {
+  if (subject.path.stages.length < 2) return [];
+  return subject.path.stages.map(({ stage, response }, index) => {
+    const points = draw(response);
+    const falls = points.x.findIndex((f, at) => f > x.logLowHz && (points.y[at] ?? 0) < (points.y[0] ?? 0) - 12);
+    const name = stage.name ?? stage.label;
+    const at = falls === -1 ? points.x.length - 1 : falls;
+    return item({
+      id: `stage-${index}`,
+      series: `stage-${index}`,
+      pane: magnitudePane,
+      role: 'stage',
+      name,
+      words: sentences(`Gain of ${name} alone`),
+      place: subject.placeOf(['filter', index]),
+      shapes: [{ kind: 'curve', points, stroke: strokes[index % strokes.length] ?? 'dashed', weight: 'thin' }],
+      label: { text: name, frequencyHz: points.x[at] ?? 0, level: points.y[at] ?? 0, prefer: 'right', priority: 5 },
+    });
+  });
+}
+
+function pulseItems(subject: Subject, draw: (response: Response) => Points): Item[] {
+  const { channel } = subject;
+  if (channel.pulse.shape === 'instant') return [];
+  const name = channel.direction === 'capture' ? 'aperture' : 'hold';
+  return [
+    item({
+      id: 'pulse',
+      series: 'pulse',
+      pane: magnitudePane,
+      role: 'pulse',
+      name,
+      words: sentences(
+        `Gain of the ${name} alone, ${channel.direction === 'capture' ? 'at the input frequency' : 'at the output frequency'}`,
+      ),
+      place: subject.placeOf([name]),
+      shapes: [{ kind: 'curve', points: draw(subject.path.pulse), stroke: 'dotted', weight: 'thin' }],
+    }),
+  ];
+}
+
+function envelopeItems(subject: Subject, draw: (response: Response) => Points): Item[] {
+  if (!partsVary(subject.channel)) return [];
+  const at = (sense: 'largest' | 'smallest'): Points =>
+    draw(worstPath(subject.path, { sense, referenceHz: null, axis: 'hertz' }).response);
+  return [
+    item({
+      id: 'envelope',
+      series: 'envelope',
+      pane: magnitudePane,
+      role: 'envelope',
+      name: 'worst of the tolerances',
+      words: sentences('Between the largest and the smallest gain that the tolerances allow'),
+      place: subject.placeOf(['filter']),
+      joins: ['total'],
+      shapes: [{ kind: 'area', upper: at('largest'), lower: at('smallest'), tone: 'solid' }],
+    }),
+  ];
+}
+
+function halfRateItem(subject: Subject, y: LevelAxis): Item {
+  const { halfRate } = subject.figures;
+  const text = `half the rate, ${formatFrequency(halfRate)}`;
+  return item({
+    id: 'half-rate',
+    series: 'half-rate',
+    pane: magnitudePane,
+    role: 'rule',
+    name: 'half the rate',
+    words: sentences(
+      `Half the rate is ${formatFrequency(halfRate)}`,
+      `The path has ${levelWords(-lossAtHalfRate(subject), 'dB')} there`,
+    ),
+    place: subject.placeOf(['rate']),
+    shapes: [{ kind: 'rule', frequencyHz: halfRate }],
+    label: { text, frequencyHz: halfRate, level: y.low + (y.high - y.low) * 0.1, prefer: 'left', priority: 6 },
+  });
+}
+
+function lossAtHalfRate({ path, figures, channel }: Subject): number {
+  return lossDb(path.total, figures.halfRate, channel.referenceHz);
+}
+
+/** The legend: the total first. */
+function rankOf({ id }: Item): number {
+  return ['total', 'envelope'].indexOf(id) === -1 ? 2 : ['total', 'envelope'].indexOf(id);
+}
+
+function tableOf(subject: Subject): Plot['table'] {
+  const { channel, figures, path } = subject;
+  const rate = channel.rate.hz;
+  const edges = channel.wanted.flatMap((band) => [band.lowHz, band.highHz]);
+  const points = [...new Set([...edges, channel.referenceHz, figures.halfRate, rate, 2 * rate])].sort((a, b) => a - b);
+  const stages = path.stages.map(({ stage }) => ({ title: stage.name ?? stage.label, unit: 'dB' as const }));
+  return {
+    caption: `${channel.name}: gain of the path at nominal values`,
+    columns: [
+      { title: 'at', unit: 'Hz' },
+      { title: 'total', unit: 'dB' },
+      { title: channel.direction === 'capture' ? 'aperture' : 'hold', unit: 'dB' },
+      ...stages,
+    ],
+    rows: points.map((f) => ({
+      item: 'total',
+      cells: [
+        f,
+        ...[path.total, path.pulse, ...path.stages.map(({ response }) => response)].map((response) =>
+          finite(gainDb(response, f)),
+        ),
+      ],
+    })),
+  };
+}
+
+function finite(value: number): number | null {
+  return Number.isFinite(value) ? value : null;
+}

@@ -1,0 +1,39 @@
+/** The analogue path: its magnitude stage by stage over all that matters, and the wanted band close up. */
+import { halfPowerHz } from '../analysis';
+import { flatnessOf } from '../analysis/flatness';
+import type { Section } from '../protocol/picture';
+import { formatDb, formatFrequency } from '../units/format';
+import { closeUpPlot } from './path-close-up';
+import { magnitudePlot } from './path-magnitude';
+import { limitFigure } from './subject';
+import type { Subject } from './subject';
+import { standingOf } from './words';
+
+/** The section. */
+export function pathSection(subject: Subject): Section {
+  const limit = limitFigure(subject, 'flatness');
+  const closeUp = subject.channel.wanted.length === 0 ? [] : [closeUpPlot(subject)];
+  return {
+    id: 'path',
+    title: 'Analogue path',
+    answer: { text: answerText(subject), standing: standingOf(subject.channel, limit) },
+    place: subject.placeOf(limit === null ? ['filter'] : ['limits', 'flatness']),
+    plots: [...closeUp, magnitudePlot(subject)],
+  };
+}
+
+function answerText(subject: Subject): string {
+  const { channel, path } = subject;
+  const half = channel.stages.length === 0 ? null : halfPowerHz(path.analogue);
+  const power =
+    channel.stages.length === 0
+      ? 'no filter'
+      : half === null
+        ? 'never falls to half power'
+        : `half power ${formatFrequency(half)}`;
+  const limit = limitFigure(subject, 'flatness');
+  const value = limit?.value ?? flatnessOf(channel, path)?.valueDb ?? null;
+  if (value === null) return power;
+  const flat = `flat to ${formatDb(value, 'dB', 2)}`;
+  return `${power}, ${limit?.judged === true ? `${flat} of ${formatDb(limit.at, 'dB', 2)}` : flat}`;
+}
