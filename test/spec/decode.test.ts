@@ -196,6 +196,6 @@ channels:
     ]);
     const named = decodeText(filters, 'good: { bandwidth: 1 kHz }\nbad: { bandwidth: 1 khz }').value;
     assert.equal(named?.get('bad'), null);
-    assert.deepEqual(named?.get('good'), { bandwidth: { value: 1000, unit: 'Hz' } });
+    assert.deepEqual(named.get('good'), { bandwidth: { value: 1000, unit: 'Hz' } });
   });
 });

@@ -87,8 +87,8 @@ describe('resolving a channel', () => {
   it('gives an rc stage the corner tolerance of its parts', () => {
     const [stage] = wholeChannel(spec(...plain, 'filter: { rc: { r: 4k7 ± 1 %, c: 2n2 ± 5 % } }'), 'x').stages;
     assert.deepEqual(stage?.form, { kind: 'rc', ohm: 4700, farad: 2.2e-9 });
-    assert.equal(stage?.cornerTolerance.low, 1 / (1.01 * 1.05) - 1);
-    assert.equal(stage?.cornerTolerance.high, 1 / (0.99 * 0.95) - 1);
+    assert.equal(stage.cornerTolerance.low, 1 / (1.01 * 1.05) - 1);
+    assert.equal(stage.cornerTolerance.high, 1 / (0.99 * 0.95) - 1);
   });
 
   it('names unwanted sources that have no name of their own', () => {
