@@ -6,3 +6,8 @@ export { lineIndexOf } from './inside';
 export { read } from './read';
 export { exists, spanOf } from './spans';
 export { declaration } from './declaration/top-level';
+export * from './channel';
+export { completionsAt } from './completion';
+export type { Completion } from './completion';
+export { symbolsOf } from './symbols';
+export type { SpecSymbol } from './symbols';
