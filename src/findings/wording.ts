@@ -14,16 +14,14 @@ export function limitWords(figure: Pick<LimitFigure, 'at' | 'unit'>): string {
   return formatDb(figure.at, figure.unit, 3);
 }
 
-/** The tolerances at a worst case: "corner +4 %", with the part's name where more than one varies; null where none does. */
+/** The tolerances at a worst case: "corner +4 %", or whose corner it is where more than one varies; null where none does. */
 export function worstWords(worstAt: WorstAt | null): string | null {
   const entries = Object.entries(worstAt ?? {}).filter(([, deviation]) => deviation !== 0);
   const only = entries.length === 1;
-  const words = entries
-    .slice(0, 3)
-    .map(([label, deviation]) => `${only ? shortLabel(label) : label} ${deviationWords(deviation)}`);
+  const words = entries.slice(0, 3).map(([label, deviation]) => `${labelWords(label, only)} ${deviationWords(deviation)}`);
   const more = entries.length - words.length;
   if (words.length === 0) return null;
-  return words.join('; ') + (more > 0 ? ` and ${more} more` : '');
+  return words.join(', ') + (more > 0 ? ` and ${more} more` : '');
 }
 
 /** What a parenthesis about the worst case needs to know. */
@@ -43,10 +41,14 @@ export function worstCaseWords({ worstAt, nominal, nominalPasses, decimals }: Wo
   return ` (worst case, ${worst}${plain})`;
 }
 
-/** Of a lone corner or gain nobody has to be told whose it is; a frequency may be the clock's or a source's. */
-function shortLabel(label: string): string {
-  const part = label.slice(label.lastIndexOf(',') + 1).trim();
-  return part === 'corner' || part === 'gain' ? part : label;
+/** "frequency of `board`" for the label "board, frequency"; of a lone corner or gain nobody has to be told whose it is. */
+function labelWords(label: string, only: boolean): string {
+  const comma = label.lastIndexOf(', ');
+  if (comma < 0) return label;
+  const part = label.slice(comma + 2);
+  if (only && (part === 'corner' || part === 'gain')) return part;
+  const owner = label.slice(0, comma);
+  return `${part} of ${/^stage \d+$/u.test(owner) ? owner : `\`${owner}\``}`;
 }
 
 /** A relative deviation with its sign: "+4 %", "−25 ppm". */

@@ -7,10 +7,18 @@ export interface Change {
   readonly kind: RemedyKind;
   /** What it does, as a title begins: "Raise the rate to 64 kHz (÷384)". */
   readonly says: string;
+  /** What the title calls the stage that is changed; null for the rate. */
+  readonly about: string | null;
   readonly edits: readonly Edit[];
 }
 
-/** What several changes do together, as a title begins. */
+/** What several changes do together, as a title begins: "Raise `guard` to order 5 and lower its corner to 13 kHz". */
 export function changesWords(changes: readonly Change[]): string {
-  return changes.map(({ says }, index) => (index === 0 ? says : says.charAt(0).toLowerCase() + says.slice(1))).join(' and ');
+  const about = changes.map((change) => change.about);
+  const says = changes.map(({ says, about: stage }, index) => {
+    const known = stage !== null && about.indexOf(stage) < index;
+    const words = known ? says.replace(`the corner of ${stage}`, 'its corner') : says;
+    return index === 0 ? words : words.charAt(0).toLowerCase() + words.slice(1);
+  });
+  return says.join(' and ');
 }

@@ -54,7 +54,12 @@ export function cornerChange({ reading, channel }: Session, stage: FamilyStage, 
   const verb = hz > stage.form.cornerHz ? 'Raise' : 'Lower';
   return edit === null
     ? null
-    : { kind: 'corner', says: `${verb} the corner of ${stage.words} to ${formatFrequency(hz)}`, edits: [edit] };
+    : {
+        kind: 'corner',
+        says: `${verb} the corner of ${stage.words} to ${formatFrequency(hz)}`,
+        about: stage.words,
+        edits: [edit],
+      };
 }
 
 /** From the first corner that works: the nearest that leaves no new warning, or that one; then a round value just beyond it. */

@@ -1,8 +1,9 @@
 /** The search for changes that cure a finding: single changes first, cheapest kind first, then two at once. */
-import { remediesOf, type Finding, type Judgement, type Store } from '../findings';
+import { decimalsFor, remediesOf, type Finding, type Judgement, type Store } from '../findings';
 import { formatDb, formatFrequency } from '../units/format';
 import { cornerSearch, type CornerBound, type CornerConflict, type CornerOutcome } from './corner';
 import type { Blocked, Cure, Fix } from './fix';
+import { kindsFor } from './kinds-for';
 import { orderTrial } from './order';
 import { rateTrials } from './rate';
 import { beginSession, type Session } from './session';
@@ -24,9 +25,9 @@ export function cure(judgement: Judgement, finding: Finding, store: Store): Cure
 
 /** Searches for the fixes of a finding, in steps of one trial each. */
 export function* curing(judgement: Judgement, finding: Finding, store: Store): Generator<void, Cure> {
-  const kinds = new Set<string>(remediesOf(finding.code));
-  const session = kinds.size === 0 ? null : beginSession(judgement, finding, store);
-  if (session === null) return { fixes: [], blockedBy: null, note: null, analyses: 0 };
+  const session = remediesOf(finding.code).length === 0 ? null : beginSession(judgement, finding, store);
+  const kinds = new Set<string>(session === null ? [] : kindsFor(finding, session.channel));
+  if (session === null || kinds.size === 0) return { fixes: [], blockedBy: null, note: null, analyses: 0 };
   const corners = kinds.has('corner') ? yield* cornerOutcomes(session) : [];
   const singles = [
     ...(kinds.has('rate') ? yield* rateTrials(session) : []),
@@ -78,5 +79,5 @@ function conflictWords({ own, other }: CornerConflict): string {
 }
 
 function blockedWords({ limit, misses, candidate }: Blocked): string {
-  return `Nothing simple works. What comes nearest (${candidate}) misses the ${limit} limit by ${formatDb(misses, 'dB', 2)}.`;
+  return `Nothing simple works. What comes nearest (${candidate}) misses the ${limit} limit by ${formatDb(misses, 'dB', decimalsFor(limit, misses))}.`;
 }

@@ -6,7 +6,7 @@ import type { FamilyStage } from './stages';
 import { works, worksCleanly, type Trial } from './trial';
 
 /** The highest order that is proposed: beyond it no analogue filter is built. */
-const highestOrder = 12;
+export const highestOrder = 12;
 
 /** The proved change to the lowest higher order that works without a new warning, else to the lowest that works; null for none. */
 export function* orderTrial(session: Session, stage: FamilyStage): Generator<void, Trial | null> {
@@ -28,7 +28,9 @@ export function* orderTrial(session: Session, stage: FamilyStage): Generator<voi
 export function orderChange({ reading, channel }: Session, stage: FamilyStage, order: number): Change | null {
   const edit = editValue(reading, { channel: channel.name, path: ['filter', stage.index, 'order'] }, String(order));
   const verb = order > stage.form.order ? 'Raise' : 'Lower';
-  return edit === null ? null : { kind: 'order', says: `${verb} ${stage.words} to order ${order}`, edits: [edit] };
+  return edit === null
+    ? null
+    : { kind: 'order', says: `${verb} ${stage.words} to order ${order}`, about: stage.words, edits: [edit] };
 }
 
 /** Going on is pointless once a step has not helped. */

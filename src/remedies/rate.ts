@@ -29,7 +29,7 @@ export function rateChange(session: Session, option: RateOption): Change | null 
   const divided = share === null ? '' : ` (÷${share.divide})`;
   const made = edits.filter((edit) => edit !== null);
   if (made.length < edits.length) return null;
-  return { kind: 'rate', says: `${verb} the rate to ${formatFrequency(option.hz)}${divided}`, edits: made };
+  return { kind: 'rate', says: `${verb} the rate to ${formatFrequency(option.hz)}${divided}`, about: null, edits: made };
 }
 
 type Share = Pick<ClockShare, 'multiply' | 'divide'>;

@@ -1,6 +1,7 @@
 /** Two changes at once, for findings that no single change cures: a higher order or another rate, with the corner that suits it. */
+import type { Change } from './change';
 import { cornerSearch } from './corner';
-import { orderChange } from './order';
+import { highestOrder, orderChange } from './order';
 import { rateChange, rateTrials } from './rate';
 import { rateOptions } from './rate-options';
 import type { Session } from './session';
@@ -27,26 +28,31 @@ function* rateAndCorner(session: Session, stage: FamilyStage): Generator<void, r
   const options = Array.from({ length: steps }, (_, index) => above[2 ** index - 1]).filter((option) => option !== undefined);
   for (const option of options) {
     const change = rateChange(session, option);
-    const { trial } = change === null ? { trial: null } : yield* cornerSearch(session, stage, [change]);
-    if (trial !== null) return [trial];
+    const outcome = change === null ? null : yield* cornerSearch(session, stage, [change]);
+    if (outcome !== null && outcome.trial !== null) return [outcome.trial];
   }
   return [];
 }
 
 function* orderAndCorner(session: Session, stage: FamilyStage): Generator<void, readonly Trial[]> {
-  for (let order = stage.form.order + 1; order <= stage.form.order + steps; order += 1) {
-    const change = orderChange(session, stage, order);
-    const { trial } = change === null ? { trial: null } : yield* cornerSearch(session, stage, [change]);
+  for (const change of higherOrders(session, stage)) {
+    const { trial } = yield* cornerSearch(session, stage, [change]);
     if (trial !== null) return [trial];
   }
   return [];
 }
 
 function* orderAndRate(session: Session, stage: FamilyStage): Generator<void, readonly Trial[]> {
-  for (let order = stage.form.order + 1; order <= stage.form.order + steps; order += 1) {
-    const change = orderChange(session, stage, order);
-    const trials = change === null ? [] : yield* rateTrials(session, [change]);
+  for (const change of higherOrders(session, stage)) {
+    const trials = yield* rateTrials(session, [change]);
     if (trials.length > 0) return trials.slice(0, 1);
   }
   return [];
+}
+
+function higherOrders(session: Session, stage: FamilyStage): readonly Change[] {
+  const orders = Array.from({ length: steps }, (_, index) => stage.form.order + 1 + index).filter(
+    (order) => order <= highestOrder,
+  );
+  return orders.map((order) => orderChange(session, stage, order)).filter((change) => change !== null);
 }

@@ -6,7 +6,7 @@ import type { Trial } from '../../src/remedies/trial';
 /** A trial that remembers only which candidate it was. */
 function trialOf(index: number): Trial {
   return {
-    changes: [{ kind: 'rate', says: String(index), edits: [] }],
+    changes: [{ kind: 'rate', says: String(index), about: null, edits: [] }],
     figures: null,
     remaining: [],
     newErrors: [],

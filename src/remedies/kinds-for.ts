@@ -1,0 +1,24 @@
+/** Which kinds of change are worth trying for one finding: those of its code, less those that cannot move its limit. */
+import { remediesOf, type Code, type Finding, type RemedyKind } from '../findings';
+import type { Channel, LimitKey } from '../spec';
+
+/** The kinds to try, cheapest first. */
+export function kindsFor(finding: Finding, channel: Channel): readonly RemedyKind[] {
+  const code = finding.code === 'thin-margin' && isLimit(finding.limit) ? brokenCodes[finding.limit] : finding.code;
+  // In generate the words are what they are before the hold and the filter come into play.
+  const fixed = channel.direction === 'generate' && (code === 'headroom-short' || code === 'overdriven');
+  return fixed ? [] : remediesOf(code);
+}
+
+/** What breaks a limit cures a thin margin of it too. */
+const brokenCodes: Readonly<Record<LimitKey, Code>> = {
+  alias: 'alias-over-limit',
+  image: 'image-over-limit',
+  flatness: 'flatness-over-limit',
+  snr: 'snr-short',
+  headroom: 'headroom-short',
+};
+
+function isLimit(limit: string | null): limit is LimitKey {
+  return limit !== null && limit in brokenCodes;
+}
