@@ -23,10 +23,10 @@ describe('alias-over-limit', () => {
     const [finding] = found('alias-over-limit', channel, broken);
     assert.deepEqual(finding?.at, { place: { channel: 'bearing-x', path: ['unwanted', 0, 'band'] } });
     assert.deepEqual(
-      finding?.related.map(({ place }) => place.path),
+      finding.related.map(({ place }) => place.path),
       [['limits', 'alias', 'at'], ['filter']],
     );
-    assert.deepEqual(finding?.figures, {
+    assert.deepEqual(finding.figures, {
       value: -91.2,
       nominal: -92.6,
       limit: -96,

@@ -85,7 +85,7 @@ describe('a judgement', () => {
   });
 
   it('holds its tongue about unused names while a channel that may use them has a fault', () => {
-    const unused = `${bearingSpec.replace('    filter: pick-up guard\n', '    filter: { bandwidth: 30 kHz }\n')}`;
+    const unused = bearingSpec.replace('    filter: pick-up guard\n', '    filter: { bandwidth: 30 kHz }\n');
     const codes = (text: string): readonly string[] => judge(read(text), createJudgeStore()).findings.map(({ code }) => code);
     assert.ok(codes(unused).includes('unused-name'));
     assert.ok(!codes(unused.replace('bits: 16', 'bits: many')).includes('unused-name'));

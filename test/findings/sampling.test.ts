@@ -109,7 +109,7 @@ describe('what a channel leaves out', () => {
     ] as const) {
       const [finding] = found(code, channel, figures());
       assert.equal(finding?.severity, 'hint', code);
-      assert.deepEqual(finding?.at, { place: { channel: 'bearing-x', path: [], part: 'key' } });
+      assert.deepEqual(finding.at, { place: { channel: 'bearing-x', path: [], part: 'key' } });
     }
   });
 
