@@ -15,16 +15,27 @@ export interface Acceptances {
 export function findAcceptances(text: string, inScalar: (offset: number) => boolean): Acceptances {
   const found = { acceptances: [] as Acceptance[], problems: [] as LocalProblem[] };
   let line: Span = { start: 0, end: 0 };
-  for (const { index, 0: mark } of text.matchAll(/#[ \t]*bandkeep:/g)) {
-    if (!/^(?:[\s\uFEFF]|)$/.test(text.charAt(index - 1)) || inScalar(index)) continue;
+  for (let at = text.indexOf(mark); at >= 0; at = text.indexOf(mark, at + 1)) {
+    const index = commentStart(text, at);
+    if (index === null || inScalar(index)) continue;
     const span = { start: index, end: lineOf(text, index).end };
-    const read = acceptanceOf(text.slice(index + mark.length, span.end).trim());
+    const read = acceptanceOf(text.slice(at + mark.length, span.end).trim());
     if ('message' in read) found.problems.push(errorAt(span, 'syntax', read.message));
     // Comments that are stacked speak for the same line; finding it once keeps this linear.
     if (index >= line.start) line = spokenFor(text, index);
     if (!('message' in read)) found.acceptances.push({ ...read, span, line });
   }
   return found;
+}
+
+const mark = 'bandkeep:';
+
+/** Where the comment begins that the mark opens, or null. */
+function commentStart(text: string, at: number): number | null {
+  let hash = at - 1;
+  while (text.charAt(hash) === ' ' || text.charAt(hash) === '\t') hash -= 1;
+  const opens = text.charAt(hash) === '#' && (hash === 0 || /[\s\uFEFF]/.test(text.charAt(hash - 1)));
+  return opens ? hash : null;
 }
 
 type Read = { readonly code: string; readonly reason: string; readonly downTo: number | null } | { readonly message: string };

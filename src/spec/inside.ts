@@ -34,8 +34,6 @@ export interface Names {
 /** What the spec layer keeps. */
 export interface Inside {
   readonly slices: readonly PlacedSlice[];
-  /** Slices by all that decides what they read as. */
-  readonly byText: ReadonlyMap<string, SliceReading>;
   readonly names: Names;
   readonly lists: NameLists;
   readonly resolved: ReadonlyMap<string, Resolved>;
@@ -90,7 +88,6 @@ function ownReading(reading: Reading): SpecReading {
 /** What there is before anything has been read. */
 export const nothingRead: Inside = {
   slices: [],
-  byText: new Map(),
   names: { clocks: new Map(), filters: new Map(), channels: new Map() },
   lists: { clocks: [], filters: [], channels: [] },
   resolved: new Map(),

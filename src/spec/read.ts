@@ -6,11 +6,9 @@ import type { Inside, PlacedSlice } from './inside';
 import { problemsOf } from './problems';
 import type { ChannelEntry, Reading } from './reading';
 import { Resolver } from './resolver';
-import { readSlice } from './slice-reading';
-import type { Known, SliceReading } from './slice-reading';
+import { readSlices } from './read-slices';
 import { sliceAt } from './slices/slice-at';
 import { scan } from './slices/scan';
-import type { Slice } from './slices/slice';
 import { largestSpec, tooLarge } from './too-large';
 import { scalars } from './tree-walk';
 import { vocabulary } from './vocabulary';
@@ -23,51 +21,23 @@ export function read(text: string, previous?: Reading): Reading {
   if (text.length > largestSpec) return new SpecReading(tooLarge(text), nothingRead);
   const before = previous === undefined ? nothingRead : insideOf(previous);
   const { slices, faults } = scan(text, vocabulary);
-  const cut = readSlices(slices, before);
-  const names = namesIn(cut.placed);
+  const { placed, count } = readSlices(slices, before);
+  const names = namesIn(placed);
   const lists = nameLists(names, before.lists);
-  const resolver = new Resolver(definitionsOf(names, lists, cut.placed), before.resolved);
+  const resolver = new Resolver(definitionsOf(names, lists, placed), before.resolved);
   for (const name of names.channels.keys()) resolver.resolve(name);
-  const inside: Inside = { slices: cut.placed, byText: cut.byText, names, lists, resolved: resolver.resolved };
-  const accepted = findAcceptances(text, (offset) => isInScalar(cut.placed, offset));
+  const inside: Inside = { slices: placed, names, lists, resolved: resolver.resolved };
+  const accepted = findAcceptances(text, (offset) => isInScalar(placed, offset));
   const shown: Reading = {
     text,
-    title: cut.placed.find(({ reading }) => reading.title !== null)?.reading.title ?? null,
+    title: placed.find(({ reading }) => reading.title !== null)?.reading.title ?? null,
     entries: [...names.channels.keys()].map((name) => entryOf(name, inside)),
     names: definedNames(inside),
-    problems: problemsOf(text, inside, faults, [...accepted.problems, ...problemsOfTwins(cut.placed)]),
+    problems: problemsOf(text, inside, faults, [...accepted.problems, ...problemsOfTwins(placed)]),
     acceptances: accepted.acceptances,
-    counts: { slices: slices.length, slicesRead: cut.count, channelsResolved: resolver.count },
+    counts: { slices: slices.length, slicesRead: count, channelsResolved: resolver.count },
   };
   return new SpecReading(shown, inside);
-}
-
-interface CutText {
-  readonly placed: readonly PlacedSlice[];
-  readonly byText: ReadonlyMap<string, SliceReading>;
-  /** How many slices had to be read anew. */
-  readonly count: number;
-}
-
-function readSlices(slices: readonly Slice[], before: Inside): CutText {
-  const known: Known = {
-    clock: (name) => before.names.clocks.get(name)?.named,
-    filter: (name) => before.names.filters.get(name)?.named,
-    channel: (name) => before.names.channels.get(name)?.named,
-  };
-  const byText = new Map<string, SliceReading>();
-  let count = 0;
-  const placed = slices.map((slice) => {
-    const key = `${slice.kind} ${String(slice.doubtful)} ${slice.lead}\0${slice.text}`;
-    let reading = byText.get(key) ?? before.byText.get(key);
-    if (reading === undefined) {
-      reading = readSlice(slice, known);
-      count += 1;
-    }
-    byText.set(key, reading);
-    return { slice, reading };
-  });
-  return { placed, byText, count };
 }
 
 function entryOf(name: string, { names, resolved }: Inside): ChannelEntry {

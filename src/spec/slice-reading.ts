@@ -31,6 +31,8 @@ export interface Named<T> {
 
 /** What one slice holds. */
 export interface SliceReading {
+  /** The slice that was read; its text is a copy of its own. */
+  readonly slice: Pick<Slice, 'kind' | 'text' | 'lead' | 'doubtful'>;
   readonly pairs: readonly Pair[];
   readonly title: string | null;
   readonly clocks: readonly Named<ClockModel>[];
@@ -81,14 +83,16 @@ class SliceReader {
     const { tree, lossy } = this.parsed;
     const pairs = tree?.form === 'map' ? tree.pairs : [];
     for (const pair of pairs) this.section(pair);
+    const { kind, lead, doubtful } = this.slice;
     return {
+      slice: { kind, lead, doubtful, text: this.text },
       pairs,
       title: this.title,
       clocks: this.clocks,
       filters: this.filters,
       channels: this.channels,
       problems: this.owned(),
-      lossy: lossy || this.slice.doubtful,
+      lossy: lossy || doubtful,
     };
   }
 

@@ -1,6 +1,7 @@
 /** Collects where slices begin, and the faults of lines that belong to none. */
 import { fault } from '../slips/fault';
 import type { Fault } from '../slips/fault';
+import { lineEndAt } from './content-lines';
 import type { ContentLines } from './content-lines';
 import { keyLineAt } from './key-line';
 import type { KeyLine } from './key-line';
@@ -37,7 +38,7 @@ export class Cutting {
   }
 
   endOf(line: number): number {
-    return this.lines.end[line] ?? this.text.length;
+    return lineEndAt(this.text, this.contentOf(line));
   }
 
   indentOf(line: number): number {

@@ -1,6 +1,7 @@
 /** Lines in column 0 that are no part of any spec: git conflict markers, document markers, directives. */
 import { fault } from '../slips/fault';
 import type { Fault } from '../slips/fault';
+import { lineEndAt } from './content-lines';
 import type { ContentLines } from './content-lines';
 
 /** The faults, and the content lines (by index) that are to be read as blank. */
@@ -20,7 +21,8 @@ interface Found {
 /** Finds them; the upper side of a conflict is read, the lower one is not. */
 export function marginFaults(text: string, lines: ContentLines): MarginFaults {
   const found: Found = { faults: [], blankLines: new Set(), doubtful: [] };
-  const margin = lines.start.flatMap((start, index) => (lines.content[index] === start ? [index] : []));
+  const margin: number[] = [];
+  for (let line = 0; line < lines.start.length; line += 1) if (lines.start[line] === lines.content[line]) margin.push(line);
   conflicts(text, lines, margin, found);
   documents(text, lines, margin, found);
   return found;
@@ -52,13 +54,13 @@ function conflict(text: string, lines: ContentLines, markers: readonly number[],
   found.blankLines.add(first);
   for (let line = ours; line <= last; line += 1) found.blankLines.add(line);
   const start = lines.start[first] ?? 0;
-  const end = lines.end[first] ?? start;
-  found.doubtful.push({ start, end: lines.end[last] ?? end });
+  const end = lineEnd(text, lines, first);
+  found.doubtful.push({ start, end: lineEnd(text, lines, last) });
   const whole = text.charAt(start) === '<' && text.charAt(lines.start[last] ?? 0) === '>';
   const divide = markers.at(-2) ?? first;
   const dropLines = (from: number, to: number) => ({
     start: lines.start[from] ?? 0,
-    end: nextLine(text, lines.end[to] ?? 0),
+    end: nextLine(text, lineEnd(text, lines, to)),
     newText: '',
   });
   const cures = [
@@ -72,6 +74,10 @@ function conflict(text: string, lines: ContentLines, markers: readonly number[],
   found.faults.push(fault(start, end, message, whole && markers.length >= 3 ? cures : markers.length === 1 ? lone : []));
 }
 
+function lineEnd(text: string, lines: ContentLines, line: number): number {
+  return lineEndAt(text, lines.start[line] ?? text.length);
+}
+
 function nextLine(text: string, lineEnd: number): number {
   const lineFeed = text.indexOf('\n', lineEnd);
   return lineFeed < 0 ? text.length : lineFeed + 1;
@@ -83,7 +89,7 @@ function documents(text: string, lines: ContentLines, margin: readonly number[],
   for (const line of margin) {
     if (found.blankLines.has(line)) continue;
     const start = lines.start[line] ?? 0;
-    const end = lines.end[line] ?? start;
+    const end = lineEnd(text, lines, line);
     const sign = /^(?:---|\.\.\.)(?=[ \t\r\n]|$)/.exec(text.slice(start, Math.min(end, start + 4)))?.[0];
     const message =
       sign !== undefined
@@ -107,7 +113,7 @@ const directiveMessage = 'A line that begins with `%` is a YAML directive, which
 
 function documentFault(text: string, lines: ContentLines, line: number, sign: string, seenContent: boolean): string | null {
   const start = lines.start[line] ?? 0;
-  const bare = /^\s*(?:#|$)/.test(text.slice(start + 3, lines.end[line]));
+  const bare = /^\s*(?:#|$)/.test(text.slice(start + 3, lineEnd(text, lines, line)));
   const opens = sign === '---' && !seenContent;
   const closes = sign === '...' && line === lines.start.length - 1;
   if (bare && (opens || closes)) return null;
