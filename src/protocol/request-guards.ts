@@ -20,7 +20,7 @@ export function isAboutDocument(value: unknown): value is { textDocument: { uri:
 
 /** Parameters of a standard request about a position in a document. */
 export function isAboutPosition(value: unknown): value is { textDocument: { uri: string }; position: Position } {
-  return isRecord(value) && isAboutDocument(value) && isPosition(value['position']);
+  return isRecord(value) && isPosition(value['position']) && isAboutDocument(value);
 }
 
 /** Parameters of `bandkeep/picture`. */
@@ -45,7 +45,7 @@ export function isCountsParams(value: unknown): value is CountsParams {
 
 /** Parameters of `textDocument/codeAction`. */
 export function isAboutRange(value: unknown): value is { textDocument: { uri: string }; range: Range } {
-  return isRecord(value) && isAboutDocument(value) && isRange(value['range']);
+  return isRecord(value) && isRange(value['range']) && isAboutDocument(value);
 }
 
 /** The server's options as the client may hand them over. */

@@ -6,7 +6,7 @@ import { ableEditor, offsetIn, opened, openedAndProved, plainAbilities, type Ope
 import { passingSpec } from '../support/spec-texts';
 
 const options = { abilities: ableEditor, docsBase: null };
-const aliasing = passingSpec.replace('divide: 384', 'divide: 640').replace('90 kHz ..', '¦90 kHz ..');
+const aliasing = passingSpec.replace('divide: 384', 'divide: 480').replace('40 kHz ..', '¦40 kHz ..');
 const whole: Range = { start: { line: 0, character: 0 }, end: { line: 1000, character: 0 } };
 
 const atCursor = ({ document, cursor }: Opened, abilities = ableEditor): CodeAction[] =>
@@ -110,7 +110,7 @@ describe('quick fixes', () => {
   });
 
   it('say why there is none, to who opens the menu', () => {
-    const impossible = passingSpec.replace('flatness: 0.8 dB', 'flatness: ¦0.0001 dB').replace('divide: 384 }', 'divide: 640 }');
+    const impossible = passingSpec.replace('flatness: 0.8 dB', 'flatness: ¦0.0001 dB').replace('divide: 384 }', 'divide: 480 }');
     const all = openedAndProved(impossible);
     const disabled = atCursor(all).filter((action) => action.disabled !== undefined);
     const fixes = atCursor(all).filter((action) => action.isPreferred === true);

@@ -32,7 +32,7 @@ channels:
   });
 
   it('name their page, their source and the related places', () => {
-    const { document } = opened(passingSpec.replace('divide: 384', 'divide: 640'));
+    const { document } = opened(passingSpec.replace('divide: 384', 'divide: 480'));
     const [item] = diagnostics(document, options);
     assert.equal(item?.code, 'alias-over-limit');
     assert.equal(item.severity, DiagnosticSeverity.Error);
@@ -42,7 +42,7 @@ channels:
   });
 
   it('leave out what the editor cannot show', () => {
-    const { document } = opened(passingSpec.replace('divide: 384', 'divide: 640'));
+    const { document } = opened(passingSpec.replace('divide: 384', 'divide: 480'));
     const [item] = diagnostics(document, { abilities: plainAbilities, docsBase: null });
     assert.ok(item);
     assert.equal(item.relatedInformation, undefined);
@@ -65,7 +65,7 @@ channels:
 
   it('do not show what has been accepted', () => {
     const accepted = passingSpec
-      .replace('divide: 384', 'divide: 640')
+      .replace('divide: 384', 'divide: 480')
       .replace('      - { name: drive', '      # bandkeep: accept alias-over-limit, agreed in review 7\n      - { name: drive');
     assert.deepEqual(diagnostics(opened(accepted).document, options), []);
   });

@@ -41,12 +41,13 @@ describe('an open spec', () => {
   it('moves the edits of kept fixes with their lines', () => {
     const spec = openSpec('file:///a', 1, broken);
     proved(spec);
-    const after = changed(spec, broken.replace('title: Many gauges', 'title: Many gauges\nnotes: A line more.'));
+    const line = '\nnotes: A line more.';
+    const after = changed(spec, broken.replace('title: Many gauges', `title: Many gauges${line}`));
     assert.equal(unproved(after).length, 0);
     for (const finding of after.judgement.findings) {
       for (const { edits } of after.cureOf(finding)?.fixes ?? []) {
         for (const { span } of edits) {
-          assert.equal(after.reading.text.slice(span.start, span.end), broken.slice(span.start - 21, span.end - 21));
+          assert.equal(after.reading.text.slice(span.start, span.end), broken.slice(span.start - line.length, span.end - line.length));
         }
       }
     }

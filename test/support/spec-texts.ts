@@ -9,17 +9,17 @@ clocks:
 
 filters:
   guard:
-    - { family: butterworth, order: 6, corner: 14 kHz }
+    - { family: butterworth, order: 4, corner: 14 kHz }
 
 channels:
   bearing:
     direction: capture
     wanted: { band: 5 Hz .. 10 kHz, level: -3 dBFS }
     unwanted:
-      - { name: drive hash, band: 90 kHz .. 3 MHz, level: -40 dBFS }
+      - { name: drive hash, band: 40 kHz .. 3 MHz, level: -55 dBFS }
     full-scale: 4 V
     rate: { clock: board, divide: 384 }
-    rate-choices: { clock: board, multiply: 1, divide: [192, 240, 256, 320, 384, 480, 640] }
+    rate-choices: { clock: board, multiply: 1, divide: [192, 240, 256, 320, 384, 480] }
     aperture: 300 ns
     filter: guard
     bits: 16

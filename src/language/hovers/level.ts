@@ -28,8 +28,13 @@ export function levelRows({ fullScaleVpp, impedanceOhm, bits }: Channel, levelDb
     ['V rms', rms === null ? null : formatVoltage(rms, 'V rms')],
     ['V pp', rms === null ? null : formatVoltage(rms * peakToPeakOverRms, 'V pp')],
     ['dBm', rms === null || impedanceOhm === null ? null : formatDb(10 * Math.log10(rms ** 2 / impedanceOhm / milliwatt), 'dBm')],
-    ['LSB, peak to peak', bits === null ? null : (2 ** bits * ratio).toPrecision(4)],
+    ['LSB, peak to peak', bits === null ? null : stepsWords(2 ** bits * ratio)],
   );
+}
+
+/** A number of steps: whole where it is large, else with four digits. */
+function stepsWords(steps: number): string {
+  return steps >= 1000 ? String(Math.round(steps)) : String(Number(steps.toPrecision(4)));
 }
 
 function levelAt(channel: Channel, path: Path): number | null {

@@ -1,8 +1,9 @@
 /** Hover of an aperture or a hold: what its width takes from the band's edges, and where it passes nothing. */
 import { channelPath, gainDb, pulseNulls, pulseSeconds } from '../../analysis';
-import { formatDb, formatFrequency, formatPercent, formatTime } from '../../units/format';
+import { formatFrequency, formatPercent, formatTime } from '../../units/format';
 import type { Answer, Row } from './answer';
 import type { Subject } from './subject';
+import { lossWords } from './words';
 
 /** How many nulls are listed. */
 const listedNulls = 3;
@@ -13,7 +14,7 @@ export function pulseHover({ channel, figures }: Subject): Answer {
   const width = pulseSeconds(channel.pulse, figures.rate);
   if (width === 0) return { headline: 'An instant: it takes nothing from any frequency', rows: [], formula: null };
   const { pulse } = channelPath(channel);
-  const loss = (hz: number): string => formatDb(-gainDb(pulse, hz), 'dB', 2);
+  const loss = (hz: number): string => lossWords(-gainDb(pulse, hz));
   const edges = figures.wanted.flatMap(({ low, high }): Row[] => [
     [`loss at ${formatFrequency(low)}`, loss(low)],
     [`loss at ${formatFrequency(high)}`, loss(high)],

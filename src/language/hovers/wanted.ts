@@ -3,7 +3,7 @@ import { channelPath, gainDb, lossDb } from '../../analysis';
 import { formatDb, formatFrequency } from '../../units/format';
 import { knownRows, type Answer } from './answer';
 import { indexIn, type Subject } from './subject';
-import { bandWords, turnWords } from './words';
+import { bandWords, lossWords, turnWords } from './words';
 
 /** The wanted band at the subject's path, or null where there is none. */
 export function wantedHover({ channel, figures, path }: Subject): Answer | null {
@@ -11,7 +11,7 @@ export function wantedHover({ channel, figures, path }: Subject): Answer | null 
   if (band === undefined) return null;
   const { total } = channelPath(channel);
   const edge = (hz: number): string =>
-    `${formatDb(band.level + gainDb(total, hz), 'dBFS')}, droop ${formatDb(lossDb(total, hz, figures.reference), 'dB', 2)}`;
+    `${formatDb(band.level + gainDb(total, hz), 'dBFS')}, droop ${lossWords(lossDb(total, hz, figures.reference))}`;
   const verb = figures.direction === 'capture' ? 'appears at' : 'leaves at';
   return {
     headline: `${bandWords(band.low, band.high)} ${verb} ${bandWords(band.appearsLow, band.appearsHigh)}, ${turnWords(band.inverted)}`,

@@ -6,6 +6,13 @@ export function marginWords(marginDb: number, decimals = 1): string {
   return `${formatDb(Math.abs(marginDb), 'dB', decimals)} ${marginDb < 0 ? 'over' : 'inside'} the limit`;
 }
 
+/** A small loss with two digits that matter, at least to a hundredth of a decibel. */
+export function lossWords(lossDb: number): string {
+  const size = Math.abs(lossDb);
+  const decimals = size === 0 || !Number.isFinite(size) ? 2 : Math.min(Math.max(2, 1 - Math.floor(Math.log10(size))), 6);
+  return formatDb(lossDb, 'dB', decimals);
+}
+
 /** A stretch of frequencies; infinity is an open end. */
 export function bandWords(lowHz: number, highHz: number): string {
   return Number.isFinite(highHz) ? `${formatFrequency(lowHz)} .. ${formatFrequency(highHz)}` : `${formatFrequency(lowHz)} ..`;
