@@ -15,7 +15,7 @@ export interface CopyAxis {
  * @param response at output frequencies.
  * @param axis where x leaves.
  * Source: substitution.
- * @example alongCopy(rectangleResponse(1 / 48000), { offsetHz: 48000, direction: -1 }).logGain(24000) // that of 24 kHz
+ * @example Math.exp(alongCopy(rectangleResponse(1), { offsetHz: 1, direction: -1 }).logGain(0.5)) // 0.636619772
  */
 export function alongCopy(response: Response, axis: CopyAxis): Response {
   if (axis.offsetHz === 0 && axis.direction === 1) return response;
@@ -42,6 +42,7 @@ export function alongCopy(response: Response, axis: CopyAxis): Response {
  * @param copy where f is for each x.
  * @param wanted where r is for each x.
  * Source: interval branch and bound, common practice; slopes by the envelope theorem.
+ * @example Math.exp(tiedRatio(filterResponse(realPole(1000)), { low: 0.5, high: 2 }, { offsetHz: 3000, direction: -1 }, { offsetHz: 0, direction: 1 }).logGain(1000)) // 0.790569415
  */
 export function tiedRatio(response: Response, factors: Enclosure, copy: CopyAxis, wanted: CopyAxis): StretchedResponse {
   const ratio = new FactorRatio(response, factors);

@@ -9,7 +9,7 @@ export interface Integral {
 // Nodes and weights of the 7-point Gauss and 15-point Kronrod rules on [−1, 1], from the middle outwards; the Gauss nodes are every
 // second one. Source: R. Piessens et al., QUADPACK (1983), routine QK15.
 const nodes = [
-  0, 0.20778495500789847, 0.4058451513773972, 0.5860872354676911, 0.7415311855993945, 0.8648644233597691, 0.9491079123427585,
+  0, 0.2077849550078985, 0.4058451513773972, 0.5860872354676911, 0.7415311855993945, 0.8648644233597691, 0.9491079123427585,
   0.9914553711208126,
 ] as const;
 const kronrodWeights = [
@@ -24,7 +24,14 @@ const panelLimit = 2000;
 /** Rounding of a sum of products, relative. */
 const rounding = 1e-14;
 
-/** Integrates a smooth function over a finite interval to a relative error, splitting the worst panel first. */
+/**
+ * Integrates a smooth function over a finite interval, splitting the worst panel first.
+ *
+ * @param integrand finite everywhere in between; the ends themselves are never asked for.
+ * @param relative where to stop, against the value; after 2000 panels the error bound says how far it got.
+ * Source: R. Piessens et al., QUADPACK (1983).
+ * @example integrate((x) => x * x, 0, 3, 1e-9).value // 9
+ */
 export function integrate(integrand: (x: number) => number, low: number, high: number, relative: number): Integral {
   const panels = [panelOf(integrand, low, high)];
   for (;;) {

@@ -8,7 +8,13 @@ export function checkFamily(order: number, cornerHz: number): void {
     throw new RangeError(`A corner must be a frequency above 0 Hz, not ${cornerHz}.`);
 }
 
-/** Poles at the angles π(2i + 1)/(2·order) from the imaginary axis: the upper half as `poleAt` places it, its mirror image, and the real one. */
+/**
+ * Poles at the angles π(2i + 1)/(2·order) from the imaginary axis: the upper half as `poleAt` places it, its mirror image, and the real one.
+ *
+ * @param order whole, ≥ 1.
+ * @param poleAt the pole in Hz at an angle in radians, 0 … π/2.
+ * @example mirrored(3, (angle) => ({ re: -Math.sin(angle), im: Math.cos(angle) })).length // 3
+ */
 export function mirrored(order: number, poleAt: (angle: number) => Root): readonly Root[] {
   const poles: Root[] = [];
   for (let i = 0; 2 * i + 1 < order; i += 1) {

@@ -18,12 +18,6 @@ export interface Extreme {
   readonly evaluations: number;
 }
 
-/** A part that is seen at F and at x at once, with one corner factor for both: it adds the largest H(F/c)/H(x/c) over its factors. */
-export interface Coupled {
-  readonly response: Response;
-  readonly factors: Enclosure;
-}
-
 /** The largest gain over every frequency k·rate ± x. */
 export interface FoldQuestion {
   /** Low = high for an exact rate; F then ranges over k·rate ± x, else over [k·low ± …, k·high ± …]. */
@@ -32,8 +26,6 @@ export interface FoldQuestion {
   readonly outer: Response;
   /** Taken at x, in series; only with an exact rate. */
   readonly inner: Response | null;
-  /** Parts with a tolerance, taken at F against x with the same corner factor; only with an exact rate. */
-  readonly coupled?: readonly Coupled[];
   /** The ranges of x, 0 … rate/2. */
   readonly bands: readonly Enclosure[];
   /** F counts only inside these (high may be Infinity); null: everywhere. A zero-width meeting at fold 0 does not count. */

@@ -12,7 +12,11 @@ export interface Curve {
   slope(lowHz: number, highHz: number): Enclosure | null;
 }
 
-/** A response as a curve. */
+/**
+ * A response as a curve.
+ *
+ * @example curveOf(rectangleResponse(1), 3).tag // 3
+ */
 export function curveOf(response: Response, tag: number): Curve {
   return {
     tag,

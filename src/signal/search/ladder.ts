@@ -82,12 +82,20 @@ export class Ladder {
 
 const none: Enclosure = { low: 1, high: 0 };
 
-/** The multiple of the rate that a rung lies beside. */
+/**
+ * The multiple of the rate that a rung lies beside.
+ *
+ * @example foldOf(5) // 3
+ */
 export function foldOf(rung: number): number {
   return Math.ceil(rung / 2);
 }
 
-/** Whether a rung lies below its multiple of the rate. */
+/**
+ * Whether a rung lies below its multiple of the rate.
+ *
+ * @example isLower(5) // true
+ */
 export function isLower(rung: number): boolean {
   return rung % 2 === 1;
 }

@@ -15,7 +15,7 @@ import { curveOf, openInterval, type Curve } from './interval';
  * @param bands closed intervals in Hz, 0 ≤ low ≤ high ≤ Infinity.
  * @returns null for no bands; −Infinity where the gain is nothing but nulls.
  * Source: interval branch and bound, common practice; Piyavskii's two lines.
- * @example largestOverBands(rectangleResponse(1), [{ low: 1, high: 2 }]).frequencyHz // 1.4303
+ * @example largestOverBands(rectangleResponse(1), [{ low: 0.25, high: 3 }]).frequencyHz // 0.25
  */
 export function largestOverBands(response: Response, bands: readonly Enclosure[], options: SearchOptions = {}): Extreme | null {
   if (bands.length === 0) return null;

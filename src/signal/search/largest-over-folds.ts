@@ -55,8 +55,7 @@ interface Rung {
 function checkQuestion(question: FoldQuestion): void {
   const { low, high } = question.rateHz;
   if (!(low > 0 && low <= high && high < Infinity)) throw new RangeError(`A rate must be above 0 Hz, not ${low} .. ${high}.`);
-  if ((question.inner !== null || question.coupled !== undefined) && low !== high)
-    throw new RangeError('A gain at x needs an exact rate.');
+  if (question.inner !== null && low !== high) throw new RangeError('A gain at x needs an exact rate.');
 }
 
 class Curves implements LadderCurves {
@@ -67,8 +66,8 @@ class Curves implements LadderCurves {
     readonly ladder: Ladder,
     private readonly rungs: Rung[],
   ) {
-    const { inner, outer, coupled = [] } = question;
-    this.sight = inner === null && coupled.length === 0 ? null : new Sight(outer, inner, coupled);
+    const { inner, outer } = question;
+    this.sight = inner === null ? null : new Sight(outer, inner);
   }
 
   upper(hull: Enclosure): number {

@@ -1,8 +1,6 @@
-/** What is maximised where F and x both count: the outer gain at F, the inner at x, and parts seen at both with one corner factor. */
-import { FactorRatio } from '../factor-ratio';
+/** What is maximised where F and x both count: the outer gain at F and the inner at x. */
 import { negated, plus, unlessNaN } from '../interval-arithmetic';
 import type { Enclosure, Response } from '../response';
-import type { Coupled } from './extreme';
 import type { Curve } from './interval';
 import { foldOf, isLower } from './ladder';
 
@@ -12,7 +10,11 @@ export interface InnerAxis {
   readonly direction: 1 | -1;
 }
 
-/** The axis of one rung. */
+/**
+ * The axis of one rung.
+ *
+ * @example innerAxis(1, 48000).offset // 48000
+ */
 export function innerAxis(rung: number, rateHz: number): InnerAxis {
   const multiple = foldOf(rung) * rateHz;
   return isLower(rung) ? { offset: multiple, direction: -1 } : { offset: -multiple, direction: 1 };
@@ -20,40 +22,28 @@ export function innerAxis(rung: number, rateHz: number): InnerAxis {
 
 /** The sum of logarithms over F and x. */
 export class Sight {
-  private readonly ratios: readonly FactorRatio[];
-
   constructor(
     private readonly outer: Response,
-    private readonly inner: Response | null,
-    coupled: readonly Coupled[],
-  ) {
-    this.ratios = coupled.map(({ response, factors }) => new FactorRatio(response, factors));
-  }
+    private readonly inner: Response,
+  ) {}
 
   logGain(frequencyHz: number, x: number): number {
-    let sum = this.outer.logGain(frequencyHz) + (this.inner?.logGain(x) ?? 0);
-    for (const ratio of this.ratios) sum += ratio.at(frequencyHz, x).logGain;
-    return unlessNaN(sum, -Infinity);
+    return unlessNaN(this.outer.logGain(frequencyHz) + this.inner.logGain(x), -Infinity);
   }
 
   /** An upper bound over boxes of both. */
   upper(frequencies: Enclosure, xs: Enclosure): number {
-    let sum = this.outer.bounds(frequencies.low, frequencies.high).high + (this.inner?.bounds(xs.low, xs.high).high ?? 0);
-    for (const ratio of this.ratios) sum += ratio.upper(frequencies, xs);
-    return unlessNaN(sum, Infinity);
+    return unlessNaN(
+      this.outer.bounds(frequencies.low, frequencies.high).high + this.inner.bounds(xs.low, xs.high).high,
+      Infinity,
+    );
   }
 
   /** An enclosure of d/dF along x = offset + direction·F. */
   slope(frequencies: Enclosure, xs: Enclosure, direction: 1 | -1): Enclosure | null {
-    const alongX = (slope: Enclosure | null): Enclosure | null => (slope === null || direction === 1 ? slope : negated(slope));
-    let sum = this.outer.slope(frequencies.low, frequencies.high);
-    if (sum !== null && this.inner !== null) sum = plus(sum, alongX(this.inner.slope(xs.low, xs.high)));
-    for (const ratio of this.ratios) {
-      if (sum === null) return null;
-      const slopes = ratio.slopes(frequencies, xs);
-      sum = slopes === null ? null : plus(plus(sum, slopes.frequency), alongX(slopes.reference));
-    }
-    return sum;
+    const outer = this.outer.slope(frequencies.low, frequencies.high);
+    const inner = outer === null ? null : this.inner.slope(xs.low, xs.high);
+    return plus(outer, inner === null || direction === 1 ? inner : negated(inner));
   }
 }
 

@@ -57,8 +57,9 @@ describe('chebyshev', () => {
     for (const { order, ripple } of vectors) {
       const filter = chebyshev(order, 1, ripple, 'ripple');
       const response = filterResponse(filter);
-      assert.equal(filter.turnsHz?.length, order - 1);
-      [...(filter.turnsHz ?? [])].reverse().forEach((turn, fromTop) => {
+      const turns = filter.turnsHz ?? [];
+      assert.equal(turns.length, order - 1);
+      turns.toReversed().forEach((turn, fromTop) => {
         assertWithin(
           toDb(response.logGain(turn)),
           fromTop % 2 === 0 ? 0 : -ripple,

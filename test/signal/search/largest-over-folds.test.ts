@@ -176,40 +176,17 @@ describe('largestOverFolds', () => {
     assert.deepEqual([images.frequencyHz, images.landsHz, images.fold, images.side], [28e3, 20e3, 1, 'lower']);
   });
 
-  it('gives a part with a tolerance one corner for the image and for the wanted tone', () => {
-    for (const stage of [filterResponse(butterworth(5, 26e3)), filterResponse(chebyshev(5, 24e3, 1, 'ripple'))]) {
-      const hold = rectangleResponse(1 / 48e3);
-      const factors = { low: 0.9, high: 1.08 };
-      const images = largestOverFolds({
-        rateHz: exactly(48e3),
-        outer: hold,
-        inner: inverse(hold),
-        coupled: [{ response: stage, factors }],
-        bands: [{ low: 1e3, high: 20e3 }],
-        within: null,
-        firstFold: 1,
-        lastFold: Infinity,
-        sides: 'both',
-      })!;
-      let best = -Infinity;
-      for (let i = 0; i <= 90; i += 1) {
-        const moved = (f: number): number => hold.logGain(f) + stage.logGain(f / (0.9 + 0.002 * i));
-        for (let x = 1e3; x <= 20e3; x += 100) {
-          for (const f of [48e3 - x, 48e3 + x, 96e3 - x]) best = Math.max(best, moved(f) - moved(x));
-        }
-      }
-      assert.ok(toDb(best) <= toDb(images.logGain) + roundingDb);
-      assertWithin(toDb(best), toDb(images.logGain), 0.01);
-      assert.ok(images.gapDb <= provedGapDb && images.evaluations <= 100);
-    }
-  });
-
   it('says where a supremum is only approached at infinity, and where a flat path reaches it at once', () => {
     const flat = largestOverFolds({ ...question, outer: constantResponse(-2), within: null, firstFold: 1 })!;
     assert.equal(flat.logGain, -2);
     assert.equal(flat.frequencyHz, 41.2e3);
-    const rising = largestOverFolds({ ...question, outer: saturating(guard), within: null, firstFold: 1 })!;
-    assert.equal(rising.logGain, 0);
+    const rising = largestOverFolds({
+      ...question,
+      outer: saturating(filterResponse(realPole(14e3))),
+      within: null,
+      firstFold: 1,
+    })!;
+    assertWithin(rising.logGain, 0, 1e-12);
     assert.deepEqual([rising.frequencyHz, rising.fold, rising.gapDb], [Infinity, Infinity, 0]);
   });
 
