@@ -22,6 +22,9 @@ export function decodeScalar(scalar: Scalar, node: ScalarNode): ScalarReading {
   if (scalar.laterWords !== undefined && Object.hasOwn(scalar.laterWords, text)) {
     return { fault: errorAt(node, 'unknown-name', `\`${text}\` is not supported yet: ${expected({ scalar })} is`) };
   }
+  const refused =
+    scalar.refusedWords !== undefined && Object.hasOwn(scalar.refusedWords, text) ? scalar.refusedWords[text] : undefined;
+  if (refused !== undefined) return { fault: errorAt(node, 'unknown-name', refused) };
   if (isNumeric(text) || !(scalar.words ?? scalar.name ?? scalar.text)) {
     const measured = decodeMeasured(scalar, node);
     if (measured !== null) return measured;
@@ -54,7 +57,7 @@ function decodeQuantity(scalar: Scalar, node: ScalarNode): ScalarReading {
     const message = `no tolerance can stand behind \`${bare}\` here: tolerances stand behind parts, clocks and tones, and in \`tolerance\` of a stage`;
     return { fault: errorAt(node, 'not-a-quantity', message, [writeInstead(node, bare)]) };
   }
-  const fault = boundFault(quantity, scalar.bounds);
+  const fault = boundFault(quantity, oneSpelling(node.text), scalar.bounds);
   return fault === null ? { value: quantity } : { fault: errorAt(node, 'out-of-range', fault) };
 }
 
@@ -78,7 +81,9 @@ function quantityFault(fault: QuantityFault, node: ScalarNode): LocalProblem {
 function decodeWhole(scalar: Scalar, [least, most]: readonly [number, number], node: ScalarNode): ScalarReading {
   const value = wholeNumber(node.text);
   if (value === null) {
-    return { fault: errorAt(node, 'not-a-quantity', `\`${node.text}\` is not ${expected({ scalar })}`) };
+    const meant = /^(\d+) ?[a-z]+$/.exec(node.text)?.[1];
+    const cures = meant === undefined ? [] : [writeInstead(node, meant)];
+    return { fault: errorAt(node, 'not-a-quantity', `\`${node.text}\` is not ${expected({ scalar })}`, cures) };
   }
   if (value >= least && value <= most) return { value };
   return { fault: outside(node, node.text, least, most) };
@@ -99,7 +104,7 @@ function decodeWholeRange([least, most]: readonly [number, number], node: Scalar
 const wholeNumber = (text: string) => (/^[+-]?\d+$/.test(oneSpelling(text)) ? Number(oneSpelling(text)) : null);
 
 const outside = (node: ScalarNode, text: string, least: number, most: number) =>
-  errorAt(node, 'out-of-range', `\`${text}\` is outside ${least} to ${most}`);
+  errorAt(node, 'out-of-range', `\`${text}\` is out of range: from ${least} to ${most}`);
 
 function unknownWord(scalar: Scalar, node: ScalarNode): LocalProblem {
   const meant = nearest(node.text, Object.keys({ ...scalar.words, ...scalar.laterWords }));

@@ -2,10 +2,10 @@
 import { decodeFields } from './decode-fields';
 import { decodeScalar } from './decode-scalar';
 import { expected } from './expected';
-import { errorAt } from './local-problem';
+import { errorAt, writeInstead } from './local-problem';
 import type { LocalProblem } from './local-problem';
 import type { Entries, List, Shape } from './shape';
-import type { ListNode, MapNode, TreeNode } from './tree';
+import type { ListNode, MapNode, ScalarNode, TreeNode } from './tree';
 import type { Home, Walk } from './walk';
 
 /** What a tree decodes to. */
@@ -49,11 +49,24 @@ function wrongForm(shape: Shape<unknown>, node: TreeNode, home: Home): LocalProb
   const { scalar } = shape;
   const measured = scalar?.quantity ?? scalar?.range ?? scalar?.whole;
   const stands = node.form === 'scalar' ? `\`${node.text}\`` : `a ${node.form}`;
+  const message = `${home.called} takes ${expected(shape)}, but ${stands} stands here`;
+  const meant = node.form === 'scalar' ? keyMissing(shape, node) : null;
   return errorAt(
     node,
     measured === undefined ? 'syntax' : 'not-a-quantity',
-    `${home.called} takes ${expected(shape)}, but ${stands} stands here`,
+    message,
+    meant === null ? [] : [writeInstead(node, meant)],
   );
+}
+
+/** A value that stands where a map is needed may only lack its key: `wanted: 5 Hz .. 10 kHz`. */
+function keyMissing({ map }: Shape<unknown>, node: ScalarNode): string | null {
+  if (map === undefined || !('fields' in map)) return null;
+  const fitting = Object.entries(map.fields).find(([, { shape, later }]) => {
+    if (later === true || shape.scalar === undefined || shape.scalar.text === true) return false;
+    return 'value' in decodeScalar(shape.scalar, node);
+  });
+  return fitting === undefined ? null : `{ ${fitting[0]}: ${node.text} }`;
 }
 
 function decodeList(list: List, node: ListNode, home: Home, problems: LocalProblem[]): unknown {

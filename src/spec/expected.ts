@@ -24,9 +24,9 @@ function mapKeys({ fields, decidedBy }: { readonly fields: object; readonly deci
 
 function* scalarParts(scalar: Scalar): Generator<string> {
   if (scalar.name !== undefined) yield `a name from \`${scalar.name}\``;
-  if (scalar.words !== undefined) yield orList(Object.keys(scalar.words).map((known) => `\`${known}\``));
+  for (const known of Object.keys(scalar.words ?? {})) yield `\`${known}\``;
   if (scalar.quantity !== undefined)
-    yield orList(scalar.quantity.map((kind) => `${kindProse[kind].called} such as \`${kindProse[kind].example}\``));
+    yield* scalar.quantity.map((kind) => `${kindProse[kind].called} such as \`${kindProse[kind].example}\``);
   if (scalar.range !== undefined)
     yield `a range \`LOW .. HIGH\` of ${orList(scalar.range.map((kind) => kindProse[kind].called))}`;
   if (scalar.whole !== undefined) yield `a whole number from ${scalar.whole[0]} to ${scalar.whole[1]}`;

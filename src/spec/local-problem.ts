@@ -10,7 +10,13 @@ export type LocalCure = LocalProblem['cures'][number];
 
 /** An error at a span of a slice. */
 export function errorAt(span: Span, code: ProblemCode, message: string, cures: readonly LocalCure[] = []): LocalProblem {
-  return { code, severity: 'error', span: { start: span.start, end: span.end }, message, cures };
+  return { code, severity: 'error', span: { start: span.start, end: span.end }, message: sentence(message), cures };
+}
+
+/** A message as a sentence: a capital at its start, unless code stands there, and a point at its end. */
+export function sentence(message: string): string {
+  const whole = message.charAt(0).toUpperCase() + message.slice(1);
+  return /[.?!]$/.test(whole) ? whole : `${whole}.`;
 }
 
 /** A cure that writes another text in place of a span. */

@@ -4,11 +4,11 @@ import type { Quantity, QuantityRange, Tolerance } from '../units/quantity';
 import { toleranceBounds, unitBounds } from './declaration/bounds';
 import type { Bounds, Scalar, UnitBounds } from './shape';
 
-/** What is wrong with a quantity's size or tolerance, or null. */
-export function boundFault(quantity: Quantity, own: UnitBounds | undefined): string | null {
+/** What is wrong with a quantity's size or tolerance, or null; `shown` is how it was written. */
+export function boundFault(quantity: Quantity, shown: string, own: UnitBounds | undefined): string | null {
   const { value, unit, tolerance } = quantity;
   const bounds = own?.[unit] ?? unitBounds[unit];
-  if (!isWithin(value, bounds)) return `\`${formatSpecQuantity({ value, unit })}\` is outside ${span(quantity, bounds)}`;
+  if (!isWithin(value, bounds)) return `\`${shown}\` is out of range: ${span(quantity, bounds)}`;
   return tolerance === undefined || isSensible(tolerance)
     ? null
     : 'the tolerance is too wide: it may reach from −99 % to +1000 %';
@@ -24,7 +24,8 @@ export function rangeFault(
     return { message: `\`${formatSpecRange(range)}\` has no upper end: one is needed here`, meant: null };
   }
   for (const end of [low, high]) {
-    const fault = Number.isFinite(end.value) || Number.isNaN(end.value) ? boundFault(end, scalar.bounds) : null;
+    const fault =
+      Number.isFinite(end.value) || Number.isNaN(end.value) ? boundFault(end, formatSpecQuantity(end), scalar.bounds) : null;
     if (fault !== null) return { message: fault, meant: null };
   }
   if (low.unit !== high.unit || low.value <= high.value) return null;
@@ -38,8 +39,8 @@ const isSensible = ({ low, high, perKelvin = 0 }: Tolerance) =>
   low >= toleranceBounds.low && high <= toleranceBounds.high && perKelvin >= 0 && perKelvin <= toleranceBounds.perKelvin;
 
 function span({ unit }: Quantity, { low, high, zero }: Bounds): string {
-  const shown = `${signed({ value: low, unit })} to ${signed({ value: high, unit })}`;
-  return zero === true ? `0 and ${shown}` : shown;
+  const shown = `from ${signed({ value: low, unit })} to ${signed({ value: high, unit })}`;
+  return zero === true ? `${shown}, or 0` : shown;
 }
 
 const signed = (quantity: Quantity) => formatSpecQuantity(quantity).replace('-', '−');

@@ -23,6 +23,8 @@ export interface Scalar {
   readonly words?: Prose;
   /** Words of the language that are not computed yet. */
   readonly laterWords?: Prose;
+  /** Words that are refused with an explanation. */
+  readonly refusedWords?: Prose;
   readonly quantity?: readonly Kind[];
   readonly range?: readonly Kind[];
   /** Whether a tolerance may stand behind the quantity. */

@@ -4,7 +4,7 @@ import type { QuantityFault } from './fault';
 import { numberAhead } from './number-text';
 import { oneSpelling } from './one-spelling';
 import type { Kind, Quantity, QuantityRange } from './quantity';
-import { called, exampleOf, readSingle } from './read-single';
+import { readSingle } from './read-single';
 
 /** A range, or why there is none. Whether it runs the right way round is the caller's to judge. */
 export type RangeReading = { readonly range: QuantityRange } | { readonly fault: QuantityFault };
@@ -69,14 +69,9 @@ function readCentred(centreText: string, halfText: string, kinds: readonly Kind[
 }
 
 function notARange(plain: string, kinds: readonly Kind[]): QuantityFault {
-  const dash = /^([^-–]*\d[^-–]*?) *[-–] *([\d.].*)$/.exec(plain);
   const single = readSingle(plain, kinds);
-  if (dash !== null && 'fault' in single) {
-    return notAQuantity(`\`${plain}\` is not a range: two points stand between its ends`, `${dash[1] ?? ''} .. ${dash[2] ?? ''}`);
-  }
-  const example = `${exampleOf(kinds)} .. `;
-  if ('fault' in single) return single.fault;
-  return notAQuantity(
-    `\`${plain}\` is a single value where a range of ${called(kinds).replace(/^an? /, '')} is needed, such as \`${example.trim()}\``,
-  );
+  if (!('fault' in single)) return notAQuantity(`\`${plain}\` is one value, where a range \`LOW .. HIGH\` is needed`);
+  const ends = /^(.*\d.*?) *(?:[-–]| to ) *(\.?\d.*)$/.exec(plain);
+  if (ends === null) return single.fault;
+  return notAQuantity(`\`${plain}\` is no range: two points stand between its ends`, `${ends[1] ?? ''} .. ${ends[2] ?? ''}`);
 }

@@ -6,6 +6,7 @@ import { readPartCode } from './part-code';
 import type { Kind, Unit } from './quantity';
 import { meantUnits, readUnit } from './read-unit';
 import { kindProse, unitsOf } from './unit-table';
+import type { UnitEntry } from './unit-table';
 
 /** A number and its unit, or why there is none. */
 export type SingleReading = { readonly value: number; readonly unit: Unit } | { readonly fault: QuantityFault };
@@ -32,13 +33,16 @@ export const called = (kinds: readonly Kind[]): string => orList([...new Set(kin
 /** An example of the first of these kinds. */
 export const exampleOf = (kinds: readonly Kind[]): string => kinds.map((kind) => kindProse[kind].example)[0] ?? '';
 
+/** More choices than this help nobody. */
+const mostSuggestions = 4;
+
 function withoutUnit(digits: string, kinds: readonly Kind[]): SingleReading {
   const units = unitsOf(kinds);
   const [first] = units;
   if (first !== undefined && scaled(digits, 0) === 0) return { value: 0, unit: first.unit };
   const prefixed = first?.unit === 'Hz' ? ['Hz', 'kHz', 'MHz'] : first?.unit === 's' ? ['s', 'ms', 'µs', 'ns'] : null;
-  const meant = prefixed ?? units.map((known) => known.spellings[0] ?? known.unit);
-  const suggestions = meant.map((unit) => `${digits} ${unit}`);
+  const meant = prefixed ?? units.filter(({ unit }) => !(digits.startsWith('-') && unit.startsWith('V'))).map(spelled);
+  const suggestions = meant.slice(0, mostSuggestions).map((unit) => `${digits} ${unit}`);
   return {
     fault: notAQuantity(`\`${digits}\` has no unit: ${called(kinds)} is written like \`${exampleOf(kinds)}\``, ...suggestions),
   };
@@ -83,23 +87,16 @@ function commaFault(digits: string, commas: string, unit: string): QuantityFault
 
 function unknownUnit(digits: string, unitText: string, kinds: readonly Kind[]): QuantityFault {
   const meant = meantUnits(unitText, kinds);
-  const written = `${digits} ${unitText}`;
-  if (meant.length > 0) {
-    const units = orList(meant.map((unit) => `\`${unit}\``));
-    return wrongUnit(
-      `\`${unitText}\` in \`${written}\` is not spelled as a unit is here: ${units} is`,
-      ...meant.map((unit) => `${digits} ${unit}`),
-    );
-  }
-  return wrongUnit(`\`${unitText}\` in \`${written}\` is not a unit of ${bare(kinds)}: ${unitNames(kinds)} is needed`);
+  const written = `\`${digits} ${unitText}\``;
+  if (meant.length === 0) return wrongUnit(`${written} has no unit of ${bare(kinds)}: it is given in ${unitNames(kinds)}`);
+  const units = orList(meant.map((unit) => `\`${unit}\``));
+  return wrongUnit(`${written}: the unit is written ${units}`, ...meant.map((unit) => `${digits} ${unit}`));
 }
 
 function otherKind(text: string, digits: string, got: readonly Kind[], wanted: readonly Kind[]): QuantityFault {
   const suggestions = got.includes('decibel') ? decibelSuggestions(digits, wanted) : [];
-  return wrongUnit(
-    `\`${text}\` is ${called(got.slice(0, 1))}: ${called(wanted)} in ${unitNames(wanted)} is needed`,
-    ...suggestions,
-  );
+  const message = `\`${text}\` is ${called(got.slice(0, 1))}, where ${called(wanted)} (${unitNames(wanted)}) is needed`;
+  return wrongUnit(message, ...suggestions);
 }
 
 /** A level written in plain dB is the one mistake of kind with an evident meaning. */
@@ -111,4 +108,6 @@ function decibelSuggestions(digits: string, wanted: readonly Kind[]): readonly s
 
 const bare = (kinds: readonly Kind[]) => called(kinds).replace(/^an? /, '');
 
-const unitNames = (kinds: readonly Kind[]) => orList(unitsOf(kinds).map((known) => known.spellings[0] ?? known.unit));
+const unitNames = (kinds: readonly Kind[]) => orList(unitsOf(kinds).map(spelled));
+
+const spelled = ({ spellings, unit }: UnitEntry) => spellings[0] ?? unit;

@@ -3,6 +3,7 @@ import assert from 'node:assert/strict';
 import { channel } from '../../src/spec/declaration/channel';
 import { clocks } from '../../src/spec/declaration/clock';
 import { limits } from '../../src/spec/declaration/limits';
+import { hold } from '../../src/spec/declaration/pulse';
 import { rateChoices } from '../../src/spec/declaration/rate';
 import { unwanted } from '../../src/spec/declaration/source';
 import { filter, filters } from '../../src/spec/declaration/stage';
@@ -178,12 +179,18 @@ channels:
     }
   });
 
+  it('explains why there is no first-order hold', () => {
+    assert.match(decodeText(hold, 'first-order').problems[0]?.message ?? '', /names two holds.*`linear`/);
+  });
+
   it('offers the nearest key and word, and a unit for a bare number', () => {
     const cures = (shape: Shape<unknown>, text: string) =>
       decodeText(shape, text).problems.flatMap((problem) => problem.cures.map(({ title }) => title));
     assert.deepEqual(cures(filter, '{ bandwith: 1 kHz, bandwidth: 2 kHz }'), ['Write it as `bandwidth`']);
     assert.deepEqual(cures(filter, '{ family: Butterworth, order: 2, corner: 1 kHz }'), ['Write it as `butterworth`']);
     assert.deepEqual(cures(filter, '{ bandwidth: 400 }')[0], 'Write it as `400 Hz`');
+    assert.deepEqual(cures(wanted, '5 Hz .. 10 kHz'), ['Write it as `{ band: 5 Hz .. 10 kHz }`']);
+    assert.deepEqual(cures(channel, '{ like: a, bits: 16 bit }'), ['Write it as `16`']);
     const [cure] = decodeText(filter, '{ bandwidth: 1 khz }').problems[0]?.cures ?? [];
     assert.deepEqual(cure?.edits, [{ span: { start: 13, end: 18 }, newText: '1 kHz' }]);
   });

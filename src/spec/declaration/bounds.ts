@@ -10,7 +10,7 @@ const decibels: Bounds = { low: -400, high: 400 };
 export const unitBounds: Readonly<Record<Unit, Bounds>> = {
   Hz: frequency,
   'S/s': frequency,
-  s: { low: 1e-18, high: 1e9 },
+  s: { low: 1e-15, high: 1e9 },
   V: voltage,
   Vrms: voltage,
   Vpk: voltage,
@@ -60,7 +60,7 @@ export const ripples: UnitBounds = { dB: { low: 1e-4, high: 20 } };
 export const cornerShares: UnitBounds = { '%': { low: 0, high: 0.9 }, ppm: { low: 0, high: 0.9 } };
 
 /** The width of a pulse as a share of the period; a hold may overlap the next. */
-export const pulseShares: UnitBounds = { '%': { low: 1e-9, high: 2 }, ppm: { low: 1e-9, high: 2 } };
+export const pulseShares: UnitBounds = { '%': { low: 1e-6, high: 2 }, ppm: { low: 1e-6, high: 2 } };
 
 /** Limits in dB that are distances, so never below zero. */
 export const distances: UnitBounds = { dB: { low: 1e-6, high: 200 } };

@@ -1,10 +1,19 @@
 /** Declares `aperture` and `hold`: the pulse of the sampler and of the output. */
 import { either, quantity, within, word } from '../shapes';
-import type { TypeOf } from '../shape';
+import type { Shape, TypeOf } from '../shape';
 import { pulseShares } from './bounds';
 
 const laterShapes = {
   linear: 'Straight lines from sample to sample.',
+};
+
+const firstOrder: Shape<never> = {
+  scalar: {
+    refusedWords: {
+      'first-order':
+        '`first-order` names two holds: one that extrapolates the last two samples, and one that draws straight lines from sample to sample, which is `linear`.',
+    },
+  },
 };
 
 const width = within(quantity('time', 'share'), pulseShares);
@@ -19,10 +28,11 @@ export const aperture = either(
     laterShapes,
   ),
   width,
+  firstOrder,
 );
 
 /** The pulse that each sample leaves as; it acts at the output frequency. */
-export const hold = either(word({ 'zero-order': 'Held for the whole period.' }, laterShapes), width);
+export const hold = either(word({ 'zero-order': 'Held for the whole period.' }, laterShapes), width, firstOrder);
 
 /** A pulse as it was written. */
 export type PulseModel = TypeOf<typeof aperture> | TypeOf<typeof hold>;

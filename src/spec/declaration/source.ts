@@ -5,7 +5,8 @@ import { frequencyOrZero } from './bounds';
 
 const anything = word({ anything: 'A full-scale tone that may stand anywhere outside the wanted band.' });
 
-const sourceMap = fields(
+/** One source, in full. */
+export const source = fields(
   'an unwanted source',
   {
     name: { shape: text, about: 'What messages and plots call the source.', fallback: 'made up from its frequency' },
@@ -35,10 +36,10 @@ const sourceMap = fields(
   { decidedBy: ['tone', 'band', 'anything', 'noise', 'spectrum'] },
 );
 
-const source = either(anything, sourceMap);
+const oneSource = either(anything, source);
 
 /** One source, or a list of them. */
-export const unwanted = either(source, listOf(source));
+export const unwanted = either(oneSource, listOf(oneSource));
 
 /** A source as it was written. */
-export type SourceModel = TypeOf<typeof sourceMap>;
+export type SourceModel = TypeOf<typeof source>;

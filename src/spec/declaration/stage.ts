@@ -106,7 +106,8 @@ function familyClash(stage: FamilyStage): Clash | null {
   return { key: 'ripple', message };
 }
 
-const stage = fields(
+/** One stage. */
+export const stage = fields(
   'a stage',
   {
     name: { shape: text, about: 'What messages and plots call the stage.' },

@@ -1,4 +1,5 @@
 /** Collects the faults and the looked-up names of one channel while its parts are resolved. */
+import { sentence } from '../local-problem';
 import { nearest } from '../nearest';
 import type { Path } from '../place';
 import type { ProblemCode } from '../reading';
@@ -14,13 +15,13 @@ export class Report {
   /** Adds a fault of a value, with texts that could stand in its place. */
   fault(path: Path, code: ProblemCode, message: string, ...newTexts: readonly string[]): null {
     const cures = newTexts.map((newText) => ({ title: `Write it as \`${newText}\``, newText }));
-    this.problems.push({ path, part: 'value', code, message, cures });
+    this.problems.push({ path, part: 'value', code, message: sentence(message), cures });
     return null;
   }
 
   /** Adds a fault of a key. */
   keyFault(path: Path, code: ProblemCode, message: string): null {
-    this.problems.push({ path, part: 'key', code, message, cures: [] });
+    this.problems.push({ path, part: 'key', code, message: sentence(message), cures: [] });
     return null;
   }
 

@@ -120,7 +120,7 @@ function atHome(problems: readonly ResolveProblem[], { inherited, from }: Merged
   return problems.flatMap((problem) => {
     if (!inherited.has(String(problem.path[0]))) return [problem];
     if (!baseIsWhole) return [];
-    const message = `${problem.message} (\`${problem.path.join('.')}\` comes from \`${from}\`)`;
+    const message = `${problem.message} \`${problem.path.join('.')}\` comes from \`${from}\`.`;
     return [{ ...problem, path: ['like'], part: 'value' as const, message, cures: [] }];
   });
 }
