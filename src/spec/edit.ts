@@ -67,8 +67,10 @@ function intoBrackets(text: string, base: number, map: MapNode, line: string): E
     const span = { start: base + map.start, end: base + map.end };
     return { span, newText: `{ ${line} }` };
   }
-  const at = base + lastEnd(last);
-  // A key without a value needs its colon before another can follow.
+  // Behind a key without a value comes its colon, if it has one.
+  const colon =
+    last.value === null ? (/^\s*:/.exec(text.slice(base + last.keyEnd, base + last.keyEnd + 200))?.[0].length ?? 0) : 0;
+  const at = base + lastEnd(last) + colon;
   return { span: { start: at, end: at }, newText: `, ${line}` };
 }
 

@@ -19,7 +19,7 @@ export interface PlaceAt {
   readonly about: Key | null;
 }
 
-/** The innermost place at an offset; a channel as a whole where nothing smaller is, null outside everything. */
+/** The innermost place at an offset; in a channel's blank space the channel, with an empty span; null outside everything. */
 export function placeAt(reading: Reading, offset: number): PlaceAt | null {
   const placed = sliceAt(insideOf(reading).slices, offset);
   if (placed === null) return null;
@@ -28,7 +28,7 @@ export function placeAt(reading: Reading, offset: number): PlaceAt | null {
   const named = own ?? (placed.slice.kind === 'channel' ? placed.reading.channels[0] : undefined);
   if (named !== undefined) {
     const from: Step = { channel: named.name, path: [], shape: channel, about: null };
-    return inPair(from, named.pair, offset - base, base) ?? whole(from, named.pair, base);
+    return inPair(from, named.pair, offset - base, base) ?? found(from, 'value', offset, offset, 0);
   }
   const root: Step = { channel: null, path: [], shape: declaration, about: null };
   for (const pair of placed.reading.pairs) {
@@ -97,8 +97,4 @@ function into(step: Step, key: string): Step {
 
 function found({ channel: owner, path, about }: Step, part: 'key' | 'value', start: number, end: number, base: number): PlaceAt {
   return { place: { channel: owner, path }, part, span: { start: base + start, end: base + end }, about };
-}
-
-function whole(step: Step, pair: Pair, base: number): PlaceAt {
-  return found(step, 'key', pair.keyStart, pair.keyEnd, base);
 }
