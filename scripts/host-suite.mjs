@@ -40,7 +40,7 @@ export async function runHostSuite() {
   const browser = await browse();
   try {
     const page = await browser.newPage();
-    const results = arrival(resultsFile, 240_000);
+    const results = arrival(resultsFile, 600_000);
     await page.goto(workbenchAddress(workbench, { folder: scratchFolder('host'), tests: suiteEntry }));
     await results;
   } finally {

@@ -8,7 +8,7 @@ export async function run(): Promise<void> {
   const output = process.env['BANDKEEP_HOST_RESULTS'];
   if (output === undefined) throw new Error('BANDKEEP_HOST_RESULTS must name the file for the results.');
   mkdirSync(dirname(output), { recursive: true });
-  const mocha = new Mocha({ ui: 'bdd', timeout: 60_000, reporter: 'json', reporterOptions: { output } });
+  const mocha = new Mocha({ ui: 'bdd', timeout: 30_000, reporter: 'json', reporterOptions: { output } });
   for (const file of readdirSync(__dirname).sort()) if (file.endsWith('.test.js')) mocha.addFile(join(__dirname, file));
   const failures = await new Promise<number>((resolve) => mocha.run(resolve));
   if (failures > 0) throw new Error(`${failures} tests failed.`);
