@@ -195,6 +195,32 @@ describe('a search for fixes', () => {
     }
   });
 
+  it('changes both factors of a clock where its choices are multiples', () => {
+    const multiplied = cured(
+      bearingWith([
+        'rate-choices: { clock: board, divide: 120 .. 480 }',
+        'rate-choices: { clock: board, multiply: 5, divide: [1920, 2500] }',
+      ]),
+      'rate-unavailable',
+    );
+    const [fix] = multiplied.cure.fixes;
+    assert.equal(titles(multiplied)[0], 'Raise the rate to 64 kHz (÷1920): alias margin 4.6 dB');
+    assert.ok(fix !== undefined);
+    assert.match(after(multiplied, fix), /rate: \{ clock: board, divide: 1920, multiply: 5 \}/);
+  });
+
+  it('keeps the tolerance of a plain rate, and changes an inherited one where it stands', () => {
+    const plain = bearingWith(
+      ['rate: { clock: board, divide: 480 } ', 'rate: 51.2 kS/s ± 20 ppm'],
+      ['rate-choices: { clock: board, divide: 120 .. 480 }', 'rate-choices: [51.2 kHz, 64 kHz]'],
+    );
+    const heir = cured(`${plain}  bearing-y:\n    like: bearing-x\n`, 'alias-over-limit', 'bearing-y');
+    const [fix] = heir.cure.fixes;
+    assert.equal(fix?.kind, 'rate');
+    assert.match(after(heir, fix), /rate: 64 kS\/s ± 20 ppm/);
+    assert.deepEqual(errorsIn(after(heir, fix)), []);
+  });
+
   it('moves a rate that folds the wanted band to one that keeps it whole', () => {
     const folds = cured(bearingWith(['divide: 480 }     ', 'divide: 1500 }    '], ['120 .. 480', '120 .. 1500']), 'wanted-folds');
     assert.ok(folds.cure.fixes.length > 0);
