@@ -10,9 +10,12 @@ export interface MarginFaults {
   readonly blankLines: ReadonlySet<number>;
   /** Stretches of the text that a fault leaves in doubt: a channel that reaches into one is not whole. */
   readonly doubtful: readonly { readonly start: number; readonly end: number }[];
+  /** Where the document ends: in front of a closing `...`, else with the text. */
+  readonly end: number;
 }
 
 interface Found {
+  end: number;
   readonly faults: Fault[];
   readonly blankLines: Set<number>;
   readonly doubtful: { start: number; end: number }[];
@@ -20,7 +23,7 @@ interface Found {
 
 /** Finds them; the upper side of a conflict is read, the lower one is not. */
 export function marginFaults(text: string, lines: ContentLines): MarginFaults {
-  const found: Found = { faults: [], blankLines: new Set(), doubtful: [] };
+  const found: Found = { faults: [], blankLines: new Set(), doubtful: [], end: text.length };
   const margin: number[] = [];
   for (let line = 0; line < lines.start.length; line += 1) if (lines.start[line] === lines.content[line]) margin.push(line);
   conflicts(text, lines, margin, found);
@@ -102,6 +105,7 @@ function documents(text: string, lines: ContentLines, margin: readonly number[],
       continue;
     }
     found.blankLines.add(line);
+    if (sign === '...' && message === null) found.end = start;
     if (message === null) continue;
     const mends = [{ start, end: nextLine(text, end), newText: '' }];
     found.faults.push(fault(start, end, message, [{ title: 'Delete the line', mends }]));

@@ -23,7 +23,7 @@ export function scan(text: string, words: Vocabulary): Scan {
   const margin = marginFaults(text, lines);
   const cutting = new Cutting(text, lines, margin.blankLines);
   cutAll(cutting, words);
-  const slices = slicesOf(cutting, [...margin.doubtful, ...cutting.doubtful]);
+  const slices = slicesOf(cutting, margin.end, [...margin.doubtful, ...cutting.doubtful]);
   return { slices, faults: [...margin.faults, ...cutting.faults].sort((a, b) => a.start - b.start) };
 }
 
@@ -141,7 +141,7 @@ function isOutdented(cutting: Cutting, line: number, words: Vocabulary): boolean
   return own || holdsChannel;
 }
 
-function slicesOf(cutting: Cutting, doubtful: readonly { start: number; end: number }[]): Slice[] {
+function slicesOf(cutting: Cutting, textEnd: number, doubtful: readonly { start: number; end: number }[]): Slice[] {
   const blank = [...cutting.blankLines]
     .sort((a, b) => a - b)
     .map((line) => ({ start: cutting.startOf(line), end: cutting.endOf(line) }));
@@ -149,7 +149,7 @@ function slicesOf(cutting: Cutting, doubtful: readonly { start: number; end: num
   // Channels are cut when their section ends, so that the cuts are not in order.
   const cuts = cutting.cuts.toSorted((a, b) => a.start - b.start);
   return cuts.map(({ kind, start, lead }, index) => {
-    const end = cuts[index + 1]?.start ?? text.length;
+    const end = cuts[index + 1]?.start ?? textEnd;
     return {
       kind,
       start,
