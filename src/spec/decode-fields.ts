@@ -112,9 +112,9 @@ function reportMissing(
   problems: LocalProblem[],
 ): void {
   if (map.completedBy !== undefined && first.has(map.completedBy)) return;
-  for (const [name, key] of Object.entries(map.fields)) {
-    if (key.required !== true || first.has(name)) continue;
-    if (!goes(key, company)) continue;
+  for (const name of map.needed) {
+    const key = first.has(name) ? null : keyOf(map, name);
+    if (key?.required !== true || !goes(key, company)) continue;
     problems.push(errorAt(home.span, 'missing-key', `${home.called} needs \`${name}\`: ${lowerFirst(key.about)}`));
   }
 }

@@ -57,7 +57,7 @@ function decodeQuantity(scalar: Scalar, node: ScalarNode): ScalarReading {
     const message = `no tolerance can stand behind \`${bare}\` here: tolerances stand behind parts, clocks and tones, and in \`tolerance\` of a stage`;
     return { fault: errorAt(node, 'not-a-quantity', message, [writeInstead(node, bare)]) };
   }
-  const fault = boundFault(quantity, oneSpelling(node.text), scalar.bounds);
+  const fault = boundFault(quantity, () => oneSpelling(node.text), scalar.bounds);
   return fault === null ? { value: quantity } : { fault: errorAt(node, 'out-of-range', fault) };
 }
 

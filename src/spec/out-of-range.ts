@@ -4,11 +4,11 @@ import type { Quantity, QuantityRange, Tolerance } from '../units/quantity';
 import { toleranceBounds, unitBounds } from './declaration/bounds';
 import type { Bounds, Scalar, UnitBounds } from './shape';
 
-/** What is wrong with a quantity's size or tolerance, or null; `shown` is how it was written. */
-export function boundFault(quantity: Quantity, shown: string, own: UnitBounds | undefined): string | null {
+/** What is wrong with a quantity's size or tolerance, or null; `shown` gives how it was written. */
+export function boundFault(quantity: Quantity, shown: () => string, own: UnitBounds | undefined): string | null {
   const { value, unit, tolerance } = quantity;
   const bounds = own?.[unit] ?? unitBounds[unit];
-  if (!isWithin(value, bounds)) return `\`${shown}\` is out of range: ${span(quantity, bounds)}`;
+  if (!isWithin(value, bounds)) return `\`${shown()}\` is out of range: ${span(quantity, bounds)}`;
   return tolerance === undefined || isSensible(tolerance)
     ? null
     : 'the tolerance is too wide: it may reach from −99 % to +1000 %';
@@ -25,7 +25,9 @@ export function rangeFault(
   }
   for (const end of [low, high]) {
     const fault =
-      Number.isFinite(end.value) || Number.isNaN(end.value) ? boundFault(end, formatSpecQuantity(end), scalar.bounds) : null;
+      Number.isFinite(end.value) || Number.isNaN(end.value)
+        ? boundFault(end, () => formatSpecQuantity(end), scalar.bounds)
+        : null;
     if (fault !== null) return { message: fault, meant: null };
   }
   if (low.unit !== high.unit || low.value <= high.value) return null;

@@ -61,6 +61,8 @@ export interface Fields {
   readonly fields: Readonly<Record<string, Key>>;
   /** What messages call such a map: "a stage". */
   readonly called: string;
+  /** The keys that are required, some only beside others. */
+  readonly needed: readonly string[];
   /** Exactly one of these keys must stand. */
   readonly decidedBy?: readonly string[];
   /** A key that brings in whatever is missing, such as `like`. */

@@ -59,7 +59,8 @@ export const fields = <const F extends Readonly<Record<string, Key>>>(
 ): Shape<Model<F>> => {
   const { check, ...others } = rules;
   // The decoder hands a map of these keys to the check, so the model's type holds.
-  return { map: { fields: keys, called, ...others, ...(check && { check: (model) => check(model as Model<F>) }) } };
+  const needed = Object.entries<Key>(keys).flatMap(([name, { required }]) => (required === true ? [name] : []));
+  return { map: { fields: keys, called, needed, ...others, ...(check && { check: (model) => check(model as Model<F>) }) } };
 };
 
 /** A map with free names. */

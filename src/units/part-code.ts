@@ -16,6 +16,7 @@ const letters: Readonly<Record<string, { readonly unit: Unit; readonly powers: R
 
 /** The value that a code stands for where a part of one of these kinds is asked for, or null. */
 export function readPartCode(text: string, kinds: readonly Kind[]): PartValue | null {
+  if (!kinds.some((kind) => Object.hasOwn(letters, kind))) return null;
   const match = /^(\d*)([A-Za-zµ])(\d*)$/.exec(text);
   if (match === null) return null;
   const [, whole = '', letter = '', fraction = ''] = match;

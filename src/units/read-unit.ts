@@ -14,12 +14,7 @@ export interface UnitRead {
 
 /** The unit that a text spells, of whatever kind, or null. Spaces inside do not count. */
 export function readUnit(text: string): UnitRead | null {
-  const tight = tighten(text);
-  for (const known of unitTable) {
-    const power = powerIn(known, tight);
-    if (power !== null) return { unit: known.unit, kinds: known.kinds, power };
-  }
-  return null;
+  return unitsBySpelling.get(text) ?? unitsBySpelling.get(tighten(text)) ?? null;
 }
 
 /** Spellings of units of these kinds that the text may have been meant as, likeliest first; empty where nothing is near. */
@@ -33,16 +28,23 @@ export function meantUnits(text: string, kinds: readonly Kind[]): readonly strin
   return [...new Set(found)];
 }
 
-const tighten = (text: string) => text.replace(/ /g, '');
-
-function powerIn(known: UnitEntry, tight: string): number | null {
-  for (const spelling of known.spellings.map(tighten)) {
-    if (!tight.endsWith(spelling)) continue;
-    const prefix = tight.slice(0, tight.length - spelling.length);
-    if (takes(known, prefix)) return (prefixPowers[prefix] ?? 0) + known.power;
-  }
-  return null;
+function tighten(text: string): string {
+  return text.replace(/ /g, '');
 }
+
+// Every unit with every prefix it takes, without spaces. No spelling stands for two of them; a test holds that.
+const unitsBySpelling: ReadonlyMap<string, UnitRead> = new Map(
+  Object.entries(prefixPowers).flatMap(([prefix, power]) =>
+    unitTable
+      .filter((known) => takes(known, prefix))
+      .flatMap((known) =>
+        known.spellings.map((spelling): [string, UnitRead] => [
+          prefix + tighten(spelling),
+          { unit: known.unit, kinds: known.kinds, power: power + known.power },
+        ]),
+      ),
+  ),
+);
 
 function takes(known: UnitEntry, prefix: string): boolean {
   if (prefix === '') return true;
