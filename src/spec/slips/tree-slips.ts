@@ -35,6 +35,8 @@ function blockPairSlip(text: string, pair: Pair): Diagnosis | null {
   if (pair.value === null && !/^[ \t]*:/.test(text.slice(pair.keyEnd, pair.keyEnd + 80))) {
     return noSpaceBehindColon(text.slice(pair.keyStart, pair.keyEnd), pair.keyStart);
   }
+  const { value } = pair;
+  if (value?.form === 'scalar' && !value.quoted && text.slice(pair.keyEnd, value.start).includes('\n')) return gluedItem(value);
   return /^-[a-z]/.test(pair.key) && vocabulary.all.has(pair.key.slice(1)) ? noSpaceBehindDash(pair.key, pair.keyStart) : null;
 }
 
@@ -81,7 +83,7 @@ function splitItem(text: string, item: ScalarNode, next: TreeNode | null): Diagn
   return decimalComma(text, item, next.start, next.end);
 }
 
-/** `- tone:310 kHz`. */
+/** `- tone:310 kHz`, or the same alone below its key. */
 function gluedItem(item: ScalarNode): Diagnosis | null {
   const key = /^([a-z][a-z-]*):[^ \t]/.exec(item.text)?.[1];
   return key !== undefined && vocabulary.all.has(key) ? noSpaceBehindColon(item.text, item.start) : null;
