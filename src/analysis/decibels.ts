@@ -3,14 +3,9 @@
 /** Decibels in one neper: 20 / ln 10. */
 export const decibelsPerNeper = 20 / Math.LN10;
 
-/** ln of an amplitude ratio as dB. */
+/** ln of an amplitude ratio as dB; never −0, which would be printed with a sign. */
 export function toDb(logGain: number): number {
-  return logGain * decibelsPerNeper;
-}
-
-/** dB as ln of an amplitude ratio. */
-export function toLogGain(db: number): number {
-  return db / decibelsPerNeper;
+  return logGain * decibelsPerNeper + 0;
 }
 
 /** The power ratio of a level in dB. */
