@@ -13,9 +13,12 @@ export function gridOf(frame: Frame, theme: Theme): Outline[] {
 
 /** The texts and the base lines that lie over ribbons and fills. */
 export function axesOf(plot: Plot, frame: Frame, theme: Theme, widthOf: (text: string) => number): Primitive[] {
-  return plot.panes.flatMap((pane) => {
+  return plot.panes.flatMap((pane, index) => {
     const place = frame.panes.find((candidate) => candidate.id === pane.id);
-    return place === undefined ? [] : [...frequencyAxis(pane, place, theme, widthOf), ...levelAxis(pane, place, theme)];
+    if (place === undefined) return [];
+    // A pane on the same scale of levels as the one above need not say so again.
+    const titled = plot.panes[index - 1]?.y.title === pane.y.title ? [] : [levelTitle(pane, place, theme)];
+    return [...frequencyAxis(pane, place, theme, widthOf), ...levelAxis(place, theme), ...titled];
   });
 }
 
@@ -28,7 +31,13 @@ function gridOfPane(pane: PaneFrame, theme: Theme): Outline {
       ['L', right, y],
     ];
   });
-  return { kind: 'outline', steps, fill: null, pen: thinPen(theme.grid), clip: null };
+  return {
+    kind: 'outline',
+    steps,
+    fill: null,
+    pen: { ...thinPen(theme.grid), opacity: theme.highContrast === 'yes' ? 0.4 : 1 },
+    clip: null,
+  };
 }
 
 function frequencyAxis(pane: Pane, place: PaneFrame, theme: Theme, widthOf: (text: string) => number): Primitive[] {
@@ -52,10 +61,14 @@ function frequencyAxis(pane: Pane, place: PaneFrame, theme: Theme, widthOf: (tex
   return [outline, ...texts, writing(pane.x.title, right, bottom + 36, 'end', theme)];
 }
 
-function levelAxis(pane: Pane, place: PaneFrame, theme: Theme): Writing[] {
-  const { left, top } = place.box;
-  const texts = levelTicks(place.y).map((tick) => writing(tick.text, left - 8, toPixel(place.y, tick.value) + 4, 'end', theme));
-  return [...texts, writing(pane.y.title, left, top - 10, 'start', theme)];
+function levelAxis(place: PaneFrame, theme: Theme): Writing[] {
+  return levelTicks(place.y).map((tick) =>
+    writing(tick.text, place.box.left - 8, toPixel(place.y, tick.value) + 4, 'end', theme),
+  );
+}
+
+function levelTitle(pane: Pane, { box }: PaneFrame, theme: Theme): Writing {
+  return writing(pane.y.title, box.left, box.top - 10, 'start', theme);
 }
 
 function writing(text: string, x: number, y: number, align: Writing['align'], theme: Theme): Writing {

@@ -51,7 +51,7 @@ export function placeLabels(requests: readonly LabelRequest[], paper: Paper): Pl
 const distances = [7, 14, 24, 38, 56, 78];
 
 /** How a label may shift along the side it stands on, as a share of its own length. */
-const shifts = [0, -0.5, 0.5];
+const shifts = [0, -0.5, 0.5, -1, 1];
 
 function bestBox(request: LabelRequest, paper: Paper, taken: readonly Box[]): Box | null {
   let best: Box | null = null;

@@ -31,7 +31,7 @@ const dashes: Readonly<Record<Stroke, readonly number[]>> = {
 
 /** The fill of an area or a block. */
 export function areaFill(item: Item, tone: Tone, look: Look): Fill {
-  const base = item.role === 'harm' ? 0.5 : tone === 'pale' ? 0.13 : 0.3;
+  const base = item.role === 'harm' ? 0.5 : tone === 'solid' ? 0.3 : item.role === 'source' ? 0.08 : 0.13;
   return fill(item, base, look, hatchOf(item.role, tone, look.theme));
 }
 
@@ -42,7 +42,7 @@ export function forbiddenFill(item: Item, look: Look): Fill {
 
 /** The fill of a ribbon: the nearer it comes to harm, the stronger. */
 export function ribbonFill(item: Item, strength: number, look: Look): Fill {
-  const base = item.role === 'harm' ? 0.5 : 0.07 + 0.22 * strength;
+  const base = item.role === 'harm' ? 0.5 : 0.03 + 0.17 * strength ** 2;
   return fill(item, base, look, hatchOf(item.role, 'pale', look.theme));
 }
 

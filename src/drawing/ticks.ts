@@ -18,7 +18,7 @@ export function frequencyTicks(scale: AxisScale): Tick[] {
 
 /** Marks of a level axis. */
 export function levelTicks(scale: AxisScale): Tick[] {
-  const values = linearTicks(scale, 34);
+  const values = linearTicks(scale, 34, levelFactors);
   const step = values.length > 1 ? (values[1] ?? 0) - (values[0] ?? 0) : 1;
   const decimals = Math.max(0, Math.ceil(-Math.log10(Math.abs(step)) - 1e-9));
   return values.map((value) => ({ value, text: signedText(value, decimals) }));
@@ -44,18 +44,22 @@ function signedText(value: number, decimals: number): string {
   return `${rounded < 0 ? '−' : ''}${Math.abs(rounded).toFixed(decimals)}`;
 }
 
-function linearTicks(scale: AxisScale, pixelsApart: number): number[] {
+/** Decibels are read in steps of 1, 2, 4 (20, 40 …) or 5; frequencies in 1, 2 and 5. */
+const levelFactors = [1, 2, 4, 5, 10];
+const plainFactors = [1, 2, 5, 10];
+
+function linearTicks(scale: AxisScale, pixelsApart: number, factors: readonly number[] = plainFactors): number[] {
   const room = Math.max(1, Math.abs(scale.to - scale.from) / pixelsApart);
-  const step = roundStep((scale.high - scale.low) / room);
+  const step = roundStep((scale.high - scale.low) / room, factors);
   const first = Math.ceil(scale.low / step - 1e-9);
   const last = Math.floor(scale.high / step + 1e-9);
   return Array.from({ length: Math.max(0, last - first + 1) }, (_, index) => (first + index) * step);
 }
 
-/** The next step of 1, 2 or 5 times a power of ten that is not below the given one. */
-function roundStep(least: number): number {
+/** The next step, a factor times a power of ten, that is not below the given one. */
+function roundStep(least: number, factors: readonly number[]): number {
   const power = 10 ** Math.floor(Math.log10(least));
-  const factor = [1, 2, 5, 10].find((candidate) => candidate * power >= least * (1 - 1e-9)) ?? 10;
+  const factor = factors.find((candidate) => candidate * power >= least * (1 - 1e-9)) ?? 10;
   return factor * power;
 }
 

@@ -1,6 +1,6 @@
 /** Where a source lands between 0 and half the rate, and how strongly: at each frequency the strongest of all folds of the source. */
 import type { Enclosure, Response } from '../analysis';
-import { foldFrequency, gainDb } from '../analysis';
+import { foldFrequency } from '../analysis';
 import type { Points } from '../protocol/picture';
 import { sampleCurve } from './sample-curve';
 
@@ -24,20 +24,23 @@ const mostFolds = 4000;
 
 /** The strongest that lands exactly on x; null where nothing does. */
 export function landingAt(source: Arriving, x: number): Landed | null {
-  let best: Landed | null = null;
   const { rateHz, ranges, response, levelDb } = source;
-  const lowest = Math.min(...ranges.map((range) => range.low));
-  const highest = Math.max(...ranges.map((range) => range.high));
-  const first = Math.max(0, Math.floor(lowest / rateHz));
-  for (let fold = first; fold < first + mostFolds && fold * rateHz - x <= highest; fold += 1) {
-    if (best !== null && fold > first && levelDb + gainBound(response, Math.max(0, fold * rateHz - x)) <= best.levelDb) break;
-    for (const frequencyHz of fold === 0 ? [x] : [fold * rateHz - x, fold * rateHz + x]) {
-      if (!ranges.some((range) => range.low <= frequencyHz && frequencyHz <= range.high)) continue;
-      const level = levelDb + gainDb(response, frequencyHz);
-      if (best === null || level > best.levelDb) best = { levelDb: level, fromHz: frequencyHz };
-    }
+  let bestLog = -Infinity;
+  let fromHz = NaN;
+  const look = (frequencyHz: number): void => {
+    if (!stands(ranges, frequencyHz)) return;
+    const logGain = response.logGain(frequencyHz);
+    if (logGain > bestLog || Number.isNaN(fromHz)) [bestLog, fromHz] = [logGain, frequencyHz];
+  };
+  const first = firstFold(source);
+  const last = Math.min(first + mostFolds, (highestOf(ranges) + x) / rateHz);
+  for (let fold = first; fold <= last; fold += 1) {
+    // All that is still to come is weaker: what lies further out is bounded as one interval, now and then.
+    if (fold > first && isPowerOfTwo(fold - first) && response.bounds(fold * rateHz - x, Infinity).high <= bestLog) break;
+    if (fold > 0) look(fold * rateHz - x);
+    look(fold * rateHz + x);
   }
-  return best;
+  return Number.isNaN(fromHz) ? null : { levelDb: levelDb + bestLog * (20 / Math.LN10), fromHz };
 }
 
 /** The curves of a source's landings, one for each stretch that it reaches without a gap. */
@@ -69,6 +72,19 @@ function landingEdges({ ranges, rateHz }: Arriving): number[] {
   return [...new Set([0, ...landed, rateHz / 2])].sort((a, b) => a - b);
 }
 
-function gainBound(response: Response, fromHz: number): number {
-  return response.bounds(fromHz, Infinity).high * (20 / Math.LN10);
+function firstFold({ ranges, rateHz }: Arriving): number {
+  return Math.max(0, Math.floor(ranges.reduce((low, range) => Math.min(low, range.low), Infinity) / rateHz));
+}
+
+function highestOf(ranges: readonly Enclosure[]): number {
+  return ranges.reduce((high, range) => Math.max(high, range.high), 0);
+}
+
+function stands(ranges: readonly Enclosure[], frequencyHz: number): boolean {
+  for (const range of ranges) if (range.low <= frequencyHz && frequencyHz <= range.high) return true;
+  return false;
+}
+
+function isPowerOfTwo(count: number): boolean {
+  return (count & (count - 1)) === 0;
 }

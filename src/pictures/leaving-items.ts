@@ -73,7 +73,7 @@ function envelope(view: LeavingView, { id, name, points, stroke, place, words }:
       text: name,
       frequencyHz: points.x[index] ?? 0,
       level: points.y[index] ?? 0,
-      prefer: id === 'hold' ? 'above' : 'left',
+      prefer: id === 'hold' ? 'above' : 'right',
       priority: 4,
     },
   });

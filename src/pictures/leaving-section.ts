@@ -55,6 +55,7 @@ function leavingPlot(view: LeavingView): Plot {
       `The wanted band and its copies about every multiple of the rate of ${stretchWords(subject.channel.rate.hz, subject.channel.rate.hz)}, pale as the hold leaves them and solid as the path leaves them`,
       answerText(subject),
     ),
+    shown: 'always',
     panes: [{ id: leavingPane, x: view.output, y: view.levels }],
     series: seriesOf(
       [...items].sort((a, b) => wantedFirst(a) - wantedFirst(b)),

@@ -43,6 +43,7 @@ export function closeUpPlot(subject: Subject): Plot {
       `Gain in the wanted band against ${formatFrequency(subject.channel.referenceHz)}, ${subject.channel.direction === 'capture' ? 'aperture' : 'hold'} and filter together`,
       limit === null ? '' : `The flatness limit of ${formatDb(limit.at, 'dB', 2)} is shaded as forbidden, ${marginWords(limit)}`,
     ),
+    shown: 'always',
     panes: [{ id: closeUpPane, x, y }],
     series: seriesOf(items, new Map()),
     items,
@@ -80,7 +81,7 @@ function curvesOf(subject: Subject, x: FrequencyAxis, tolerance: number, floor: 
 }
 
 function levelAxisOf(curves: Curves, limit: LimitFigure | null, { channel }: Subject): LevelAxis {
-  const title = `dB against ${formatFrequency(channel.referenceHz)}`;
+  const title = `dB against ${formatFrequency(channel.referenceHz)}, the wanted band close up`;
   if (limit !== null && limit.at > 0)
     return { title, unit: 'dB', low: -1.5 * Math.max(limit.at, Math.min(4 * limit.at, limit.value ?? 0)), high: 1.3 * limit.at };
   const inBand = [curves.nominal, curves.largest ?? curves.nominal, curves.smallest ?? curves.nominal].flatMap(({ x, y }) =>

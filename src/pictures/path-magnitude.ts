@@ -15,7 +15,7 @@ export const magnitudePane = 'magnitude';
 
 /** The plot. */
 export function magnitudePlot(subject: Subject): Plot {
-  const x = axisOf(subject);
+  const x = wholePathAxis(subject);
   const y = levelsOf(subject, x);
   const draw = (response: Response): Points =>
     sampleCurve((f) => gainDb(response, f), {
@@ -39,6 +39,7 @@ export function magnitudePlot(subject: Subject): Plot {
       `Gain of ${subject.path.stages.length === 1 ? 'one stage' : `${subject.path.stages.length} stages`} and of all together`,
       `${levelWords(-lossAtHalfRate(subject), 'dB')} at half the rate`,
     ),
+    shown: 'always',
     panes: [{ id: magnitudePane, x, y }],
     series: seriesOf(
       [...items].sort((a, b) => rankOf(a) - rankOf(b)),
@@ -49,7 +50,8 @@ export function magnitudePlot(subject: Subject): Plot {
   };
 }
 
-function axisOf({ channel }: Subject): FrequencyAxis {
+/** The axis of everything that is drawn of the whole path. */
+export function wholePathAxis({ channel }: Subject): FrequencyAxis {
   const lows = channel.wanted.map((band) => band.lowHz).filter((f) => f > 0);
   const high = Math.max(10 * channel.rate.hz, ...channel.wanted.map((band) => 4 * band.highHz));
   const axis = frequencyAxis('Hz', Math.min(...lows, high / 1e4), high);
@@ -63,7 +65,7 @@ function levelsOf({ path, nominal }: Subject, x: FrequencyAxis): LevelAxis {
   const top = Math.max(0, ...shown.map((value) => (value * 20) / Math.LN10));
   const end = gainDb(path.analogue, x.highHz);
   const low = Math.max(-140, Math.min(-60, 20 * Math.floor((Number.isFinite(end) ? end : -140) / 20)));
-  return { title: 'dB', unit: 'dB', low, high: 10 * Math.ceil((top + 3) / 10) };
+  return { title: 'dB, the whole path', unit: 'dB', low, high: 10 * Math.ceil((top + 3) / 10) };
 }
 
 function totalItem(subject: Subject, draw: (response: Response) => Points): Item {

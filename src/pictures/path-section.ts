@@ -4,6 +4,7 @@ import { flatnessOf } from '../analysis/flatness';
 import type { Section } from '../protocol/picture';
 import { formatDb, formatFrequency } from '../units/format';
 import { closeUpPlot } from './path-close-up';
+import { delayPlot, phasePlot } from './path-timing';
 import { magnitudePlot } from './path-magnitude';
 import { limitFigure } from './subject';
 import type { Subject } from './subject';
@@ -18,7 +19,7 @@ export function pathSection(subject: Subject): Section {
     title: 'Analogue path',
     answer: { text: answerText(subject), standing: standingOf(subject.channel, limit) },
     place: subject.placeOf(limit === null ? ['filter'] : ['limits', 'flatness']),
-    plots: [...closeUp, magnitudePlot(subject)],
+    plots: [...closeUp, magnitudePlot(subject), phasePlot(subject), delayPlot(subject)],
   };
 }
 

@@ -16,11 +16,11 @@ export interface Sampling {
 /** The most points that a curve may have. */
 export const mostPoints = 2000;
 
-/** The lowest level that is written; a null is drawn as this. */
-export const bottom = -400;
+/** What is written where a curve has no finite value: a null is drawn as far below anything that is ever shown. */
+export const bottom = -1000;
 
 /** How many points are taken before any is added where the curve bends. */
-const evenPoints = 40;
+const evenPoints = 24;
 
 /** How often a stretch may be halved. */
 const deepest = 18;
@@ -100,5 +100,6 @@ function missOf(from: Point, middle: Point, to: Point, { floor }: Sampling): num
 
 function valueOf(curve: (frequencyHz: number) => number, frequencyHz: number): number {
   const value = curve(frequencyHz);
-  return Number.isNaN(value) ? bottom : Math.min(-bottom, Math.max(bottom, value));
+  if (Number.isFinite(value)) return value;
+  return value === Infinity ? -bottom : bottom;
 }

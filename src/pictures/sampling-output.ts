@@ -192,6 +192,7 @@ function noiseItems(view: SamplingView): Item[] {
   if (total === null || !Number.isFinite(total)) return [];
   const text = `all noise in the wanted band ${levelWords(total)}`;
   const bands = view.subject.figures.wanted;
+  const widthHz = bands.reduce((sum, band) => sum + band.appearsHigh - band.appearsLow, 0);
   const middle = bands[0] === undefined ? 0 : bands[0].appearsLow + (bands[0].appearsHigh - bands[0].appearsLow) * 0.3;
   return [
     item({
@@ -200,7 +201,11 @@ function noiseItems(view: SamplingView): Item[] {
       pane: outputPane,
       role: 'noise',
       name: 'all noise in the wanted band',
-      words: sentences(text, quantisation === null ? '' : `Quantisation alone ${levelWords(quantisation)}`),
+      words: sentences(
+        text,
+        `That is ${levelWords(total - 10 * Math.log10(widthHz), 'dBFS/√Hz')} over ${stretchWords(widthHz, widthHz)}`,
+        quantisation === null ? '' : `Quantisation alone ${levelWords(quantisation)}`,
+      ),
       place: view.subject.placeOf(['bits']),
       shapes: bands.map((band): Shape => ({
         kind: 'curve',

@@ -43,6 +43,7 @@ function samplingPlot(view: SamplingView): Plot {
     id: 'sampling',
     title: 'Before and after sampling',
     words: plotWords(view),
+    shown: 'always',
     panes: [
       { id: inputPane, x: view.input, y: view.levels },
       { id: outputPane, x: view.output, y: view.levels },

@@ -20,9 +20,8 @@ export class HeadingView {
   constructor(root: HTMLElement, target: HeadingTarget) {
     this.pinButton = button('Hold', 'Hold this channel wherever the cursor goes', target.pin);
     const refresh = button('Refresh', 'Draw the newest text again', target.refresh);
-    const name = element('div', { class: 'name' }, this.channel, this.summary);
     const tools = element('div', { class: 'tools' }, this.freshness, this.pinButton, refresh);
-    root.replaceChildren(name, this.verdict, this.words, tools);
+    root.replaceChildren(this.channel, this.verdict, this.words, this.summary, tools);
   }
 
   /** Shows a channel's heading. */

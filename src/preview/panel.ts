@@ -68,7 +68,7 @@ export class Panel {
     const first = this.picture === null;
     this.sequence = sequence;
     this.picture = picture;
-    this.keep({ ...this.state, uri, channel: picture.channel, pinned });
+    this.keepFor(uri, { channel: picture.channel, pinned });
     this.notice.hidden = true;
     document.body.classList.remove('stale');
     this.heading.fresh('up to date');
@@ -80,7 +80,9 @@ export class Panel {
 
   private stale(message: HostMessage & { readonly kind: 'stale' }): void {
     this.sequence = message.sequence;
-    this.keep({ ...this.state, uri: message.uri });
+    // Another spec's picture must not stand under this one's reason.
+    if (this.picture !== null && this.state.uri !== message.uri) this.clear();
+    this.keepFor(message.uri, {});
     if (this.picture === null) {
       this.explain(message.reason);
       return;
@@ -93,6 +95,8 @@ export class Panel {
 
   /** Says why there is no picture. */
   private explain(reason: string): void {
+    document.body.classList.remove('stale');
+    this.heading.fresh('');
     this.heading.empty();
     setText(this.notice, reason);
     this.notice.hidden = false;
@@ -180,6 +184,18 @@ export class Panel {
       const elsewhere = event.target === document.body && !event.ctrlKey && !event.metaKey && !event.altKey;
       if (elsewhere && event.key.toLowerCase() === 't') for (const section of this.sections.values()) section.toggleTables();
     });
+  }
+
+  /** Zoom and tables belong to one spec; another begins afresh. */
+  private keepFor(uri: string, change: Partial<PanelState>): void {
+    const plots = this.state.uri === null || this.state.uri === uri ? this.state.plots : {};
+    this.keep({ ...this.state, uri, plots, ...change });
+  }
+
+  private clear(): void {
+    this.picture = null;
+    for (const view of this.sections.values()) view.destroy();
+    this.sections.clear();
   }
 
   private keep(state: PanelState): void {

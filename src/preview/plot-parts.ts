@@ -6,6 +6,11 @@ import { keyWords } from './keys';
 /** The elements of a plot. */
 export interface PlotParts {
   readonly root: HTMLElement;
+  /** Opens a plot that is drawn on demand. */
+  readonly opener: HTMLButtonElement;
+  readonly openerTitle: HTMLElement;
+  /** All but the opener. */
+  readonly content: HTMLElement;
   /** Takes the focus, the pointer and the keys. */
   readonly stage: HTMLElement;
   readonly canvas: HTMLCanvasElement;
@@ -22,6 +27,7 @@ export interface PlotParts {
 
 /** What the tools ask for. */
 export interface ToolTarget {
+  open: () => void;
   table: () => void;
   whole: () => void;
   save: (format: SaveKind) => void;
@@ -57,8 +63,18 @@ export function plotParts(id: string, target: ToolTarget): PlotParts {
     ...saves,
   );
   const table = element('div', { class: 'table', attributes: { hidden: '', tabindex: '0', role: 'region' } });
-  const root = element('div', { class: 'plot' }, words, keys, stage, element('div', { class: 'below' }, legend, tools), table);
-  return { root, stage, canvas, tip, words, legend, scales, whole, tableButton, table };
+  const openerTitle = element('span', { class: 'answer' });
+  const opener = openerOf(openerTitle, target);
+  const content = element('div', {}, words, keys, tools, stage, legend, table);
+  const root = element('div', { class: 'plot' }, opener, content);
+  return { root, opener, openerTitle, content, stage, canvas, tip, words, legend, scales, whole, tableButton, table };
+}
+
+function openerOf(title: HTMLElement, target: ToolTarget): HTMLButtonElement {
+  const chevron = element('span', { class: 'chevron', attributes: { 'aria-hidden': 'true' } });
+  const opener = element('button', { class: 'fold', attributes: { type: 'button' } }, chevron, title);
+  opener.addEventListener('click', target.open);
+  return opener;
 }
 
 function saveButton(format: SaveKind, target: ToolTarget): HTMLButtonElement {

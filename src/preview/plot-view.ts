@@ -51,6 +51,9 @@ export class PlotView {
     private readonly target: PlotTarget,
   ) {
     this.parts = plotParts(`plot-${plot.id}`, {
+      open: () => {
+        this.change({ ...this.state, opened: this.state.opened === 'opened' ? 'closed' : 'opened' });
+      },
       table: () => {
         this.toggleTable();
       },
@@ -85,6 +88,7 @@ export class PlotView {
 
   /** Draws; called when the plot is in sight and after anything has changed. */
   draw(): void {
+    if (this.closed()) return;
     const input = { plot: this.shown(), state: this.state, theme: this.theme };
     if (this.chart === null) this.chart = new PlotChart(this.parts.canvas, input);
     else this.chart.show(input);
@@ -98,7 +102,7 @@ export class PlotView {
     this.state = fittedState(plot, state);
     this.pointing = { ...this.pointing, lit: new Set(itemsAt(plot.items, this.place)) };
     this.fill();
-    if (this.chart !== null) this.draw();
+    this.redraw();
   }
 
   /** Lights the items of the line that the editor's cursor is in. */
@@ -219,7 +223,17 @@ export class PlotView {
     this.state = state;
     this.target.remember(state);
     this.fill();
-    if (this.chart !== null) this.draw();
+    this.redraw();
+  }
+
+  /** Draws again what has been drawn, and what has just been opened. */
+  private redraw(): void {
+    const inSight = this.parts.root.offsetParent !== null;
+    if (this.chart !== null || inSight) this.draw();
+  }
+
+  private closed(): boolean {
+    return this.plot.shown === 'on demand' && this.state.opened === 'closed';
   }
 
   private shown(): Plot {
@@ -233,6 +247,10 @@ export class PlotView {
 
   private fill(): void {
     const { parts, plot, state } = this;
+    parts.opener.hidden = plot.shown === 'always';
+    parts.opener.setAttribute('aria-expanded', String(!this.closed()));
+    setText(parts.openerTitle, plot.words === '' ? plot.title : `${plot.title}: ${plot.words}`);
+    parts.content.hidden = this.closed();
     parts.stage.setAttribute('aria-label', plot.title);
     parts.stage.style.height = `${plotHeight(plot)}px`;
     setText(parts.words, plot.words);
@@ -262,7 +280,7 @@ export class PlotView {
   private fillScales(): void {
     const buttons = this.plot.panes.map((pane) => {
       const scale = scaleOf(pane, viewOf(this.state, pane.id));
-      const name = pane.x.title.replace(/^Hz /, '').replace(/,.*$/, '');
+      const name = pane.x.title.replace(/^Hz ?/, '').replace(/,.*$/, '') || 'frequency';
       const made = button(`${name}: ${scale}`, 'Change the frequency scale (L)', () => {
         this.switchScale(pane);
       });

@@ -48,6 +48,7 @@ export class SectionView {
     setText(this.title, section.title);
     setText(this.answer, section.answer.text);
     this.answer.dataset['standing'] = section.answer.standing;
+    this.body.hidden = folded === 'folded';
     for (const plot of section.plots) this.plotFor(plot.id, section, theme).show(plot, this.target.stateOf(plot.id), theme);
     for (const [id, view] of this.plots) if (!section.plots.some((plot) => plot.id === id)) this.drop(id, view);
     this.fold(folded);

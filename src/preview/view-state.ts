@@ -8,6 +8,8 @@ export interface PlotState {
   /** Series that the reader has hidden. */
   readonly hidden: readonly string[];
   readonly table: 'shown' | 'hidden';
+  /** Of a plot that is drawn on demand. */
+  readonly opened: 'opened' | 'closed';
 }
 
 /** What is remembered of the whole page. */
@@ -23,7 +25,7 @@ export interface PanelState {
 }
 
 /** A plot that nobody has touched. */
-export const freshPlot: PlotState = { panes: {}, hidden: [], table: 'hidden' };
+export const freshPlot: PlotState = { panes: {}, hidden: [], table: 'hidden', opened: 'closed' };
 
 /** A page that has just been opened. */
 export const freshPanel: PanelState = { uri: null, channel: null, pinned: false, folded: [], plots: {}, scroll: 0 };
@@ -63,6 +65,7 @@ function readPlot(value: unknown): PlotState {
     panes: Object.fromEntries(panes.map(([id, pane]) => [id, readPane(pane)])),
     hidden: textsOf(value['hidden']),
     table: value['table'] === 'shown' ? 'shown' : 'hidden',
+    opened: value['opened'] === 'opened' ? 'opened' : 'closed',
   };
 }
 

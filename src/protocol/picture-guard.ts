@@ -1,6 +1,8 @@
 /** Whether an unknown value is a picture that can be drawn without further checks. */
 import { isFiniteNumber, isListOf, isNullOr, isPlaceName, isRecord, isText } from './guards';
-import type { Item, Label, PanelPicture, Pane, Plot, Points, Role, Row, Section, Series, Shape } from './picture';
+import type { Item, Label, LevelUnit, PanelPicture, Pane, Plot, Points, Role, Row, Section, Series, Shape } from './picture';
+
+const units: readonly LevelUnit[] = ['dBFS', 'dB', 'deg', 's', 'ms', 'µs', 'ns'];
 
 const roles: readonly Role[] = [
   'wanted',
@@ -38,6 +40,7 @@ function isSection(value: unknown): value is Section {
 
 function isPlot(value: unknown): value is Plot {
   if (!isRecord(value) || ![value['id'], value['title'], value['words']].every(isText)) return false;
+  if (!isOneOf(value['shown'], ['always', 'on demand'])) return false;
   if (!isListOf(value['panes'], isPane) || !isListOf(value['series'], isSeries) || !isListOf(value['items'], isItem))
     return false;
   const panes = new Set(value['panes'].map((pane) => pane.id));
@@ -47,8 +50,7 @@ function isPlot(value: unknown): value is Plot {
 function isPane(value: unknown): value is Pane {
   if (!isRecord(value) || !isText(value['id']) || !isRecord(value['x']) || !isRecord(value['y'])) return false;
   const { x, y } = value;
-  const titles =
-    isText(x['title']) && isText(y['title']) && isOneOf(x['scale'], ['log', 'linear']) && isOneOf(y['unit'], ['dBFS', 'dB']);
+  const titles = isText(x['title']) && isText(y['title']) && isOneOf(x['scale'], ['log', 'linear']) && isOneOf(y['unit'], units);
   return titles && isRising(x['lowHz'], x['highHz']) && isRising(0, x['logLowHz']) && isRising(y['low'], y['high']);
 }
 

@@ -46,6 +46,8 @@ export interface Plot {
   readonly title: string;
   /** What the plot shows, in sentences, for a screen reader. */
   readonly words: string;
+  /** Whether it is always drawn, or once the reader opens it. */
+  readonly shown: 'always' | 'on demand';
   readonly panes: readonly Pane[];
   /** What the legend lists and the reader can hide. */
   readonly series: readonly Series[];
@@ -71,10 +73,13 @@ export interface FrequencyAxis {
   readonly scale: 'log' | 'linear';
 }
 
-/** The axis of levels or gains. */
+/** What a vertical axis is counted in. */
+export type LevelUnit = 'dBFS' | 'dB' | 'deg' | 's' | 'ms' | 'µs' | 'ns';
+
+/** The axis of levels, gains, phases or delays. */
 export interface LevelAxis {
   readonly title: string;
-  readonly unit: 'dBFS' | 'dB';
+  readonly unit: LevelUnit;
   readonly low: number;
   readonly high: number;
 }
@@ -115,6 +120,8 @@ export interface Item {
   /** One sentence for a screen reader and for the line under the pointer. */
   readonly words: string;
   readonly place: PlaceName | null;
+  /** Further places whose cursor lights it: the shared filter or clock behind it. */
+  readonly alsoAt?: readonly PlaceName[];
   /** Items that light up with this one: a source's landing and ribbons, and the other way round. */
   readonly joins: readonly string[];
   readonly shapes: readonly Shape[];
@@ -191,7 +198,7 @@ export interface Table {
 /** A column; numbers in it are in `unit`. */
 export interface Column {
   readonly title: string;
-  readonly unit: 'Hz' | 'dBFS' | 'dBc' | 'dB' | null;
+  readonly unit: 'Hz' | 'dBc' | LevelUnit | null;
 }
 
 /** A row, with the item whose data it holds. */
