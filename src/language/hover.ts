@@ -1,6 +1,6 @@
 /** Hovers: the answer for the innermost place under the cursor, then what the declaration says of its key. */
 import type { Hover, Position } from 'vscode-languageserver-types';
-import { placeAt, type DefinedName, type Path, type PlaceAt } from '../spec';
+import { placeAt, type DefinedName, type Path, type PlaceAt, type Reading } from '../spec';
 import type { ClientAbilities } from './client-abilities';
 import { writeHover, type Answer } from './hovers/answer';
 import { channelHover } from './hovers/channel';
@@ -21,13 +21,20 @@ import { offsetOf, rangeOf } from './text-range';
 /** The hover at a position, or null where nothing stands there. */
 export function hover(document: SpecDocument, position: Position, abilities: ClientAbilities): Hover | null {
   const { reading } = document;
-  const at = placeAt(reading, offsetOf(reading, position));
-  if (at === null) return null;
+  const offset = offsetOf(reading, position);
+  const at = placeAt(reading, offset);
+  if (at === null || !standsAt(reading, at, offset)) return null;
   const answer = answerAt(document, at);
   const prose = at.about === null || (answer !== null && at.part === 'value') ? null : keyProse(keyName(at), at.about);
   if (answer === null && prose === null) return null;
   const value = writeHover(answer, prose, abilities.markdown);
   return { contents: { kind: abilities.markdown ? 'markdown' : 'plaintext', value }, range: rangeOf(reading, at.span) };
+}
+
+/** Whether the cursor is on the place itself: not on the blanks and comments between the lines of a longer one. */
+function standsAt({ text }: Reading, { part, span }: PlaceAt, offset: number): boolean {
+  if (span.start === span.end || offset < span.start || offset > span.end) return false;
+  return part === 'key' || !text.slice(span.start, span.end).includes('\n');
 }
 
 function keyName({ place: { path } }: PlaceAt): string | null {

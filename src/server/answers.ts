@@ -13,6 +13,6 @@ export function refuseIfCancelled(token: CancellationToken): void {
 }
 
 /** The answer to a request whose document has moved on while it was worked on. */
-export function contentModified(): ResponseError<void> {
+export function contentModified(): ResponseError {
   return new ResponseError(LSPErrorCodes.ContentModified, 'The document has a newer version.');
 }

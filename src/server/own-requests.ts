@@ -1,5 +1,5 @@
 /** Our own requests: the panel's picture, from a place to its line and back, and the counts of work. */
-import type { Connection } from 'vscode-languageserver';
+import type { CancellationToken, Connection } from 'vscode-languageserver';
 import { drawable, locate, placeNameAt, type Drawable, type SpecDocument } from '../language';
 import { pictureOf } from '../pictures';
 import { isCountsParams, isLocateParams, isPictureParams, isPlaceAtParams } from '../protocol/request-guards';
@@ -23,7 +23,7 @@ import type { ServerState } from './server-state';
 /** Answers them from the newest version. */
 export function answerOwn(connection: Connection, state: ServerState): void {
   const { specs, proofs } = state;
-  connection.onRequest(pictureRequest, async (params: PictureParams, token): Promise<PictureResult> => {
+  connection.onRequest(pictureRequest, async (params: PictureParams, token: CancellationToken): Promise<PictureResult> => {
     const { uri, channel, position } = check(params, isPictureParams);
     const document = await specs.judged(uri);
     refuseIfCancelled(token);

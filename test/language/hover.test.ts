@@ -172,7 +172,12 @@ describe('a hover', () => {
   });
 
   it('is absent in a comment and on an empty line', () => {
-    for (const marked of [`# no¦te\n${passingSpec}`, passingSpec.replace('\n\nclocks', '\n¦\nclocks')]) {
+    const between = ['    limits:\n', '    limits:\n      # a no¦te\n'] as const;
+    for (const marked of [
+      `# no¦te\n${passingSpec}`,
+      passingSpec.replace('\n\nclocks', '\n¦\nclocks'),
+      passingSpec.replace(...between),
+    ]) {
       const { document, cursor } = opened(marked);
       assert.equal(hover(document, cursor, ableEditor), null);
     }

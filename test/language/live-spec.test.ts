@@ -47,7 +47,10 @@ describe('an open spec', () => {
     for (const finding of after.judgement.findings) {
       for (const { edits } of after.cureOf(finding)?.fixes ?? []) {
         for (const { span } of edits) {
-          assert.equal(after.reading.text.slice(span.start, span.end), broken.slice(span.start - line.length, span.end - line.length));
+          assert.equal(
+            after.reading.text.slice(span.start, span.end),
+            broken.slice(span.start - line.length, span.end - line.length),
+          );
         }
       }
     }

@@ -14,9 +14,9 @@ interface Bench {
   readonly specs: OpenSpecs;
   readonly proofs: Proofs;
   readonly faults: unknown[];
-  judged(): Promise<SpecDocument>;
+  readonly judged: () => Promise<SpecDocument>;
   /** Lets the others have turns until the condition holds. */
-  until(condition: () => boolean): Promise<void>;
+  readonly until: (condition: () => boolean) => Promise<void>;
 }
 
 function bench(): Bench {

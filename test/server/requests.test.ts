@@ -1,6 +1,12 @@
 /** Requests over the wire: hover, completion, outline, quick fixes, our own ones, and those that make no sense. */
 import assert from 'node:assert/strict';
-import type { CompletionList, DocumentSymbol, Hover, SymbolInformation } from 'vscode-languageserver/node';
+import {
+  MarkupContent,
+  type CompletionList,
+  type DocumentSymbol,
+  type Hover,
+  type SymbolInformation,
+} from 'vscode-languageserver/node';
 import type { LocateResult, PictureResult, PlaceAtResult } from '../../src/protocol/requests';
 import { exampleText } from '../support/examples';
 import { buildServer, LanguageClient, plainEditor, pullingEditor, type ClientDocument } from '../support/language-client';
@@ -21,20 +27,23 @@ describe('requests over LSP', () => {
   const hoverOn = (document: ClientDocument, words: string): Promise<Hover | null> =>
     client.request('textDocument/hover', document, { position: document.rangeOf(words).start });
 
+  const markupOf = (hover: Hover | null): MarkupContent => {
+    assert.ok(hover && MarkupContent.is(hover.contents));
+    return hover.contents;
+  };
+
   it('hover a rate', async () => {
     const document = await client.open(passingSpec);
-    const hover = await hoverOn(document, '{ clock: board, divide: 384 }');
-    assert.ok(hover && 'value' in hover.contents);
-    assert.equal(hover.contents.kind, 'markdown');
-    assert.match(hover.contents.value, /^\*\*64 kHz: half rate 32 kHz/);
+    const { kind, value } = markupOf(await hoverOn(document, '{ clock: board, divide: 384 }'));
+    assert.equal(kind, 'markdown');
+    assert.match(value, /^\*\*64 kHz: half rate 32 kHz/);
   });
 
   it('hover the newest text right after an edit', async () => {
     const document = await client.open(passingSpec);
     await document.replace('divide: 384', 'divide: 320');
-    const hover = await hoverOn(document, '{ clock: board, divide: 320 }');
-    assert.ok(hover && 'value' in hover.contents);
-    assert.match(hover.contents.value, /^\*\*76\.8 kHz/);
+    const { value } = markupOf(await hoverOn(document, '{ clock: board, divide: 320 }'));
+    assert.match(value, /^\*\*76\.8 kHz/);
   });
 
   it('hover in plain text for an editor that knows no Markdown', async () => {
@@ -44,9 +53,9 @@ describe('requests over LSP', () => {
     const hover: Hover | null = await plain.request('textDocument/hover', document, {
       position: document.rangeOf('-3 dBFS').start,
     });
-    assert.ok(hover && 'value' in hover.contents);
-    assert.equal(hover.contents.kind, 'plaintext');
-    assert.doesNotMatch(hover.contents.value, /\*\*|\|/);
+    const { kind, value } = markupOf(hover);
+    assert.equal(kind, 'plaintext');
+    assert.doesNotMatch(value, /\*\*|\|/);
     await plain.exit();
   });
 
@@ -62,12 +71,14 @@ describe('requests over LSP', () => {
   it('outline channels and definitions as a tree', async () => {
     const document = await client.open(passingSpec);
     const symbols: DocumentSymbol[] = await client.request('textDocument/documentSymbol', document);
-    const channels = symbols.find(({ name }) => name === 'channels');
+    const channels = symbols.find(({ name }) => name === 'channels')?.children ?? [];
     assert.deepEqual(
-      channels?.children?.map(({ name }) => name),
+      channels.map(({ name }) => name),
       ['bearing'],
     );
-    assert.equal(document.textIn(channels?.children?.[0]?.selectionRange ?? channels!.range), 'bearing');
+    const [channel] = channels;
+    assert.ok(channel);
+    assert.equal(document.textIn(channel.selectionRange), 'bearing');
   });
 
   it('outline as a flat list for an editor that knows no tree', async () => {
@@ -131,8 +142,8 @@ describe('requests over LSP', () => {
       channel: null,
       position,
     });
-    assert.equal(result.kind, 'picture');
-    assert.equal(result.kind === 'picture' ? result.picture.channel : null, 'bearing-y');
+    assert.ok(result.kind === 'picture');
+    assert.equal(result.picture.channel, 'bearing-y');
     assert.equal(result.version, document.version);
   });
 
@@ -143,8 +154,8 @@ describe('requests over LSP', () => {
       channel: 'bearing',
       position: null,
     });
-    assert.equal(result.kind, 'none');
-    assert.match(result.kind === 'none' ? result.reason : '', /bearing/);
+    assert.ok(result.kind === 'none');
+    assert.match(result.reason, /^`bearing` has 1 fault; the first is on line \d+: /);
   });
 
   it('lead from a place to its line and back', async () => {

@@ -1,6 +1,6 @@
 /** Judged documents for tests of editor features, with the cursor marked in the text by `¦`, and what is expected of them. */
 import assert from 'node:assert/strict';
-import type { Hover, Position } from 'vscode-languageserver-types';
+import { MarkupContent, type Hover, type Position } from 'vscode-languageserver-types';
 import { drain } from '../../src/jobs';
 import {
   diagnostics,
@@ -98,7 +98,7 @@ export function offsetIn(text: string, { line, character }: Position): number {
 
 function textOf(found: Hover | null): string {
   assert.ok(found, 'there is no hover');
-  assert.ok('value' in found.contents);
+  assert.ok(MarkupContent.is(found.contents));
   return found.contents.value;
 }
 
