@@ -5,13 +5,13 @@ import type { Response } from '../signal/response';
 import type { Channel } from '../spec/channel';
 import { channelPath } from './channel-path';
 import type { ChannelPath } from './channel-path';
-import { atCorners, cornerSets } from './corners';
+import { atCorners } from './corners';
 import { powerDb, powerOf } from './decibels';
-import type { WorstAt } from './figures';
 import type { DirectionNoise } from './noise-parts';
 import { pulseSeconds } from './pulse';
 import { jitterSeconds, noiseBands } from './test-tone';
 import { cornerDeviations, deviation, joinWorst, partsVary, rateLabel, rateRange, varies } from './tolerances';
+import { worstCorners } from './worst-corners';
 import { worstPath } from './worst-path';
 
 /** The noise of a generate channel. */
@@ -71,23 +71,24 @@ function sharesOf(path: ChannelPath, powers: Powers): readonly number[] {
   return powers.jitter === null ? quantisation : [...quantisation, powers.jitter / gain];
 }
 
-/** Noise over the test tone at every combination of corners and where the tone is weakest, at either end of the rate. */
+/** Noise over the test tone at the worst corners, and at the worst end of the rate. */
 function worstShares(
   channel: Channel,
   path: ChannelPath,
-): { readonly shares: readonly number[]; readonly worstAt: WorstAt | null } {
+): Pick<DirectionNoise, 'worstAt'> & { readonly shares: readonly number[] } {
+  if (channel.bits === null && jitterSeconds(channel) === 0) return { shares: [], worstAt: null };
   const { rate } = channel;
   const { low, high } = rateRange(rate);
-  const weakest = worstPath(path, { sense: 'smallest', referenceHz: null, axis: 'hertz' }).cornersAt(
-    channel.testTone.frequencyHz,
-  );
-  const sets = [...cornerSets(path), weakest];
-  const found = [...new Set([rate.hz, low, high])].flatMap((rateHz) => {
+  const question = { sense: 'smallest', referenceHz: null, axis: 'hertz' } as const;
+  const weakest = worstPath(path, question).cornersAt(channel.testTone.frequencyHz);
+  const found = [...new Set([rate.hz, low, high])].map((rateHz) => {
     const moved = channelPath(channel, rateHz);
-    return sets.map((corners) => {
+    const sharesWith = (corners: readonly number[]): readonly number[] => {
       const there = atCorners(moved, corners);
-      return { rateHz, corners, shares: sharesOf(there, powersOf(there)) };
-    });
+      return sharesOf(there, powersOf(there));
+    };
+    const corners = worstCorners(path, [weakest], (tried) => sum(sharesWith(tried)));
+    return { rateHz, corners, shares: sharesWith(corners) };
   });
   const worst = found.reduce((best, one) => (sum(one.shares) > sum(best.shares) ? one : best));
   const clock = varies(rate.tolerance) ? { [rateLabel(rate)]: deviation(worst.rateHz / rate.hz, rate.tolerance) } : null;
