@@ -95,8 +95,8 @@ class FilterResponse implements Response {
     const atHigh = this.logGain(highHz);
     let low = Math.min(atLow, atHigh);
     let high = Math.max(atLow, atHigh);
-    for (const [index, turn] of turnsHz.entries()) {
-      if (turn <= lowHz || turn >= highHz) continue;
+    for (let index = turnsUpTo(turnsHz, lowHz); index < turnsHz.length; index += 1) {
+      if ((turnsHz[index] ?? Infinity) >= highHz) break;
       const gain = this.turnGains[index] ?? 0;
       low = Math.min(low, gain);
       high = Math.max(high, gain);
@@ -107,13 +107,20 @@ class FilterResponse implements Response {
   /** Above the last turning point a low-pass falls, so counting turning points from the top tells the sign below. */
   private withKnownSign(lowHz: number, highHz: number, slope: Enclosure): Enclosure {
     if (this.turnsHz === undefined) return slope;
-    const below = this.turnsHz.filter((turn) => turn <= lowHz).length;
-    if (below < this.turnsHz.filter((turn) => turn < highHz).length) return slope;
+    const below = turnsUpTo(this.turnsHz, lowHz);
+    if ((this.turnsHz[below] ?? Infinity) < highHz) return slope;
     const falling = (this.turnsHz.length - below) % 2 === 0;
     return falling
       ? { low: Math.min(slope.low, 0), high: Math.min(slope.high, 0) }
       : { low: Math.max(slope.low, 0), high: Math.max(slope.high, 0) };
   }
+}
+
+/** How many turning points lie at or below a frequency. */
+function turnsUpTo(turnsHz: readonly number[], frequencyHz: number): number {
+  let count = 0;
+  while (count < turnsHz.length && (turnsHz[count] ?? Infinity) <= frequencyHz) count += 1;
+  return count;
 }
 
 function checkFilter(filter: Filter): void {

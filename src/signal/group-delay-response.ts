@@ -34,7 +34,9 @@ class DelayResponse implements Response {
   constructor(private readonly humps: readonly Hump[]) {}
 
   logGain(frequencyHz: number): number {
-    return Math.log(this.humps.reduce((sum, hump) => sum + heightAt(hump, frequencyHz), 0));
+    let sum = 0;
+    for (const hump of this.humps) sum += heightAt(hump, frequencyHz);
+    return Math.log(sum);
   }
 
   bounds(lowHz: number, highHz: number): Enclosure {
@@ -43,18 +45,33 @@ class DelayResponse implements Response {
   }
 
   slope(lowHz: number, highHz: number): Enclosure | null {
-    let steepestDown = 0;
-    let steepestUp = 0;
+    const range = this.range(lowHz, highHz);
+    if (!(range.low > 0) || highHz === Infinity) return null;
+    const steepness = this.steepness(lowHz, highHz);
+    const low = steepness.low / (steepness.low < 0 ? range.low : range.high);
+    const high = steepness.high / (steepness.high > 0 ? range.low : range.high);
+    return { low: low - logSlack * Math.abs(low), high: high + logSlack * Math.abs(high) };
+  }
+
+  /** An enclosure of τ′: the sum of the humps' own ranges, met with the mean-value form, which is the tighter one where humps cancel. */
+  private steepness(lowHz: number, highHz: number): Enclosure {
+    const middle = lowHz + 0.5 * (highHz - lowHz);
+    let low = 0;
+    let high = 0;
+    let atMiddle = 0;
+    let leastBend = 0;
+    let mostBend = 0;
     for (const hump of this.humps) {
       const slopes = slopeRange(hump, lowHz, highHz);
-      steepestDown += slopes.low;
-      steepestUp += slopes.high;
+      const bends = bendRange(hump, lowHz, highHz);
+      low += slopes.low;
+      high += slopes.high;
+      atMiddle += slopeAt(hump, middle);
+      leastBend += bends.low;
+      mostBend += bends.high;
     }
-    const range = this.range(lowHz, highHz);
-    if (!(range.low > 0)) return null;
-    const low = steepestDown / (steepestDown < 0 ? range.low : range.high);
-    const high = steepestUp / (steepestUp > 0 ? range.low : range.high);
-    return { low: low - logSlack * Math.abs(low), high: high + logSlack * Math.abs(high) };
+    const reach = 0.5 * (highHz - lowHz) * Math.max(Math.abs(leastBend), Math.abs(mostBend));
+    return { low: Math.max(low, atMiddle - reach), high: Math.min(high, atMiddle + reach) };
   }
 
   private range(lowHz: number, highHz: number): Enclosure {
@@ -71,12 +88,14 @@ class DelayResponse implements Response {
 }
 
 function heightAt({ strength, width, centre }: Hump, frequencyHz: number): number {
-  return strength / (width * width + (frequencyHz - centre) ** 2);
+  const offset = frequencyHz - centre;
+  return strength / (width * width + offset * offset);
 }
 
 function slopeAt({ strength, width, centre }: Hump, frequencyHz: number): number {
   const offset = frequencyHz - centre;
-  return (-2 * strength * offset) / (width * width + offset * offset) ** 2;
+  const square = width * width + offset * offset;
+  return (-2 * strength * offset) / (square * square);
 }
 
 /** A hump rises most at centre − width/√3 and falls most at centre + width/√3; between those and beyond its slope is monotonic. */
@@ -89,6 +108,24 @@ function slopeRange(hump: Hump, lowHz: number, highHz: number): Enclosure {
   return {
     low: lowHz < falls && falls < highHz ? slopeAt(hump, falls) : Math.min(atLow, atHigh),
     high: lowHz < rises && rises < highHz ? slopeAt(hump, rises) : Math.max(atLow, atHigh),
+  };
+}
+
+function bendAt({ strength, width, centre }: Hump, frequencyHz: number): number {
+  const offset = (frequencyHz - centre) ** 2;
+  const square = width * width + offset;
+  return (2 * strength * (3 * offset - width * width)) / (square * square * square);
+}
+
+/** A hump's second derivative is lowest at its centre and highest at centre ± width. */
+function bendRange(hump: Hump, lowHz: number, highHz: number): Enclosure {
+  const { width, centre } = hump;
+  const atLow = bendAt(hump, lowHz);
+  const atHigh = bendAt(hump, highHz);
+  const inside = (frequencyHz: number): boolean => lowHz < frequencyHz && frequencyHz < highHz;
+  return {
+    low: inside(centre) ? bendAt(hump, centre) : Math.min(atLow, atHigh),
+    high: inside(centre - width) || inside(centre + width) ? bendAt(hump, centre + width) : Math.max(atLow, atHigh),
   };
 }
 

@@ -107,6 +107,8 @@ class Stretched implements StretchedResponse {
   private worstHz(frequencyHz: number): number {
     const lowHz = frequencyHz / this.factors.high;
     const highHz = frequencyHz / this.factors.low;
+    // Without a turning point in between the worst is at an end, which needs no search.
+    if (this.response.turnsHz?.length === 0) return this.response.logGain(highHz) > this.response.logGain(lowHz) ? highHz : lowHz;
     return largestOverBands(this.response, [{ low: lowHz, high: highHz }], { gapDb: nestedGapDb })?.frequencyHz ?? frequencyHz;
   }
 }

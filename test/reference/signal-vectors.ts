@@ -3,7 +3,7 @@ import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 
 /** Upper half plane and real poles of one filter, corner 1, and what it does on the grid. */
-export interface FilterVector {
+interface FilterVector {
   readonly order: number;
   readonly poles: readonly (readonly [number, number])[];
   readonly gain: readonly number[];
@@ -12,7 +12,7 @@ export interface FilterVector {
 }
 
 /** A Chebyshev filter with its ripple ending at 1. */
-export interface ChebyshevVector extends FilterVector {
+interface ChebyshevVector extends FilterVector {
   readonly ripple: number;
   readonly halfPower: number;
 }

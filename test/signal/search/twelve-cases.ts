@@ -1,7 +1,6 @@
 /** Twelve named hard cases for the proved maximum; each with its own plain gain over frequency, which shares nothing with the bounds. */
 import { butterworth } from '../../../src/signal/families/butterworth';
 import { chebyshev } from '../../../src/signal/families/chebyshev';
-import { realPole } from '../../../src/signal/families/real-pole';
 import { filterResponse, type Filter, type Root } from '../../../src/signal/filter';
 import { rectangleResponse } from '../../../src/signal/pulses/rectangle';
 import type { Response } from '../../../src/signal/response';
@@ -201,11 +200,11 @@ function holdNulls(): HardCase {
 }
 
 function wideHold(): HardCase {
-  const filter = chebyshev(5, 21e3, 0.5, 'ripple');
+  const filter = chebyshev(9, 130e3, 1.5, 'ripple');
   const power = filterPower(filter);
   const path = product([rectangleResponse(1 / 48e3), filterResponse(filter)]);
   return overFolds({
-    name: 'images of a wide band against the wanted tone itself, hold and ripples in both',
+    name: 'images of a wide band against the wanted tone itself, hold nulls and ripples in both',
     rateHz: 48e3,
     band: [20, 23.9e3],
     lastFold: 60,
@@ -215,16 +214,17 @@ function wideHold(): HardCase {
 }
 
 function narrowHold(): HardCase {
-  const power = filterPower(realPole(3e6));
+  const filter = chebyshev(11, 5.3e6, 1, 'ripple');
+  const power = filterPower(filter);
   return overFolds({
-    name: 'a hold of a twelfth of the period, strong to the eleventh fold, behind one slow pole',
+    name: 'a hold of a twelfth of the period and a filter that ripples over five folds',
     rateHz: 1e6,
     band: [50e3, 450e3],
     lastFold: 100,
     power: (f) => sincPower(f / 12e6) * power(f),
     question: {
       ...everything,
-      outer: product([rectangleResponse(1 / 12e6), filterResponse(realPole(3e6))]),
+      outer: product([rectangleResponse(1 / 12e6), filterResponse(filter)]),
       bands: enclosure([50e3, 450e3]),
     },
   });
