@@ -1,7 +1,7 @@
 /** Phase and group delay of the whole path, drawn when the reader asks for them. */
 import { pathDelay, pathPhaseRad, pulseSeconds } from '../analysis';
 import type { Item, LevelUnit, Plot, Points } from '../protocol/picture';
-import { formatFrequency, formatTime } from '../units/format';
+import { formatDb, formatFrequency, formatTime } from '../units/format';
 import { item } from './items';
 import { wholePathAxis } from './path-magnitude';
 import { sampleCurve } from './sample-curve';
@@ -13,7 +13,7 @@ export function phasePlot(subject: Subject): Plot {
   const { channel, path } = subject;
   const half = pulseSeconds(channel.pulse, channel.rate.hz) / 2;
   const degrees = (f: number): number => ((pathPhaseRad(path, f) - 2 * Math.PI * f * half) * 180) / Math.PI;
-  const words = `Phase at the reference ${formatFrequency(channel.referenceHz)}: ${degrees(channel.referenceHz).toFixed(1).replace('-', '−')} degrees`;
+  const words = `Phase, ${formatDb(degrees(channel.referenceHz), 'degrees')} at ${formatFrequency(channel.referenceHz)}`;
   return timingPlot(subject, { id: 'phase', title: 'Phase', unit: 'deg', curve: degrees, words });
 }
 
@@ -21,8 +21,8 @@ export function phasePlot(subject: Subject): Plot {
 export function delayPlot(subject: Subject): Plot {
   const { channel, figures, path } = subject;
   const { unit, seconds } = timeUnit(pathDelay(path, channel.referenceHz));
-  const spread = figures.delaySpread === null ? '' : `It varies by ${formatTime(figures.delaySpread)} over the wanted band`;
-  const words = sentences(`Group delay at the reference: ${formatTime(pathDelay(path, channel.referenceHz))}`, spread);
+  const spread = figures.delaySpread === null ? '' : `, varying by ${formatTime(figures.delaySpread)} over the wanted band`;
+  const words = `Group delay, ${formatTime(pathDelay(path, channel.referenceHz))} at ${formatFrequency(channel.referenceHz)}${spread}`;
   return timingPlot(subject, {
     id: 'group-delay',
     title: 'Group delay',

@@ -77,8 +77,8 @@ function dashOf(items: readonly Item[]): string {
     'dash-dot': '6 2 1.5 2',
     'long-dash': '7 2',
   };
-  if (items.some((item) => item.role === 'rule')) return dashes.dotted;
-  return curve?.kind === 'curve' ? dashes[curve.stroke] : '';
+  if (curve?.kind === 'curve') return dashes[curve.stroke];
+  return items.some((item) => item.role === 'rule') ? dashes.dotted : '';
 }
 
 function svg(name: string, attributes: Readonly<Record<string, string>>): SVGElement {

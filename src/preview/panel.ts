@@ -36,6 +36,8 @@ export class Panel {
         host.post({ kind: 'request-refresh' });
       },
     });
+    // In the heading, which stays in sight when the page is scrolled.
+    byId('heading').append(this.notice);
     this.explain('Waiting for the first picture.');
     // Kept at once: a page without state is not revived after a reload.
     this.keep(this.state);

@@ -46,7 +46,7 @@ export class PlotReader {
   /** Reads what lies under the pointer; nothing, or the cursor again, where nothing does. */
   hover(plot: Plot, frame: Frame, at: Spot | null): Reading | null {
     const found = at === null ? null : hitAt(plot, frame, at.x, at.y);
-    this.showReading(plot, frame, found ?? this.cursor);
+    this.showReading(plot, frame, found ?? this.cursor, found === null ? null : at);
     return found;
   }
 
@@ -92,7 +92,7 @@ export class PlotReader {
     }
   }
 
-  private showReading(plot: Plot, frame: Frame, reading: Reading | null): void {
+  private showReading(plot: Plot, frame: Frame, reading: Reading | null, beside: Spot | null = null): void {
     const { tip } = this.target;
     const place = frame.panes.find((candidate) => candidate.id === reading?.item.pane);
     if (reading === null || place === undefined) {
@@ -104,7 +104,7 @@ export class PlotReader {
     const y = toPixel(place.y, reading.level);
     setText(tip, wordsOf(reading, plot));
     tip.hidden = false;
-    placeTip(tip, { x, y: Math.min(place.box.bottom, Math.max(place.box.top, y)) }, frame);
+    placeTip(tip, beside ?? { x, y: Math.min(place.box.bottom, Math.max(place.box.top, y)) }, frame);
     this.target.point({ hovered: new Set([reading.item.id, ...reading.item.joins]), cross: { x, y, box: place.box } });
   }
 }

@@ -249,7 +249,7 @@ export class PlotView {
     const { parts, plot, state } = this;
     parts.opener.hidden = plot.shown === 'always';
     parts.opener.setAttribute('aria-expanded', String(!this.closed()));
-    setText(parts.openerTitle, plot.words === '' ? plot.title : `${plot.title}: ${plot.words}`);
+    setText(parts.openerTitle, plot.words);
     parts.content.hidden = this.closed();
     parts.stage.setAttribute('aria-label', plot.title);
     parts.stage.style.height = `${plotHeight(plot)}px`;
