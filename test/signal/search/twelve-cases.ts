@@ -140,7 +140,7 @@ function flatTop(): HardCase {
 }
 
 function rippleAgainstDroop(): HardCase {
-  const filter = chebyshev(9, 20e3, 0.2, 'ripple');
+  const filter = chebyshev(8, 20e3, 0.2, 'ripple');
   return overBand(
     'ripples of a Chebyshev filter against the droop of a hold',
     filter,
