@@ -26,13 +26,13 @@ export function captureNoise(channel: Channel, path: ChannelPath, withUnwanted: 
   const shareDb = bandShareDb(channel, channel.rate.hz);
   const jitterUnwanted = disturbed.levelDb === null ? null : disturbed.levelDb + shareDb;
   const worst = worstTone(channel, path, toneDb);
-  const worstParts = partsAt(channel, rateRange(channel.rate).low, worst.levelDb);
+  const slowest = rateRange(channel.rate).low;
   const extras = withUnwanted ? unwantedShares(channel, path) : none;
   return {
     nominal,
     jitterUnwanted,
-    worstShares: [...shares(worstParts, worst.levelDb), ...extras.worst],
-    nominalExtras: extras.nominal.map((share) => share * powerOf(toneDb)),
+    nominalShares: [...sharesAt(channel, channel.rate.hz, toneDb), ...extras.nominal],
+    worstShares: [...sharesAt(channel, slowest, worst.levelDb), ...extras.worst],
     worstAt: worst.worstAt,
     evaluations: disturbed.evaluations + extras.evaluations,
   };
@@ -66,8 +66,11 @@ function worstTone(
   return { levelDb: levelDb + toDb(least.response.logGain(frequencyHz)), worstAt: least.worstAt(frequencyHz) };
 }
 
-function shares(parts: NoiseParts, toneDb: number): readonly number[] {
-  return [parts.quantisation, parts.jitter].filter((part) => part !== null).map((part) => powerOf(part - toneDb));
+/** Quantisation and jitter over the test tone; jitter grows with the tone, so its share is the same at any level. */
+function sharesAt(channel: Channel, rateHz: number, toneDb: number): readonly number[] {
+  const quantisation = partsAt(channel, rateHz, toneDb).quantisation;
+  const jitter = partsAt(channel, rateHz, 0).jitter;
+  return [...(quantisation === null ? [] : [powerOf(quantisation - toneDb)]), ...(jitter === null ? [] : [powerOf(jitter)])];
 }
 
 /**

@@ -18,15 +18,16 @@ import { worstPath } from './worst-path';
 export function generateNoise(channel: Channel, path: ChannelPath): DirectionNoise {
   const nominal = powersOf(path);
   const tone = powerOf(channel.testTone.levelDb);
-  const worst = partsVary(channel) ? worstShares(channel, path) : { shares: sharesOf(path, nominal), worstAt: null };
+  const nominalShares = sharesOf(path, nominal);
+  const worst = partsVary(channel) ? worstShares(channel, path) : { shares: nominalShares, worstAt: null };
   return {
     nominal: {
       quantisation: nominal.quantisation === null ? null : powerDb(nominal.quantisation),
       jitter: nominal.jitter === null ? null : powerDb(nominal.jitter * tone),
     },
     jitterUnwanted: null,
+    nominalShares,
     worstShares: worst.shares,
-    nominalExtras: [],
     worstAt: worst.worstAt,
     evaluations: 0,
   };

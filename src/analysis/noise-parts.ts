@@ -12,10 +12,9 @@ export interface DirectionNoise {
   /** dBFS, nominal. */
   readonly nominal: NoiseParts;
   readonly jitterUnwanted: number | null;
-  /** The powers that count under the snr limit over the test tone's own, at the worst of the tolerances. */
+  /** The powers that count under the snr limit, each over the test tone's own; without deviations, and at the worst of them. */
+  readonly nominalShares: readonly number[];
   readonly worstShares: readonly number[];
-  /** The powers, against full scale, of what counts nominally beyond `nominal`. */
-  readonly nominalExtras: readonly number[];
   readonly worstAt: WorstAt | null;
   readonly evaluations: number;
 }

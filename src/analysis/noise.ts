@@ -1,7 +1,7 @@
 /** The noise in the wanted band as it comes out, part by part, and the signal-to-noise ratio of the test tone over it. */
 import type { Channel, Limit } from '../spec/channel';
 import type { ChannelPath } from './channel-path';
-import { powerDb, powerOf, sumOfParts } from './decibels';
+import { powerDb, sumOfParts } from './decibels';
 import type { NoiseFigures, WorstAt } from './figures';
 import { captureNoise } from './noise-capture';
 import { generateNoise } from './noise-generate';
@@ -39,25 +39,23 @@ export function noiseOf(channel: Channel, path: ChannelPath, limit: Limit | null
     },
     toneDb,
     snrDb: total === null ? null : toneDb - total,
-    judged: judged(noise, toneDb, total),
+    judged: judged(noise),
     evaluations: noise.evaluations,
   };
 }
 
-function judged(noise: DirectionNoise, toneDb: number, total: number | null): Noise['judged'] {
-  if (noise.worstShares.length === 0) return null;
-  const counted = (total === null ? 0 : powerOf(total)) + sum(noise.nominalExtras);
-  const nominalDb = toneDb - powerDb(counted);
+function judged({ nominalShares, worstShares, worstAt }: DirectionNoise): Noise['judged'] {
+  if (worstShares.length === 0 && nominalShares.length === 0) return null;
+  const nominalDb = snrOf(nominalShares);
   // Parts are each taken at their own worst, which is a bound that nominal cannot pass but by rounding.
-  const valueDb = Math.min(-powerDb(sum(noise.worstShares)), nominalDb);
-  return { valueDb, nominalDb, worstAt: noise.worstAt };
+  return { valueDb: Math.min(snrOf(worstShares), nominalDb), nominalDb, worstAt };
+}
+
+function snrOf(shares: readonly number[]): number {
+  return -powerDb(shares.reduce((total, share) => total + share, 0));
 }
 
 /** 0 dBFS is the sine whose peaks reach full scale. */
 function rmsVolts(levelDb: number, fullScaleVpp: number): number {
   return (10 ** (levelDb / 20) * fullScaleVpp) / (2 * Math.SQRT2);
-}
-
-function sum(powers: readonly number[]): number {
-  return powers.reduce((total, power) => total + power, 0);
 }
