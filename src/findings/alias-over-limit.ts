@@ -58,7 +58,7 @@ export function sourcePath(channel: Channel, index: number): Path {
 }
 
 /** "`drive hash` at 41.2 kHz lands on 10 kHz at −91.2 dBFS". */
-export function landingWords(figures: Figures, alias: AliasFigure, value: string): string {
+function landingWords(figures: Figures, alias: AliasFigure, value: string): string {
   const from = alias.frequency === null ? '' : ` at ${frequencyWords(figures, alias.frequency)}`;
   const onto =
     Number.isFinite(alias.frequency) && alias.lands !== null ? frequencyWords(figures, alias.lands) : 'the protected range';

@@ -49,7 +49,7 @@ export const imageOverLimit: FindingKind = {
 };
 
 /** "The lower copy at k = 1". */
-export function copyWords(image: ImageFigure): string {
+function copyWords(image: ImageFigure): string {
   return image.side === 'baseband' ? 'The copy in the baseband' : `The ${image.side} copy at k = ${image.copy}`;
 }
 

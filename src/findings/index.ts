@@ -1,11 +1,11 @@
 /** What the other layers use of findings: the list of codes, the judgement, help. */
-export { acceptability, kindOf, kinds as codes, remediesOf } from './kinds';
-export type { Code, Finding, FindingFigures, JudgedCode, RemedyKind, Severity } from './finding';
-export type { Example, FindingKind, Group, Help } from './kind';
+export { acceptability, kinds as codes, remediesOf } from './kinds';
+export type { Code, Finding, RemedyKind, Severity } from './finding';
+export type { Example } from './kind';
 export { counts, judge, judging, type ChannelJudgement, type Judgement } from './judge';
-export { explain, indexPage, pageName, pageOf } from './page';
+export { explain, pageName } from './page';
 export { thinBelow } from './limits';
-export { isAvailable, same as sameRate } from './rate-choices';
+export { same as sameRate } from './rate-choices';
 export { spanOfFinding } from './span';
 export { decimalsFor, limitWords } from './wording';
 export { createJudgeStore, type JudgeStore, type Store } from './store';

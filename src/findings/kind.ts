@@ -32,10 +32,10 @@ export interface Subject {
 }
 
 /** A finding before acceptances are applied; checks build these. */
-export type Check = (subject: Subject) => readonly Finding[];
+type Check = (subject: Subject) => readonly Finding[];
 
 /** A check of the file as a whole, from its text alone. */
-export type FileCheck = (reading: Reading) => readonly Finding[];
+type FileCheck = (reading: Reading) => readonly Finding[];
 
 /** One finding code. Codes of the text have no check: the reading itself brings them. */
 export interface FindingKind {

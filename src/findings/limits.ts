@@ -4,7 +4,7 @@ import type { Channel, LimitKey } from '../spec/channel';
 import type { Place } from '../spec/place';
 
 /** The figure of a limit that was asked for and judged, or null. */
-export function judgedLimit(figures: Figures, key: LimitKey): LimitFigure | null {
+function judgedLimit(figures: Figures, key: LimitKey): LimitFigure | null {
   return figures.limits.find((figure) => figure.limit === key && figure.judged) ?? null;
 }
 

@@ -47,7 +47,7 @@ export function* cornerSearch(
 }
 
 /** The change to one corner, written as the spec writes the present one. */
-export function cornerChange({ reading, channel }: Session, stage: FamilyStage, hz: number): Change | null {
+function cornerChange({ reading, channel }: Session, stage: FamilyStage, hz: number): Change | null {
   const place: Place = { channel: channel.name, path: ['filter', stage.index, 'corner'] };
   const { start, end } = spanOf(reading, place);
   const edit = editValue(reading, place, rewriteFrequency(reading.text.slice(start, end), stage.form.cornerHz, hz));

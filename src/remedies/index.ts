@@ -1,3 +1,3 @@
 /** What the other layers use of remedies: the search for proved fixes. */
 export { cure, curing } from './curing';
-export type { Blocked, Cure, Fix } from './fix';
+export type { Cure, Fix } from './fix';

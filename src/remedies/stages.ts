@@ -2,7 +2,7 @@
 import type { Channel, Stage, StageForm } from '../spec';
 
 /** The forms that have an order and a corner to choose. */
-export type FamilyForm = Extract<StageForm, { order: number }>;
+type FamilyForm = Extract<StageForm, { order: number }>;
 
 /** A stage that a fix may change. */
 export interface FamilyStage {
