@@ -15,10 +15,13 @@ export interface Acceptances {
 export function findAcceptances(text: string, inScalar: (offset: number) => boolean): Acceptances {
   const found = { acceptances: [] as Acceptance[], problems: [] as LocalProblem[] };
   let line: Span = { start: 0, end: 0 };
-  for (let at = text.indexOf(mark); at >= 0; at = text.indexOf(mark, at + 1)) {
+  let from: number;
+  for (let at = text.indexOf(mark); at >= 0; at = text.indexOf(mark, from)) {
+    from = at + mark.length;
     const index = commentStart(text, at);
     if (index === null || inScalar(index)) continue;
     const span = { start: index, end: lineOf(text, index).end };
+    from = Math.max(from, span.end);
     const read = acceptanceOf(text.slice(at + mark.length, span.end).trim());
     if ('message' in read) found.problems.push(errorAt(span, 'syntax', read.message));
     // Comments that are stacked speak for the same line; finding it once keeps this linear.

@@ -56,7 +56,11 @@ function parsed(text: string): ParsedSlice {
     keepSourceTokens: /(?:^|[\s,[{])\?(?:\s|$)/m.test(text),
     logLevel: 'silent',
   });
-  const first = document.errors.reduce<(typeof document.errors)[number] | null>(
+  // In brackets that are never closed, the parser also complains of comments that begin their line.
+  const errors = document.errors.filter(
+    (error) => !(error.message.startsWith('Comments must') && /^\s?$/.test(text.charAt(error.pos[0] - 1))),
+  );
+  const first = errors.reduce<(typeof errors)[number] | null>(
     (best, error) => (best === null || error.pos[0] < best.pos[0] ? error : best),
     null,
   );
@@ -142,11 +146,16 @@ class Converter {
     }
     const node = this.scalar(key);
     if (node?.form !== 'scalar') {
-      const [start] = spanOf(key);
+      const start = this.colonFrom(spanOf(key)[0]);
       if (explicit === undefined) this.push('empty-key', start, start + 1, '');
       return null;
     }
     return node;
+  }
+
+  /** The parser puts an empty key where the text before it ends. */
+  private colonFrom(start: number): number {
+    return start + (/^(?:\s|#[^\n]*)*(?=:)/.exec(this.text.slice(start))?.[0].length ?? 0);
   }
 
   /** A scalar; null where nothing is written. */

@@ -16,6 +16,11 @@ describe('markers', () => {
     );
   });
 
+  it('are one column wide where nothing follows the <', () => {
+    const [marker] = readMarkers('\tbits: 3\n#< syntax\n');
+    assert.deepEqual([marker?.start, marker?.end], [0, 1]);
+  });
+
   it('may be stacked under one line', () => {
     const text = 'a: b\n#  ^ syntax\n#<^^ missing-key\n';
     assert.deepEqual(markerLines(text), ['   1:0-4 missing-key', '   1:3-4 syntax']);

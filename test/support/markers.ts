@@ -12,8 +12,9 @@ export interface Marker {
   readonly words: string;
 }
 
-// `#   ^^^^ code words…`; `#<^^^ code` starts at the column of the `#` itself, for text in that column.
-const markerLine = /^(?<indent>\s*)#(?<from>[<]?)(?<gap>\s*)(?<carets>\^+)\s+(?<code>[a-z][a-z-]*)(?:\s+(?<words>.*?))?\s*$/u;
+// `#   ^^^^ code words…`; `#<^^^ code` starts at the column of the `#` itself, for text in that column; `#< code` is that column alone.
+const markerLine =
+  /^(?<indent>\s*)#(?<from>[<]?)(?<gap>\s*)(?<carets>\^+|(?<=#<))\s+(?<code>[a-z][a-z-]*)(?:\s+(?<words>.*?))?\s*$/u;
 
 /** All markers of a text, in the order they are written. Marker lines may be stacked; they all speak of the line above the stack. */
 export function readMarkers(text: string): Marker[] {
@@ -36,7 +37,7 @@ function markerOf(parts: Record<string, string | undefined>, marked: { start: nu
   return {
     code: parts['code'] ?? '',
     start: marked.start + from,
-    end: marked.start + carets + (parts['carets'] ?? '').length,
+    end: parts['carets'] === '' ? marked.start + hash + 1 : marked.start + carets + (parts['carets'] ?? '').length,
     line: marked.line,
     words: parts['words'] ?? '',
   };

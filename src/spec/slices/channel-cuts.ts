@@ -15,14 +15,12 @@ interface Below {
 export function cutChannels(cutting: Cutting, from: number, to: number, words: Vocabulary): void {
   const first = cutting.after(from - 1, to);
   if (first === null || (cutting.keyOf(first) === null && !isName(cutting, first, to))) return;
-  const below = { from, to, indent: nameIndent(cutting, first, to), words };
+  const below = { from, to, indent: nameIndent(cutting, first, to, words), words };
   // What the lines of the channel above are indented by; 0 where that is not known.
   let within = 0;
   for (let line = first; line < to; line += 1) {
     if (cutting.blankLines.has(line)) continue;
-    if (!cutAt(cutting, line, below, line === first, within)) continue;
-    const next = cutting.after(line, to);
-    within = next !== null && cutting.keyOf(line)?.rest === '' && cutting.keyOf(next) !== null ? cutting.indentOf(next) : 0;
+    if (cutAt(cutting, line, below, line === first, within)) within = indentWithin(cutting, line, to);
   }
 }
 
@@ -80,20 +78,48 @@ function isMisplacedName(cutting: Cutting, line: number, below: Below, within: n
   return key !== null && key.rest === '' && !below.words.all.has(key.key);
 }
 
+/** What the lines below a name are indented by; 0 where that is not known. */
+function indentWithin(cutting: Cutting, name: number, to: number): number {
+  const next = cutting.after(name, to);
+  return next !== null && cutting.keyOf(name)?.rest === '' && cutting.keyOf(next) !== null ? cutting.indentOf(next) : 0;
+}
+
 /**
- * What the names are indented by: as the first child, as YAML has it. Where a line is indented less than the first
- * child, the text is not legal, and the commonest indentation of a key, up to the first child's, is the likeliest.
+ * What the names are indented by: as the first child, as YAML has it. Where a line shows that the text is not legal,
+ * the commonest indentation of what looks like a channel is the likeliest.
  */
-function nameIndent(cutting: Cutting, first: number, to: number): number {
+function nameIndent(cutting: Cutting, first: number, to: number, words: Vocabulary): number {
   const indent = cutting.indentOf(first);
+  if (indent > 0 && isLegalIndent(cutting, first, to, indent)) return indent;
   const votes = new Map<number, number>();
-  let legal = true;
   for (let line = first; line < to; line += 1) {
+    if (cutting.blankLines.has(line) || !looksLikeChannel(cutting, line, to, words)) continue;
     const own = cutting.indentOf(line);
-    if (own > indent || own === 0 || cutting.blankLines.has(line)) continue;
-    if (own < indent) legal = false;
-    if (cutting.keyOf(line) !== null) votes.set(own, (votes.get(own) ?? 0) + 1);
+    if (own > 0) votes.set(own, (votes.get(own) ?? 0) + 1);
   }
-  if (legal) return indent;
-  return [...votes].reduce((best, vote) => (vote[1] > best[1] ? vote : best), [indent, 0])[0];
+  const [best] = [...votes].reduce((most, vote) => (vote[1] > most[1] ? vote : most), [indent, 0]);
+  return best > 0 ? best : usualIndent;
+}
+
+const usualIndent = 2;
+
+/** Whether no line is indented less than the first name, nor between a name and what stands below it. */
+function isLegalIndent(cutting: Cutting, first: number, to: number, indent: number): boolean {
+  let within = 0;
+  for (let line = first; line < to; line += 1) {
+    if (cutting.blankLines.has(line)) continue;
+    const own = cutting.indentOf(line);
+    if (own < indent && own > 0) return false;
+    if (own === indent && cutting.keyOf(line) !== null) within = indentWithin(cutting, line, to);
+    else if (own > indent && own < within && cutting.keyOf(line) !== null) return false;
+  }
+  return true;
+}
+
+/** A name with nothing behind it, and below it a key of a channel. */
+function looksLikeChannel(cutting: Cutting, line: number, to: number, words: Vocabulary): boolean {
+  const key = cutting.keyOf(line);
+  const next = cutting.after(line, to);
+  if (key === null || key.rest !== '' || next === null || cutting.indentOf(next) <= cutting.indentOf(line)) return false;
+  return !words.channel.has(key.key) && words.channel.has(cutting.keyOf(next)?.key ?? '');
 }

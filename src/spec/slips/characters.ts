@@ -2,16 +2,33 @@
 import type { Mend } from '../mend';
 import type { ParsedSlice } from '../yaml-tree';
 import { scalars } from '../tree-walk';
-import { cured, lineStart } from './diagnosis';
+import { cured, indentAt, lineStart } from './diagnosis';
 import type { Diagnosis } from './diagnosis';
 
 /** A carriage return without a line feed behind it, which YAML's parser takes for text. */
 export function loneReturns(text: string): Diagnosis | null {
-  const mends = [...text.matchAll(/\r(?!\n)/g)].map(({ index }) => ({ start: index, end: index + 1, newText: '\n' }));
+  const otherEnds = text.includes('\n');
+  const mends = [...text.matchAll(/\r(?!\n)/g)].map(({ index }) => {
+    return { start: index, end: index + 1, newText: !otherEnds || endsLine(text, index) ? '\n' : ' ' };
+  });
   const first = mends[0];
   if (first === undefined) return null;
-  const message = 'A lone carriage return does not end a line here: use a line feed, or both.';
-  return cured(first.start, first.end, message, { title: 'Replace lone carriage returns by line feeds', mends });
+  const message = 'A lone carriage return does not end a line here: use a line feed, or a space where none is meant.';
+  const title = `Replace ${mends.length === 1 ? 'it' : 'them'} by ${first.newText === ' ' ? 'a space' : 'line feeds'}`;
+  return cured(first.start, first.end, message, { title, mends });
+}
+
+/** Whether a line end was meant: what follows is indented as its line is, or one level deeper. */
+function endsLine(text: string, at: number): boolean {
+  if (text.charAt(at + 1) === '\r') return true;
+  const deeper = indentBehind(text, at + 1) - indentAt(text, at);
+  return deeper === 0 || deeper === 2;
+}
+
+function indentBehind(text: string, from: number): number {
+  let at = from;
+  while (text.charAt(at) === ' ') at += 1;
+  return at - from;
 }
 
 const indentation = /^[ \t\u00a0]+(?=[^\s#])/gm;

@@ -43,15 +43,20 @@ export function spaces(start: number, end: number): Mend {
   return { start, end, newText: ' '.repeat(end - start) };
 }
 
+// Lines are looked along no further than this, so that many slips in one huge line cost no more than many lines.
+const longestLine = 10_000;
+
 /** Where the line of an offset starts. */
 export function lineStart(text: string, offset: number): number {
-  return text.lastIndexOf('\n', offset - 1) + 1;
+  const from = Math.max(0, offset - longestLine);
+  return from + text.slice(from, offset).lastIndexOf('\n') + 1;
 }
 
 /** Where the content of the line of an offset ends, without trailing space; `from` where it holds only a comment from there. */
 export function contentEnd(text: string, from: number): number {
-  const lineFeed = text.indexOf('\n', from);
-  const line = text.slice(from, lineFeed < 0 ? text.length : lineFeed);
+  const ahead = text.slice(from, from + longestLine);
+  const lineFeed = ahead.indexOf('\n');
+  const line = lineFeed < 0 ? ahead : ahead.slice(0, lineFeed);
   const comment = /(?:^|[ \t])#/.exec(line);
   const content = comment === null ? line : line.slice(0, comment.index);
   return from + content.trimEnd().length;

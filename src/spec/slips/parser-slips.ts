@@ -39,7 +39,7 @@ function inValue(text: string, tree: TreeNode | null, error: ParserError): Diagn
       return spacedMinus(text, at, around) ?? unexpected(text, error);
     case 'BLOCK_IN_FLOW':
     case 'BLOCK_AS_IMPLICIT_KEY':
-      return spacedMinus(text, at, around) ?? colonInText(text, at, around) ?? tooDeep(text, at);
+      return spacedMinus(text, at, around) ?? gluedDash(text, at) ?? colonInText(text, at, around) ?? tooDeep(text, at);
     case 'MULTILINE_IMPLICIT_KEY':
       return around === null ? null : spacedMinus(text, at, around);
     case 'MISSING_CHAR':
@@ -47,6 +47,14 @@ function inValue(text: string, tree: TreeNode | null, error: ParserError): Diagn
     default:
       return null;
   }
+}
+
+/** `-{ tone: 3 kHz }`, of which the parser makes a key `-{ tone`. */
+function gluedDash(text: string, at: number): Diagnosis | null {
+  const line = lineStart(text, at);
+  const content = line + (/^[ \t]*/.exec(text.slice(line, at))?.[0].length ?? 0);
+  if (!/^-[[{"']/.test(text.slice(content, content + 2))) return null;
+  return noSpaceBehindDash(text.slice(content, contentEnd(text, content)), content);
 }
 
 function badEscape(text: string, error: ParserError): Diagnosis {
