@@ -1,13 +1,16 @@
 /** Completion: what the declaration admits at a position, less what stands there already. */
 import {
   CompletionItemKind,
+  InsertTextFormat,
   MarkupKind,
   type CompletionItem,
   type CompletionList,
   type Position,
+  type Range,
 } from 'vscode-languageserver-types';
 import { completionsAt, type Completion } from '../spec';
 import type { ClientAbilities } from './client-abilities';
+import { plainInSnippet, snippetAfter } from './key-snippet';
 import type { SpecDocument } from './spec-document';
 import { offsetOf, rangeOf } from './text-range';
 
@@ -26,8 +29,8 @@ export function completion(document: SpecDocument, position: Position, abilities
       label: offer.label,
       kind: itemKinds[offer.kind],
       sortText: sortText(offer, index),
-      filterText: offer.newText.trimStart(),
-      textEdit: { range: rangeOf(reading, offer.span), newText: offer.newText },
+      filterText: offer.newText.trim(),
+      ...insertion(offer, rangeOf(reading, offer.span), abilities.snippets),
     };
     if (offer.about !== '') {
       item.documentation = { kind: abilities.markdown ? MarkupKind.Markdown : MarkupKind.PlainText, value: offer.about };
@@ -35,6 +38,13 @@ export function completion(document: SpecDocument, position: Position, abilities
     return item;
   });
   return { isIncomplete: false, items };
+}
+
+/** What is written: for a new key, where the editor can, with what must follow it left to fill in. */
+function insertion({ key, newText }: Completion, range: Range, snippets: boolean): Partial<CompletionItem> {
+  const after = snippets && key !== null && newText.endsWith(': ') ? snippetAfter(key) : null;
+  if (after === null) return { textEdit: { range, newText } };
+  return { textEdit: { range, newText: plainInSnippet(newText) + after }, insertTextFormat: InsertTextFormat.Snippet };
 }
 
 /** What a map cannot do without comes first; otherwise the order of the declaration. */

@@ -43,13 +43,34 @@ function keyName({ place: { path } }: PlaceAt): string | null {
 }
 
 /** What has been computed of the place: in a channel, of a name, or in a definition as its first whole user sees it. */
-function answerAt(document: SpecDocument, { place, part }: PlaceAt): Answer | null {
-  if (place.channel !== null) return answerIn(document, place.channel, place.path);
+function answerAt(document: SpecDocument, at: PlaceAt): Answer | null {
+  const { place, part } = at;
+  if (place.channel !== null) return nameIn(document, at) ?? answerIn(document, place.channel, place.path);
   const [space, name, ...rest] = place.path;
   const defined = document.reading.names.find((entry) => entry.space === space && entry.name === name);
   if (defined === undefined) return null;
   if (rest.length === 0 && part === 'key') return nameHover(document, defined);
   return answerForUser(document, defined, rest) ?? (rest.length === 0 ? nameHover(document, defined) : null);
+}
+
+/** Where a channel names a clock or another channel: what that is. */
+function nameIn(document: SpecDocument, { place: { path }, part, span }: PlaceAt): Answer | null {
+  if (part === 'key') return null;
+  const { reading } = document;
+  const name = reading.text.slice(span.start, span.end).replace(/^(["'])(.*)\1$/, '$2');
+  switch (path.at(-1)) {
+    case 'like':
+      return answerIn(document, name, []);
+    case 'clock':
+      return definition(document, 'clocks', name);
+    default:
+      return null;
+  }
+}
+
+function definition(document: SpecDocument, space: DefinedName['space'], name: string): Answer | null {
+  const defined = document.reading.names.find((entry) => entry.space === space && entry.name === name);
+  return defined === undefined ? null : nameHover(document, defined);
 }
 
 function answerForUser(document: SpecDocument, defined: DefinedName, rest: Path): Answer | null {

@@ -50,7 +50,7 @@ describe('the hover of', () => {
   it('a wanted band says where it appears and what its edges lose', () => {
     expectHover(at('5 Hz .. 10 kHz'), {
       headline: '5 Hz .. 10 kHz appears at 5 Hz .. 10 kHz, upright',
-      rows: { zone: '1 of half the rate, 32 kHz', 'at 10 kHz': /^−3\.\d dBFS, droop 0\.\d\d dB$/ },
+      rows: { zone: '1, each 32 kHz wide', 'at 10 kHz': /^−3\.\d dBFS, droop 0\.\d\d dB$/ },
     });
   });
 
@@ -115,7 +115,7 @@ describe('the hover of', () => {
   });
 
   it('an image limit lists the copies, strongest first', () => {
-    expectHover(sounder.replace('-60 dBc', '¦-60 dBc'), { headline: /^`image` −/, rows: { 'copy 1, lower': /dBFS$/ } });
+    expectHover(sounder.replace('-60 dBc', '¦-60 dBc'), { headline: /^`image` −/, rows: { 'copy 1, lower': /dBc$/ } });
   });
 
   it('a noise limit lists the parts of the noise', () => {
@@ -126,7 +126,7 @@ describe('the hover of', () => {
     // 4 V pp is 1.414 V rms at 0 dBFS; −3 dBFS is 1.001 V rms, 2.832 V pp, 0.70795 · 65536 = 46396 steps.
     expectHover(at('-3 dBFS'), {
       headline: '−3 dBFS',
-      rows: { 'V rms': /^1\.001 V/, 'V pp': /^2\.832 V/, 'LSB, peak to peak': '46396' },
+      rows: { rms: '1.001 V', 'peak to peak': '2.832 V', 'steps, peak to peak': '46396' },
     });
   });
 
@@ -146,6 +146,31 @@ describe('the hover of', () => {
   it('a defined name gives its definition and its users', () => {
     expectHover(at('board: {'), { headline: 'clock `board`, used by 1 channel', rows: { 'used by': '`bearing`' } });
     expectHover(at('guard:'), { headline: 'filter `guard`, used by 1 channel', rows: { 'defined as': /family: butterworth/ } });
+  });
+
+  it('a clock that a rate names gives its definition', () => {
+    expectHover(passingSpec.replace('rate: { clock: board', 'rate: { clock: ¦board'), {
+      headline: 'clock `board`, used by 1 channel',
+    });
+  });
+
+  it('a channel that another is like gives that channel', () => {
+    expectHover(`${passingSpec}\n  second:\n    like: ¦bearing\n`, { headline: '`bearing` passes: capture at 64 kHz' });
+  });
+
+  it('a rate without any that passes says which limit fails at each', () => {
+    expectHover(at('{ clock: board, divide: 384 }').replace('flatness: 0.8 dB', 'flatness: 0.1 dB'), {
+      headline: /^64 kHz/,
+      rows: { 'next allowed rates that pass': 'none: `flatness` fails at each' },
+    });
+  });
+
+  it('a limit that asks for at least so much says that it is short', () => {
+    expectHover(at('84 dB').replace('84 dB', '104 dB'), { headline: /^`snr` 99\.\d dB, 4\.\d dB short of the limit$/ });
+  });
+
+  it('a full scale without bits gives the rms value of 0 dBFS', () => {
+    expectHover(at('4 V').replace('    bits: 16\n', ''), { headline: '0 dBFS is 1.414 V rms' });
   });
 
   it('a channel says whether it passes, limit by limit', () => {

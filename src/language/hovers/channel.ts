@@ -3,7 +3,7 @@ import type { LimitFigure } from '../../analysis';
 import { formatDb, formatFrequency } from '../../units/format';
 import type { Answer, Row } from './answer';
 import type { Subject } from './subject';
-import { marginWords } from './words';
+import { decimalsOf, marginWords } from './words';
 
 /** The channel as a whole. */
 export function channelHover({ document, channel, figures }: Subject): Answer {
@@ -18,6 +18,6 @@ export function channelHover({ document, channel, figures }: Subject): Answer {
 
 function limitRow(limit: LimitFigure): Row {
   if (limit.value === null || limit.margin === null) return [limit.limit, 'not judged'];
-  const decimals = limit.limit === 'flatness' ? 2 : 1;
-  return [limit.limit, `${formatDb(limit.value, limit.unit, decimals)}, ${marginWords(limit.margin, decimals)}`];
+  const value = formatDb(limit.value, limit.unit, decimalsOf(limit.limit));
+  return [limit.limit, `${value}, ${marginWords({ ...limit, margin: limit.margin })}`];
 }

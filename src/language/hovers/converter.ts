@@ -15,6 +15,7 @@ export function bitsHover({ channel, figures }: Subject): Answer | null {
     headline: step === null ? `${bits} bits: ${formatDb(snrDb)} for a full-scale sine` : `One LSB is ${formatVoltage(step)}`,
     rows: knownRows(
       ['full scale', fullScaleVpp === null ? null : formatVoltage(fullScaleVpp, 'V pp')],
+      ['0 dBFS', fullScaleVpp === null ? null : formatVoltage(rmsOf(fullScaleVpp), 'V rms')],
       ['full-scale sine to noise', formatDb(snrDb)],
       ['density up to half the rate', formatDb(densityDb, 'dBFS/√Hz')],
       ['in the wanted band', figures.noise.quantisation === null ? null : formatDb(figures.noise.quantisation, 'dBFS')],
@@ -25,12 +26,16 @@ export function bitsHover({ channel, figures }: Subject): Answer | null {
 }
 
 function fullScaleAnswer(fullScaleVpp: number): Answer {
-  const rms = fullScaleVpp / (2 * Math.SQRT2);
   return {
-    headline: `0 dBFS is ${formatVoltage(rms, 'V rms')}`,
+    headline: `0 dBFS is ${formatVoltage(rmsOf(fullScaleVpp), 'V rms')}`,
     rows: [['full scale', formatVoltage(fullScaleVpp, 'V pp')]],
     formula: null,
   };
+}
+
+/** The rms value of a sine that just fills the full scale. */
+function rmsOf(fullScaleVpp: number): number {
+  return fullScaleVpp / (2 * Math.SQRT2);
 }
 
 /** The jitter of sampler and clock together, and what it does to the test tone. */
@@ -55,5 +60,6 @@ export function jitterHover({ channel, figures }: Subject): Answer | null {
 
 function shareOf(partDb: number | null, totalDb: number | null): string | null {
   if (partDb === null || totalDb === null || !Number.isFinite(totalDb)) return null;
-  return `${Math.round(100 * 10 ** ((partDb - totalDb) / 10))} %`;
+  const percent = 100 * 10 ** ((partDb - totalDb) / 10);
+  return percent < 1 ? 'under 1 %' : `${Math.round(percent)} %`;
 }

@@ -25,10 +25,10 @@ export function levelRows({ fullScaleVpp, impedanceOhm, bits }: Channel, levelDb
   const ratio = 10 ** (levelDb / 20);
   const rms = fullScaleVpp === null ? null : (fullScaleVpp * ratio) / peakToPeakOverRms;
   return knownRows(
-    ['V rms', rms === null ? null : formatVoltage(rms, 'V rms')],
-    ['V pp', rms === null ? null : formatVoltage(rms * peakToPeakOverRms, 'V pp')],
+    ['rms', rms === null ? null : formatVoltage(rms)],
+    ['peak to peak', rms === null ? null : formatVoltage(rms * peakToPeakOverRms)],
     ['dBm', rms === null || impedanceOhm === null ? null : formatDb(10 * Math.log10(rms ** 2 / impedanceOhm / milliwatt), 'dBm')],
-    ['LSB, peak to peak', bits === null ? null : stepsWords(2 ** bits * ratio)],
+    ['steps, peak to peak', bits === null ? null : stepsWords(2 ** bits * ratio)],
   );
 }
 

@@ -4,7 +4,7 @@ import { formatDb, formatSignedPercent } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { levelRows } from './level';
 import type { Subject } from './subject';
-import { frequencyOr, marginWords } from './words';
+import { decimalsOf, frequencyOr, marginWords } from './words';
 
 /** How many contributions are listed. */
 const listed = 5;
@@ -18,7 +18,7 @@ export function limitHover({ channel, figures, path }: Subject): Answer | null {
     rows: [
       ...standingRows(limit),
       ...contributions(limit, figures),
-      ...(limit.unit === 'dBFS' ? levelRows(channel, limit.at).map(([unit, value]): Row => [`the limit in ${unit}`, value]) : []),
+      ...(limit.unit === 'dBFS' ? levelRows(channel, limit.at).map(([unit, value]): Row => [`the limit, ${unit}`, value]) : []),
     ],
     formula: formulas[limit.limit],
   };
@@ -35,7 +35,7 @@ const formulas: Readonly<Record<LimitFigure['limit'], string>> = {
 function headlineOf(limit: LimitFigure): string {
   if (limit.value === null || limit.margin === null)
     return `\`${limit.limit}\` is not judged: nothing in this channel can break it`;
-  return `\`${limit.limit}\` ${level(limit, limit.value)}, ${marginWords(limit.margin, decimalsOf(limit))}`;
+  return `\`${limit.limit}\` ${level(limit, limit.value)}, ${marginWords({ ...limit, margin: limit.margin })}`;
 }
 
 function standingRows(limit: LimitFigure): Row[] {
@@ -48,12 +48,8 @@ function standingRows(limit: LimitFigure): Row[] {
   );
 }
 
-function decimalsOf(limit: LimitFigure): number {
-  return limit.limit === 'flatness' ? 2 : 1;
-}
-
 function level(limit: LimitFigure, value: number): string {
-  return formatDb(value, limit.unit, decimalsOf(limit));
+  return formatDb(value, limit.unit, decimalsOf(limit.limit));
 }
 
 function contributions(limit: LimitFigure, figures: Figures): Row[] {
@@ -61,7 +57,13 @@ function contributions(limit: LimitFigure, figures: Figures): Row[] {
     case 'alias':
       return strongest(figures.aliases.map(({ source, level: value }) => [`\`${source}\``, value]));
     case 'image':
-      return strongest(figures.images.map(({ copy, side, level: value }) => [`copy ${copy}, ${side}`, value]));
+      return strongest(
+        figures.images.map(({ copy, side, level: value, relative }) => [
+          `copy ${copy}, ${side}`,
+          limit.unit === 'dBc' ? relative : value,
+        ]),
+        limit.unit,
+      );
     case 'snr':
       return strongest(noiseParts(figures.noise));
     case 'flatness':
@@ -83,10 +85,10 @@ function noiseParts(noise: NoiseFigures): (readonly [label: string, valueDb: num
   ];
 }
 
-function strongest(parts: readonly (readonly [label: string, valueDb: number | null])[]): Row[] {
+function strongest(parts: readonly (readonly [label: string, valueDb: number | null])[], unit = 'dBFS'): Row[] {
   return parts
     .flatMap(([label, valueDb]) => (valueDb === null ? [] : [{ label, valueDb }]))
     .sort((a, b) => b.valueDb - a.valueDb)
     .slice(0, listed)
-    .map(({ label, valueDb }) => [label, formatDb(valueDb, 'dBFS')]);
+    .map(({ label, valueDb }) => [label, formatDb(valueDb, unit)]);
 }

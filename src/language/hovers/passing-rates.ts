@@ -1,27 +1,37 @@
 /** The nearest other rates that a channel may run at and passes with. */
 import { analyse } from '../../analysis';
-import type { Channel, Rate, RateChoices } from '../../spec';
+import type { Channel, LimitKey, Rate, RateChoices } from '../../spec';
 
 /** How many rates are named. */
 const wantedRates = 3;
 /** How many are tried, so that a hover answers at once. */
 const triedRates = 24;
 
-/** The nearest allowed rates that pass every limit, in rising order; null where the channel does not list its rates. */
-export function passingRates(channel: Channel): readonly number[] | null {
+/** What is known of the other allowed rates. */
+export interface PassingRates {
+  /** The nearest that pass every limit, in rising order. */
+  readonly ratesHz: readonly number[];
+  /** The limits that fail at every rate that was tried. */
+  readonly inTheWay: readonly LimitKey[];
+}
+
+/** The other allowed rates; null where the channel does not list its rates. */
+export function passingRates(channel: Channel): PassingRates | null {
   const allowed = channel.rateChoices === null ? null : listedRates(channel.rateChoices);
   if (allowed === null) return null;
   const present = channel.rate.hz;
   const distance = (rate: Rate): number => Math.abs(Math.log(rate.hz / present));
-  return allowed
+  const tried = allowed
     .map((choice) => rateOf(channel.rate, choice))
     .filter((rate) => distance(rate) > 1e-9)
     .sort((a, b) => distance(a) - distance(b))
     .slice(0, triedRates)
-    .filter((rate) => passesAt(channel, rate))
-    .slice(0, wantedRates)
-    .map((rate) => rate.hz)
-    .sort((a, b) => a - b);
+    .map((rate) => ({ rate, failing: failingAt(channel, rate) }));
+  const passing = tried.filter(({ failing }) => failing.length === 0).slice(0, wantedRates);
+  return {
+    ratesHz: passing.map(({ rate }) => rate.hz).sort((a, b) => a - b),
+    inTheWay: channel.limits.map(({ key }) => key).filter((key) => tried.every(({ failing }) => failing.includes(key))),
+  };
 }
 
 /** A rate that may be chosen: a plain one, or a divider of the chosen clock. */
@@ -53,7 +63,9 @@ function rateOf(present: Rate, choice: Choice): Rate {
   return typeof choice === 'number' ? { ...present, hz: choice, clock: null } : { ...present, ...choice };
 }
 
-function passesAt(channel: Channel, rate: Rate): boolean {
+/** What keeps a rate from passing: limits, or the folding of the wanted band itself. */
+function failingAt(channel: Channel, rate: Rate): readonly (LimitKey | 'wanted-folds')[] {
   const figures = analyse({ ...channel, rate });
-  return figures.limits.every((limit) => limit.passes) && !figures.faults.some(({ kind }) => kind === 'wanted-folds');
+  const limits = figures.limits.filter(({ passes }) => !passes).map(({ limit }) => limit);
+  return figures.faults.some(({ kind }) => kind === 'wanted-folds') ? [...limits, 'wanted-folds'] : limits;
 }

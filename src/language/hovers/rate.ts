@@ -2,7 +2,7 @@
 import type { Figures } from '../../analysis';
 import { formatFrequency } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
-import { passingRates } from './passing-rates';
+import { passingRates, type PassingRates } from './passing-rates';
 import type { Subject } from './subject';
 import { turnWords } from './words';
 
@@ -53,7 +53,11 @@ function windowRows({ rate, rateWindow }: Figures): Row[] {
   );
 }
 
-function passingRows(rates: readonly number[] | null): Row[] {
-  if (rates === null) return [];
-  return [['next allowed rates that pass', rates.length === 0 ? 'none' : rates.map((hz) => formatFrequency(hz)).join(', ')]];
+function passingRows(found: PassingRates | null): Row[] {
+  if (found === null) return [];
+  const { ratesHz, inTheWay } = found;
+  const why = inTheWay.length === 0 ? '' : `: \`${inTheWay.join('`, `')}\` fails at each`;
+  return [
+    ['next allowed rates that pass', ratesHz.length === 0 ? `none${why}` : ratesHz.map((hz) => formatFrequency(hz)).join(', ')],
+  ];
 }

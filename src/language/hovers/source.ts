@@ -1,6 +1,6 @@
 /** Hover of an unwanted source: where it lands, at what level, and how far it may drift. */
 import type { AliasFigure, Figures } from '../../analysis';
-import type { Source } from '../../spec';
+import type { Source, ToneSource } from '../../spec';
 import { formatDb, formatFrequency } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { freedomOf } from './free-frequencies';
@@ -18,7 +18,7 @@ export function sourceHover({ channel, figures, path }: Subject): Answer | null 
     rows: [
       ...knownRows(['stands at', standsAt(source)]),
       ...(alias === null ? [] : landingRows(alias)),
-      ...(source.kind === 'tone' ? driftRows(source.frequencyHz, figures) : []),
+      ...(source.kind === 'tone' ? driftRows(source, figures) : []),
     ],
     formula: 'A tone at f appears at |f − fs·round(f/fs)|, weighed by the path and the aperture at f',
   };
@@ -26,7 +26,7 @@ export function sourceHover({ channel, figures, path }: Subject): Answer | null 
 
 function headlineOf(source: Source, alias: AliasFigure | null): string {
   if (alias?.level === null || alias === null) return `\`${source.name}\` lands in no protected range`;
-  const margin = alias.margin === null ? '' : `, ${marginWords(alias.margin)}`;
+  const margin = alias.margin === null ? '' : `, ${marginWords({ limit: 'alias', sense: 'at-most', margin: alias.margin })}`;
   return `\`${source.name}\` lands on ${frequencyOr(alias.lands, '?')} at ${formatDb(alias.level, 'dBFS')}${margin}`;
 }
 
@@ -56,7 +56,8 @@ function landingRows(alias: AliasFigure): Row[] {
 }
 
 /** How far a tone may move before it enters a protected range, or has to move to leave it. */
-function driftRows(frequencyHz: number, figures: Figures): Row[] {
+function driftRows({ frequencyHz, tolerance }: ToneSource, figures: Figures): Row[] {
+  const centre = tolerance.low === 0 && tolerance.high === 0 ? '' : `, from ${formatFrequency(frequencyHz)}`;
   const { inside, below, above } = freedomOf(frequencyHz, figures.rate, figures.protected);
   const away = (hz: number): string => formatFrequency(Math.abs(hz - frequencyHz));
   const value = inside
@@ -64,5 +65,7 @@ function driftRows(frequencyHz: number, figures: Figures): Row[] {
     : [below === null ? null : `${away(below)} down`, above === null ? null : `${away(above)} up`]
         .filter((part) => part !== null)
         .join(', ');
-  return value === '' ? [] : [[inside ? 'nearest frequencies that land outside' : 'may drift before it lands inside', value]];
+  return value === ''
+    ? []
+    : [[`${inside ? 'nearest frequencies that land outside' : 'may drift before it lands inside'}${centre}`, value]];
 }

@@ -13,6 +13,7 @@ import {
 import { formatDb, formatFrequency, formatTime } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { indexIn, type Subject } from './subject';
+import { lossWords } from './words';
 
 /** The stage at the subject's path, or the whole filter where the path names none. */
 export function stageHover({ channel, figures, path }: Subject): Answer | null {
@@ -26,32 +27,37 @@ type PathResponse = ChannelPath['analogue'];
 
 function filterAnswer(whole: ChannelPath, figures: Figures): Answer {
   return {
-    headline: `${whole.stages.length} stages: ${lossWords(whole.analogue, figures)}`,
-    rows: [...responseRows(whole.analogue, figures), ['group delay', formatTime(pathDelay(whole, figures.reference))]],
+    headline: `${whole.stages.length} stages: ${headlineWords(whole.analogue, figures)}`,
+    rows: [...responseRows(whole.analogue, figures), ['group delay', formatTime(stagesDelay(whole, figures.reference))]],
     formula: 'Poles and gain in series, nominal values',
   };
 }
 
 function stageAnswer({ stage, filter, response }: StagePath, whole: ChannelPath, figures: Figures): Answer {
-  const alone: ChannelPath = {
-    ...whole,
-    channel: { ...whole.channel, pulse: { shape: 'instant' } },
-    stages: [{ stage, filter, response }],
-  };
   return {
-    headline: `\`${stage.label}\`: ${lossWords(response, figures)}`,
+    headline: `\`${stage.label}\`: ${headlineWords(response, figures)}`,
     rows: [
       ...responseRows(response, figures),
-      ['group delay', formatTime(pathDelay(alone, figures.reference))],
+      ['group delay', formatTime(stagesDelay({ ...whole, stages: [{ stage, filter, response }] }, figures.reference))],
       ...filter.poles.filter((pole) => pole.im >= 0).map(sectionRow),
     ],
     formula: 'Poles and gain, nominal values; half power is 3.01 dB below the passband’s maximum',
   };
 }
 
-function lossWords(response: PathResponse, figures: Figures): string {
+function headlineWords(response: PathResponse, figures: Figures): string {
   const loss = lossDb(response, figures.halfRate, figures.reference);
-  return `${formatDb(loss)} loss at half the rate, ${formatFrequency(figures.halfRate)}`;
+  return `${shortLoss(loss)} loss at half the rate, ${formatFrequency(figures.halfRate)}`;
+}
+
+/** The delay of the stages without that of the pulse. */
+function stagesDelay(path: ChannelPath, frequencyHz: number): number {
+  return pathDelay({ ...path, channel: { ...path.channel, pulse: { shape: 'instant' } } }, frequencyHz);
+}
+
+/** A loss of at least a decibel needs no more than tenths. */
+function shortLoss(loss: number): string {
+  return Math.abs(loss) < 1 ? lossWords(loss) : formatDb(loss);
 }
 
 function responseRows(response: PathResponse, figures: Figures): Row[] {
@@ -62,7 +68,7 @@ function responseRows(response: PathResponse, figures: Figures): Row[] {
     [`gain at ${formatFrequency(figures.reference)}`, formatDb(gainDb(response, figures.reference), 'dB', 2)],
     [
       figures.direction === 'capture' ? 'loss at the first fold' : 'loss at the first image',
-      first === null ? null : `${formatDb(lossDb(response, first, figures.reference))} at ${formatFrequency(first)}`,
+      first === null ? null : `${shortLoss(lossDb(response, first, figures.reference))} at ${formatFrequency(first)}`,
     ],
   );
 }

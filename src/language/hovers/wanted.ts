@@ -16,7 +16,7 @@ export function wantedHover({ channel, figures, path }: Subject): Answer | null 
   return {
     headline: `${bandWords(band.low, band.high)} ${verb} ${bandWords(band.appearsLow, band.appearsHigh)}, ${turnWords(band.inverted)}`,
     rows: knownRows(
-      ['zone', `${band.zone} of half the rate, ${formatFrequency(figures.halfRate)}`],
+      ['zone', `${band.zone}, each ${formatFrequency(figures.halfRate)} wide`],
       [`at ${formatFrequency(band.low)}`, edge(band.low)],
       [`at ${formatFrequency(band.high)}`, edge(band.high)],
       ['droop is measured from', formatFrequency(figures.reference)],

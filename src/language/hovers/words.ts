@@ -1,15 +1,32 @@
 /** Phrases that several hovers share. */
 import { formatDb, formatFrequency } from '../../units/format';
 
-/** "4.8 dB over the limit", "0.8 dB inside the limit". */
-export function marginWords(marginDb: number, decimals = 1): string {
-  return `${formatDb(Math.abs(marginDb), 'dB', decimals)} ${marginDb < 0 ? 'over' : 'inside'} the limit`;
+/** What a limit's margin depends on for its wording. */
+interface Margin {
+  readonly limit: string;
+  readonly sense: 'at-most' | 'at-least';
+  readonly margin: number;
 }
+
+/** "4.8 dB over the limit", "2 dB short of the limit", "0.8 dB inside the limit". */
+export function marginWords({ limit, sense, margin }: Margin): string {
+  const beyond = sense === 'at-most' ? 'over' : 'short of';
+  return `${formatDb(Math.abs(margin), 'dB', decimalsOf(limit))} ${margin < 0 ? beyond : 'inside'} the limit`;
+}
+
+/** Digits behind the point that a limit's figures are printed with. */
+export function decimalsOf(limit: string): number {
+  return limit === 'flatness' ? 2 : 1;
+}
+
+/** Below this a loss is none. */
+const negligibleDb = 1e-5;
 
 /** A small loss with two digits that matter, at least to a hundredth of a decibel. */
 export function lossWords(lossDb: number): string {
   const size = Math.abs(lossDb);
-  const decimals = size === 0 || !Number.isFinite(size) ? 2 : Math.min(Math.max(2, 1 - Math.floor(Math.log10(size))), 6);
+  if (size < negligibleDb) return formatDb(0);
+  const decimals = Number.isFinite(size) ? Math.max(2, 1 - Math.floor(Math.log10(size))) : 2;
   return formatDb(lossDb, 'dB', decimals);
 }
 

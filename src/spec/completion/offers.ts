@@ -8,6 +8,7 @@ export interface Offer {
   readonly kind: 'key' | 'word' | 'name';
   readonly about: string;
   readonly text: string;
+  readonly key: Key | null;
   readonly required: boolean;
 }
 
@@ -44,7 +45,7 @@ export function keyOffers(
     (key.with?.some((other) => company.has(other)) ?? true);
   return Object.entries(map.fields)
     .filter(fits)
-    .map(([name, key]) => ({ label: name, kind: 'key', about: aboutKey(key), text: name, required: key.required === true }));
+    .map(([name, key]) => ({ label: name, kind: 'key', about: aboutKey(key), text: name, key, required: key.required === true }));
 }
 
 function aboutKey({ about, fallback }: Key): string {
@@ -58,6 +59,7 @@ export function valueOffers(scalar: Scalar | undefined, names: (space: NameSpace
     kind: 'word' as const,
     about,
     text: word,
+    key: null,
     required: false,
   }));
   const space = scalar?.name;
@@ -70,5 +72,6 @@ const nameOffer = (name: string, space: NameSpace): Offer => ({
   kind: 'name',
   about: `From \`${space}\`.`,
   text: scalarText(name),
+  key: null,
   required: false,
 });
