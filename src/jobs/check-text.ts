@@ -1,6 +1,5 @@
 /** The whole check of one spec: read, judge, and prove fixes for what is wrong; the command line and the library run it. */
-import { createFigureStore } from '../analysis';
-import { judging, type Finding } from '../findings';
+import { createJudgeStore, judging, remediesOf, type Finding } from '../findings';
 import type { CheckedFile } from '../output';
 import { curing, type Cure } from '../remedies';
 import { read } from '../spec';
@@ -19,7 +18,7 @@ export function checkText(path: string, text: string, options: CheckOptions = { 
 
 /** The same check, yielding between steps so that a caller may stop it or share the thread. */
 export function* checkingText(path: string, text: string, options: CheckOptions): Generator<void, CheckedFile> {
-  const store = createFigureStore();
+  const store = createJudgeStore();
   const judgement = yield* judging(read(text), store);
   const cures = new Map<Finding, Cure>();
   if (options.fixes) {
@@ -30,7 +29,7 @@ export function* checkingText(path: string, text: string, options: CheckOptions)
   return { path, judgement, cures };
 }
 
-/** Faults of the text carry their own cures, and an accepted finding asks for none. */
+/** Faults of the text carry their own cures, an accepted finding asks for none, and advice has no kind of change to try. */
 function isCurable(finding: Finding): boolean {
-  return finding.severity === 'error' && finding.accepted === null && 'place' in finding.at;
+  return finding.accepted === null && 'place' in finding.at && remediesOf(finding.code).length > 0;
 }

@@ -1,9 +1,9 @@
 /** A finding and its fixes in the form of the machine-readable result. */
-import type { Finding } from '../findings';
+import { spanOfFinding, type Finding } from '../findings';
 import type { Range } from '../protocol/position';
 import { spanOf, type Edit, type Problem, type Span } from '../spec';
 import type { CheckedFile } from './checked-file';
-import { findingSpan } from './finding-span';
+
 import type { FindingResult, FixResult } from './result-file';
 import { resultNumber as number } from './result-number';
 
@@ -19,7 +19,7 @@ export function findingResult(file: CheckedFile, finding: Finding, rangeOf: (spa
     ref: finding.ref,
     message: finding.message,
     accepted: accepted && { reason: accepted.reason, downTo: accepted.downTo, range: rangeOf(accepted.span) },
-    range: rangeOf(findingSpan(reading, finding)),
+    range: rangeOf(spanOfFinding(reading, finding)),
     related: finding.related.map((related) => ({
       path: file.path,
       message: related.message,

@@ -1,11 +1,11 @@
 /** The result of a check as text for a terminal or a log: one line a finding, its fixes below, one line a channel, and a sum. */
 import type { LimitFigure } from '../analysis/figures';
-import type { ChannelJudgement, Finding } from '../findings';
+import { spanOfFinding, type ChannelJudgement, type Finding } from '../findings';
 import { lineIndexOf } from '../spec';
 import { formatDb } from '../units/format';
 import type { CheckedFile } from './checked-file';
 import { textProblem } from './finding-result';
-import { findingSpan } from './finding-span';
+
 import { plain, type Paint } from './paint';
 
 /** How many findings of each kind a check gave; accepted ones are counted apart. */
@@ -43,7 +43,7 @@ function fileBlock(file: CheckedFile, paint: Paint): string {
 
 function findingLines(file: CheckedFile, finding: Finding, paint: Paint): string[] {
   const { reading } = file.judgement;
-  const { line, character } = lineIndexOf(reading).positionAt(findingSpan(reading, finding).start);
+  const { line, character } = lineIndexOf(reading).positionAt(spanOfFinding(reading, finding).start);
   const word = finding.accepted ? 'accepted' : finding.severity;
   const code = paint('dim', `[${finding.code}]`);
   const head = `  ${String(line + 1)}:${String(character + 1)}  ${paint(word, word)}  ${finding.message}  ${code}`;
