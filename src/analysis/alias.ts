@@ -121,7 +121,10 @@ function search(
   source: Source,
 ): { readonly extreme: Extreme | null; readonly within: readonly Enclosure[] } {
   const within = sourceWithin(view, channel, source);
-  return { within, extreme: strongestLanding({ set: view.set, rateHz: view.rateHz, within, response: view.worst.response }) };
+  return {
+    within,
+    extreme: strongestLanding({ set: view.set, rateHz: view.rateHz, within, response: view.worst.response, split: view.split }),
+  };
 }
 
 function fixedSource(source: Source): Source {

@@ -1,15 +1,16 @@
 /** What a capture channel's landings are searched with: its path and landing set at nominal values and at the worst of the tolerances. */
-import type { Enclosure } from '../signal/response';
+import type { Enclosure, Response } from '../signal/response';
+import { constantResponse, product } from '../signal/response-algebra';
 import type { Channel, Source } from '../spec/channel';
-import { channelPath } from './channel-path';
+import { channelPath, withPulse } from './channel-path';
 import type { ChannelPath } from './channel-path';
 import { toDb } from './decibels';
 import { landingSet } from './landing-set';
 import type { LandingSet } from './landing-set';
-import { followsRate } from './pulse';
+import { wholePulse } from './pulse';
 import { outsideWanted } from './source-range';
 import { partsVary, rateRange, varies } from './tolerances';
-import { axisFactors, nominalPath, worstPath } from './worst-path';
+import { axisFactors, bandAxis, nominalPath, worstPath } from './worst-path';
 import type { Axis, WorstPath } from './worst-path';
 
 /** One set of assumptions: where landings come from and what the path does to them. */
@@ -18,6 +19,14 @@ export interface View {
   readonly rateHz: Enclosure;
   readonly set: LandingSet;
   readonly worst: WorstPath;
+  /** The same gain as a part at k·rate ± x, k ≥ 1, and a part at x, where the aperture lasts whole periods of an exact rate. */
+  readonly split: SplitGain | null;
+}
+
+/** A gain over folds in two parts. */
+export interface SplitGain {
+  readonly outer: Response;
+  readonly inner: Response;
 }
 
 /** A capture channel, ready to be asked for landings. */
@@ -42,16 +51,33 @@ export function captureView(channel: Channel, referenceHz: number | null): Captu
   const protect = channel.protect?.map((band) => ({ low: band.lowHz, high: band.highHz })) ?? null;
   const setFor = (rateHz: Enclosure, factors: Enclosure): LandingSet =>
     landingSet({ rateHz, wanted: widened(ranges, factors), protect: protect === null ? null : widened(protect, factors) });
-  const nominal: View = { axis: 'hertz', rateHz: exact, set: setFor(exact, unity), worst: nominalPath(path, referenceHz) };
+  const plain = nominalPath(path, referenceHz);
+  const split = splitGain(path, referenceHz, (bare) => nominalPath(bare, referenceHz));
+  const nominal: View = { axis: 'hertz', rateHz: exact, set: setFor(exact, unity), worst: plain, split };
   if (!partsVary(channel)) return { channel, path, referenceHz, nominal, worst: nominal, worstOfBands: nominal };
   const rateHz = rateRange(channel.rate);
   const clockVaries = varies(channel.rate.tolerance);
-  const inHertz = worstPath(path, { sense: 'largest', referenceHz, axis: 'hertz' });
-  const worst: View = { axis: 'hertz', rateHz, set: clockVaries ? setFor(rateHz, unity) : nominal.set, worst: inHertz };
-  if (!clockVaries || !followsRate(channel.pulse)) return { channel, path, referenceHz, nominal, worst, worstOfBands: worst };
-  const inPeriods = worstPath(path, { sense: 'largest', referenceHz, axis: 'periods' });
+  const worstOn = (axis: Axis, set: LandingSet, rates: Enclosure): View => {
+    const worst = (one: ChannelPath): WorstPath => worstPath(one, { sense: 'largest', referenceHz, axis });
+    const parts = rates.low === rates.high ? splitGain(path, referenceHz, worst) : null;
+    return { axis, rateHz: rates, set, worst: worst(path), split: parts };
+  };
+  const worst = worstOn('hertz', clockVaries ? setFor(rateHz, unity) : nominal.set, rateHz);
+  if (bandAxis(channel) === 'hertz') return { channel, path, referenceHz, nominal, worst, worstOfBands: worst };
   const set = setFor(exact, axisFactors(channel).periods);
-  return { channel, path, referenceHz, nominal, worst, worstOfBands: { axis: 'periods', rateHz: exact, set, worst: inPeriods } };
+  return { channel, path, referenceHz, nominal, worst, worstOfBands: worstOn('periods', set, exact) };
+}
+
+/** The gain of all but the pulse, with the pulse's two parts; measured from the reference as the whole is. */
+function splitGain(path: ChannelPath, referenceHz: number | null, gainOf: (bare: ChannelPath) => WorstPath): SplitGain | null {
+  const whole = wholePulse(path.channel, path.rateHz);
+  const reference = referenceHz === null ? 0 : path.pulse.logGain(referenceHz);
+  if (whole === null || !Number.isFinite(reference)) return null;
+  const bare: ChannelPath = {
+    ...withPulse(path, constantResponse(0)),
+    channel: { ...path.channel, pulse: { shape: 'instant' } },
+  };
+  return { outer: product([whole.envelope, constantResponse(-reference), gainOf(bare).response]), inner: whole.ripple };
 }
 
 /** Where a source may stand, outside the wanted bands, on a view's axis. */

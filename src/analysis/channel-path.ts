@@ -37,6 +37,12 @@ export function channelPath(channel: Channel, rateHz = channel.rate.hz): Channel
   return { channel, rateHz, pulse, stages, analogue, total };
 }
 
+/** The same path with another response in place of its pulse's. */
+export function withPulse(path: ChannelPath, pulse: Response): ChannelPath {
+  const { channel, rateHz, stages, analogue } = path;
+  return { channel, rateHz, pulse, stages, analogue, total: inSeries([pulse, analogue]) };
+}
+
 /** Responses in series; a flat one where there are none. */
 export function inSeries(responses: readonly Response[]): Response {
   const [only] = responses;

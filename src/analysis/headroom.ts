@@ -7,7 +7,7 @@ import type { ChannelPath } from './channel-path';
 import type { WorstAt } from './figures';
 import { sourceRange } from './source-range';
 import { partsVary } from './tolerances';
-import { nominalPath, worstPath } from './worst-path';
+import { bandAxis, nominalPath, onAxis, worstPath } from './worst-path';
 import type { WorstPath } from './worst-path';
 
 /** Full scale over the sum of all peak amplitudes, dB; negative where they clip. */
@@ -29,7 +29,7 @@ export function headroomOf(channel: Channel, path: ChannelPath): Headroom | null
   const nominal = peaks(channel, nominalPath(path, referenceHz));
   const nominalDb = headroomDb(nominal.levelsDb);
   if (!partsVary(channel) && !tonesVary(channel)) return { ...nominal, valueDb: nominalDb, nominalDb };
-  const worst = peaks(channel, worstPath(path, { sense: 'largest', referenceHz, axis: 'hertz' }), 'anywhere');
+  const worst = peaks(channel, worstPath(path, { sense: 'largest', referenceHz, axis: bandAxis(channel) }), 'anywhere');
   const valueDb = Math.min(headroomDb(worst.levelsDb), nominalDb);
   return { valueDb, nominalDb, worstAt: worst.worstAt, evaluations: nominal.evaluations + worst.evaluations };
 }
@@ -47,10 +47,11 @@ function peaks(channel: Channel, path: WorstPath, tones: 'nominal' | 'anywhere' 
     ...channel.wanted.map((band) => ({ levelDb: band.levelDb, range: { low: band.lowHz, high: band.highHz } })),
     ...channel.unwanted.flatMap((source) => arrivalOf(source, tones)),
   ];
+  const axis = tones === 'nominal' ? 'hertz' : bandAxis(channel);
   let evaluations = 0;
   let strongest = { levelDb: -Infinity, frequencyHz: 0 };
   const levelsDb = arrivals.map(({ levelDb, range }) => {
-    const extreme = largestOverBands(path.response, [range]);
+    const extreme = largestOverBands(path.response, [onAxis(channel, axis, range)]);
     evaluations += extreme?.evaluations ?? 0;
     const arrives = levelDb + toDb(extreme?.logGain ?? -Infinity);
     if (arrives > strongest.levelDb) strongest = { levelDb: arrives, frequencyHz: extreme?.frequencyHz ?? 0 };

@@ -3,10 +3,11 @@ import { alongCopy, tiedRatio } from '../signal/copy-axis';
 import type { Enclosure, Response } from '../signal/response';
 import { inverse, product } from '../signal/response-algebra';
 import { largestOverBands, largestOverFolds } from '../signal/search';
+import { withPulse } from './channel-path';
 import type { ChannelPath } from './channel-path';
 import { axisOf, leavesAt } from './copies';
 import type { Copy, CopyRun, WantedCopy } from './copies';
-import { followsRate } from './pulse';
+import { followsRate, wholePulse } from './pulse';
 import { cornerDeviations, factorsOf, partsVary } from './tolerances';
 import type { WorstAt } from './figures';
 import { axisFactors, nominalPath, worstPath } from './worst-path';
@@ -55,13 +56,14 @@ export function strongestOfRun(
   run: CopyRun,
   sides: 'both' | 'upper' | 'lower' = 'both',
 ): ImagePoint | null {
-  const { path, copies } = question;
-  const rate = path.rateHz;
-  const most = pathFor(question, 'largest');
+  const { copies } = question;
+  const rate = question.path.rateHz;
+  const parts = splitFor(question, run);
+  const most = pathFor({ ...question, path: parts.path }, 'largest');
   const found = largestOverFolds({
     rateHz: { low: rate, high: rate },
     outer: most.response,
-    inner: question.measure === 'level' ? null : againstWanted(question),
+    inner: question.measure === 'level' ? parts.ripple : againstWanted({ ...question, path: parts.path }),
     bands: [copies.baseband],
     within: null,
     ...run,
@@ -89,6 +91,18 @@ interface Tied {
   factorAt(x: number): number;
 }
 
+/**
+ * The path with its pulse's envelope alone, where the pulse lasts whole periods: its ripple then depends on x only. It cancels between a
+ * copy and the wanted output, and stands beside a level; about 0 Hz a level has the pulse itself.
+ */
+function splitFor(question: ImageQuestion, run: CopyRun): { readonly path: ChannelPath; readonly ripple: Response | null } {
+  const { path, measure } = question;
+  const still = followsRate(path.channel.pulse) || !movesParts(question);
+  const whole = still ? wholePulse(path.channel, path.rateHz) : null;
+  if (whole === null || (measure === 'level' && run.firstFold === 0)) return { path, ripple: null };
+  return { path: withPulse(path, whole.envelope), ripple: whole.ripple };
+}
+
 function movesParts({ parts, path }: ImageQuestion): boolean {
   return parts === 'worst' && partsVary(path.channel);
 }
@@ -107,7 +121,8 @@ function againstWanted(question: ImageQuestion): Response {
 
 /** Copy over wanted output along x, each part seen at both frequencies at once, so that what a part does to both cancels. */
 function strongestTied(question: ImageQuestion, copy: Copy): ImagePoint | null {
-  const { path, copies } = question;
+  const { copies } = question;
+  const { path } = splitFor(question, { firstFold: copy.fold, lastFold: copy.fold });
   const rate = path.rateHz;
   const axes = { copy: axisOf(copy, rate), wanted: axisOf(copies.wanted, rate) };
   const periods = axisFactors(path.channel).periods;

@@ -15,7 +15,7 @@ import { sourceRange } from './source-range';
 import { stageCornerHz } from './stage-filter';
 import { jitterSeconds, levelReference, noiseBands, testToneLevelDb } from './test-tone';
 import { partsVary, rateRange } from './tolerances';
-import { nominalPath, worstPath } from './worst-path';
+import { bandAxis, nominalPath, onAxis, worstPath } from './worst-path';
 
 /** The noise of a capture channel. */
 export function captureNoise(channel: Channel, path: ChannelPath, withUnwanted: boolean): DirectionNoise {
@@ -103,7 +103,7 @@ function unwantedJitter(
 
 function jitteredRanges(source: Source, path: ChannelPath, at: 'nominal' | 'worst'): readonly Enclosure[] {
   if (source.kind === 'anything') return [];
-  if (at === 'worst') return [jitteredRange(source, path)];
+  if (at === 'worst') return [onAxis(path.channel, bandAxis(path.channel), jitteredRange(source, path))];
   return source.kind === 'tone' ? [{ low: source.frequencyHz, high: source.frequencyHz }] : [];
 }
 
@@ -135,7 +135,7 @@ function unwantedShares(
     const relative =
       at === 'nominal'
         ? nominalPath(path, frequencyHz)
-        : worstPath(path, { sense: 'largest', referenceHz: frequencyHz, axis: 'hertz' });
+        : worstPath(path, { sense: 'largest', referenceHz: frequencyHz, axis: bandAxis(channel) });
     const jitter = unwantedJitter(channel, path, relative.response, at);
     evaluations += jitter.evaluations;
     const rateHz = at === 'nominal' ? channel.rate.hz : rateRange(channel.rate).low;

@@ -14,6 +14,8 @@ export interface LandingQuestion {
   /** Where the source may stand, outside the wanted bands. */
   readonly within: readonly Enclosure[];
   readonly response: Response;
+  /** The same gain in two parts for k ≥ 1, where there is such a form. */
+  readonly split: { readonly outer: Response; readonly inner: Response } | null;
 }
 
 /** The strongest landing; null where the source lands in no protected range. */
@@ -49,12 +51,22 @@ function landingsOfBands(question: LandingQuestion, within: readonly Enclosure[]
   ];
 }
 
-function landingOfRun({ rateHz, response }: LandingQuestion, run: FoldRun, within: readonly Enclosure[]): Extreme | null {
+function landingOfRun(question: LandingQuestion, run: FoldRun, within: readonly Enclosure[]): Extreme | null {
+  const { rateHz, response, split } = question;
   const low = Math.min(...within.map((piece) => piece.low));
   const high = Math.max(...within.map((piece) => piece.high));
   const firstFold = Math.max(run.firstFold, Math.floor(low / rateHz.high) - 1);
   const lastFold = Math.min(run.lastFold, Math.ceil(high / rateHz.low) + 1);
-  if (firstFold > lastFold) return null;
-  const { bands } = run;
-  return largestOverFolds({ rateHz, outer: response, inner: null, bands, within, firstFold, lastFold, sides: 'both' });
+  const over = (
+    first: number,
+    last: number,
+    gain: { readonly outer: Response; readonly inner: Response | null },
+  ): Extreme | null => {
+    if (first > last) return null;
+    const { outer, inner } = gain;
+    return largestOverFolds({ rateHz, outer, inner, bands: run.bands, within, firstFold: first, lastFold: last, sides: 'both' });
+  };
+  const plain = { outer: response, inner: null };
+  if (split === null) return over(firstFold, lastFold, plain);
+  return largestOf([over(firstFold, Math.min(0, lastFold), plain), over(Math.max(1, firstFold), lastFold, split)]);
 }

@@ -66,6 +66,18 @@ export function axisFactors(channel: Channel): Record<Axis, Enclosure> {
   return { hertz: { low: low / nominal, high: high / nominal }, periods: { low: nominal / high, high: nominal / low } };
 }
 
+/** The axis on which what may stand anywhere in a band is searched: that of the pulse, where the pulse follows a rate that varies. */
+export function bandAxis(channel: Channel): Axis {
+  return varies(channel.rate.tolerance) && followsRate(channel.pulse) ? 'periods' : 'hertz';
+}
+
+/** A range of frequencies on an axis, at every rate that is allowed. */
+export function onAxis(channel: Channel, axis: Axis, range: Enclosure): Enclosure {
+  if (axis === 'hertz') return range;
+  const { low, high } = axisFactors(channel).periods;
+  return { low: range.low * low, high: range.high * high };
+}
+
 interface WorstStage {
   readonly path: StagePath;
   readonly responses: readonly Response[];
