@@ -26,8 +26,8 @@ describe('axes', () => {
   });
 
   it('reach well below what matters and leave room above full scale', () => {
-    assert.deepEqual([levelAxis(-3, [-96, null, -102]).low, levelAxis(-3, [-96]).high], [-140, 0]);
-    assert.equal(levelAxis(0, [-96]).high, 20);
-    assert.equal(levelAxis(0, [-Infinity, null]).low, -60);
+    assert.deepEqual([levelAxis(-3, 1.5, [-96, null, -102]).low, levelAxis(-3, 1.5, [-96]).high], [-140, 0]);
+    assert.deepEqual([levelAxis(0, 1.5, [-96]).high, levelAxis(-2, 8, [-96]).high], [10, 10]);
+    assert.deepEqual([levelAxis(0, 1, [-Infinity, null]).low, levelAxis(-90, 1, []).high], [-60, -20]);
   });
 });
