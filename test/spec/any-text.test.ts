@@ -30,7 +30,7 @@ function assertSound(text: string, reading: Reading): void {
 
 // Whatever means something to YAML, to the scanner or to JavaScript.
 const pieces = [
-  ...' \t\n\r\u00a0\0\uFEFF-:?,[]{}#&*!|>\'"%@`<=~\\',
+  ...Array.from(' \t\n\r\u00a0\0\uFEFF-:?,[]{}#&*!|>\'"%@`<=~\\'),
   ...[
     '\n  ',
     '\n    ',
