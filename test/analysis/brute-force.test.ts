@@ -1,6 +1,9 @@
 /** Aliases, images and flatness against a plain grid that shares nothing with the program, to 0.01 dB (tests run where Python has numpy). */
 import assert from 'node:assert/strict';
+import { readFileSync } from 'node:fs';
+import { join } from 'node:path';
 import { analyse } from '../../src/analysis';
+import { read } from '../../src/spec';
 import type { Channel } from '../../src/spec/channel';
 import { bruteForce, hasBruteForce } from '../support/brute-force';
 import {
@@ -123,4 +126,18 @@ describe('figures against a plain grid', function () {
       assertLevel(flatnessOf(channel), grid.flatness, 'flatness');
     });
   }
+
+  it('agrees on both violations of the broken example', () => {
+    const text = readFileSync(join(import.meta.dirname, '..', '..', 'examples', 'gate-bearing-broken.bandkeep.yaml'), 'utf8');
+    const broken = read(text).entries[0]?.channel;
+    assert.ok(broken !== null && broken !== undefined);
+    const grid = bruteForce(broken);
+    const failed = analyse(broken).limits.filter((found) => !found.passes);
+    assert.deepEqual(
+      failed.map((found) => found.limit),
+      ['alias', 'flatness'],
+    );
+    assertLevel(failed[0]?.value, Math.max(...(grid.aliases ?? []).map((alias) => alias?.level ?? -Infinity)), 'alias');
+    assertLevel(failed[1]?.value, grid.flatness, 'flatness');
+  });
 });
