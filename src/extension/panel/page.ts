@@ -33,6 +33,10 @@ export class Page {
   /** A page that the editor has brought back after a reload. */
   static adopt(view: vscode.WebviewPanel, extensionUri: vscode.Uri, events: PageEvents): Page {
     const files = vscode.Uri.joinPath(extensionUri, 'dist');
+    view.iconPath = {
+      light: vscode.Uri.joinPath(extensionUri, 'media', 'file-light.svg'),
+      dark: vscode.Uri.joinPath(extensionUri, 'media', 'file-dark.svg'),
+    };
     view.webview.options = { enableScripts: true, enableForms: false, enableCommandUris: false, localResourceRoots: [files] };
     view.webview.onDidReceiveMessage((message: unknown) => {
       if (isPageMessage(message)) events.message(message);
