@@ -43,7 +43,7 @@ describe('the JSON result', () => {
     assert.deepEqual(errors.map((finding) => finding.code).sort(), ['alias-over-limit', 'flatness-over-limit']);
     for (const finding of errors) {
       assert.ok(finding.fixes.length > 0, `${finding.code} has no fix`);
-      assert.ok((finding.figures?.margin ?? 0) < 0);
+      assert.ok(Number(finding.figures?.margin) < 0);
     }
     const alias = errors.find((finding) => finding.code === 'alias-over-limit');
     const { start, end } = alias?.range ?? assert.fail('no alias finding');
