@@ -16,6 +16,7 @@ export function levelAxis(highestDb: number, roomDb: number, matters: readonly (
     (low, level) => (level !== null && Number.isFinite(level) ? Math.min(low, level - 30) : low),
     -60,
   );
-  const high = 10 * Math.ceil((highestDb + roomDb) / 10);
+  // The sum makes a 0 of −0, which JSON cannot carry.
+  const high = 10 * Math.ceil((highestDb + roomDb) / 10) + 0;
   return { title: 'dBFS', unit: 'dBFS', low: Math.max(-260, 20 * Math.floor(lowest / 20)), high: Math.max(high, -20) };
 }

@@ -59,8 +59,9 @@ interface EnvelopeParts {
 }
 
 function envelope(view: LeavingView, { id, name, points, stroke, place, words }: EnvelopeParts): Item {
-  const share = id === 'hold' ? 0.14 : 0.42;
-  const index = points.x.findIndex((x) => x >= share * view.subject.channel.rate.hz * (id === 'hold' ? 3 : 1));
+  // The hold is named on its first lobe beyond the rate, hold and path where they part.
+  const nameHz = (id === 'hold' ? 1.43 : 0.42) * view.subject.channel.rate.hz;
+  const index = points.x.findIndex((x) => x >= nameHz);
   return item({
     id: `envelope-${id}`,
     series: id,
