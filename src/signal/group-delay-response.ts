@@ -21,7 +21,7 @@ interface Hump {
  * @param filters at least one pole in all; poles in Hz with negative real parts.
  * @returns ln τ at f ≥ 0; −Infinity at Infinity.
  * Source: the derivative of the phase, common practice; the ranges are elementary.
- * @example Math.exp(groupDelayResponse([{ poles: [{ re: -1000, im: 0 }], gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: [] }]).logGain(0)) // 0.000159154943
+ * @example Math.exp(groupDelayResponse([{ poles: [{ re: -1000, im: 0 }], zeros: [], gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: [] }]).logGain(0)) // 0.000159154943
  */
 export function groupDelayResponse(filters: readonly Filter[]): Response {
   const humps = filters.flatMap((filter) =>

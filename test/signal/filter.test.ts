@@ -15,6 +15,7 @@ const resonant: Filter = {
     { re: -20, im: -1900 },
     { re: -300, im: 0 },
   ],
+  zeros: [],
   gainAt: { frequencyHz: 0, gain: 1 },
   turnsHz: null,
 };
