@@ -29,7 +29,7 @@ export function read(text: string, previous?: Reading): Reading {
   for (const name of names.channels.keys()) resolver.resolve(name);
   const inside: Inside = { slices: placed, names, lists, resolved: resolver.resolved };
   const accepted = findAcceptances(text, (offset) => isInScalar(placed, offset));
-  const problems = problemsOf(text, inside, faults, [...accepted.problems, ...problemsOfTwins(placed)]);
+  const problems = problemsOf(text, inside, faults, [...accepted.problems, ...problemsOfTwins(placed, names)]);
   // No channel is whole that has an error of any kind in its text.
   const faulty = new Set(
     problems.flatMap(({ severity, channel }) => (severity === 'error' && channel !== null ? [channel] : [])),

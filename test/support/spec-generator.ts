@@ -49,7 +49,7 @@ export const legalSpec: fc.Arbitrary<string> = fc
   })
   .map(({ head, sections, channels, indent, deeper, at, lineEnd, tail }) => {
     const block = `channels:\n${channels.map(([name, lines], index) => channelText(`c${name} ${index}`, lines, indent, deeper)).join('')}`;
-    const parts = [...sections];
+    const parts: string[] = [...sections];
     if (channels.length > 0) parts.splice(Math.min(at, parts.length), 0, block);
     return (head + parts.join('') + tail).replaceAll('\n', lineEnd);
   });
