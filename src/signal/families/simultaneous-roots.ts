@@ -28,13 +28,17 @@ export function simultaneousRoots(
     const angle = (2 * Math.PI * (index + 0.3)) / count;
     return { re: centre + radius * Math.cos(angle), im: radius * Math.sin(angle) };
   });
+  let before = Infinity;
   for (let step = 0; step < stepLimit; step += 1) {
     const moved = roots.map((root, index) => {
       const shift = shiftOf(evaluate(root), root, roots, index);
       roots[index] = complexDifference(root, shift);
       return Math.hypot(shift.re, shift.im) / Math.hypot(root.re, root.im);
     });
-    if (Math.max(...moved) < 1e-15) break;
+    const most = Math.max(...moved);
+    // Near the roots every step gains digits until rounding moves them about.
+    if (most < 1e-15 || (most < 1e-8 && most > 0.1 * before)) break;
+    before = most;
   }
   return roots.map(({ re, im }) => (Math.abs(im) < 1e-12 * Math.abs(re) ? { re, im: 0 } : { re, im }));
 }
