@@ -55,6 +55,20 @@ describe('reading after an edit', () => {
     assert.deepEqual(renewed(before, after), []);
   });
 
+  it('takes nothing over whose indentation has become right through its neighbours', () => {
+    const [first = [], ...others] = lagoonNames(3).map(lagoonChannel);
+    const shifted = [` ${first[0] ?? ''}`, ...first.slice(1)];
+    const off = read([lagoonHead.trimEnd(), ...shifted, ...others.flat()].join('\n'));
+    assert.deepEqual(
+      off.entries.map(({ channel }) => channel !== null),
+      [false, true, true],
+    );
+    const all = others.map((lines) => [` ${lines[0] ?? ''}`, ...lines.slice(1)]);
+    const right = read([lagoonHead.trimEnd(), ...shifted, ...all.flat()].join('\n'), off);
+    assert.deepEqual(right.problems, []);
+    assert.ok(right.entries.every(({ channel }) => channel !== null));
+  });
+
   it('gives the same reading as reading afresh', () => {
     const edited = text.replace('corner: 14 kHz', 'corner: 13 kHz').replace('  gate-07:', '  gate 7:');
     const shown = ({ entries, names, problems, title }: Reading): unknown =>
