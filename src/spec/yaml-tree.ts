@@ -29,7 +29,7 @@ export interface ParsedSlice {
 }
 
 /** No legal spec nests deeper than a dozen levels; beyond this many nothing is read, so that no walk can run out of stack. */
-export const deepest = 64;
+const deepest = 64;
 
 // Running bracket depth that the parser still takes in its stride.
 const deepestBrackets = 200;
