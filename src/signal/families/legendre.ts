@@ -50,10 +50,14 @@ function integral(order: number, points: readonly GaussPoint[], x: Complex): Com
 function integrand(order: number, x: Complex): Complex {
   const k = Math.floor((order - 1) / 2);
   const odd = order % 2 === 1;
-  const sum = legendrePolynomials(k, x).reduce<Complex>(
-    (total, polynomial, i) => (odd || (k - i) % 2 === 0 ? complexSum(total, complexScaled(polynomial, 2 * i + 1)) : total),
-    { re: 0, im: 0 },
-  );
+  let re = 0;
+  let im = 0;
+  legendrePolynomials(k, x).forEach((polynomial, i) => {
+    if (!odd && (k - i) % 2 !== 0) return;
+    re += (2 * i + 1) * polynomial.re;
+    im += (2 * i + 1) * polynomial.im;
+  });
+  const sum: Complex = { re, im };
   const square = complexProduct(sum, sum);
   return odd ? square : complexProduct(square, { re: x.re + 1, im: x.im });
 }

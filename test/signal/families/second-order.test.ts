@@ -36,7 +36,9 @@ describe('secondOrder', () => {
           const from = turns[index]!;
           const gains = Array.from({ length: 101 }, (_, step) => response.logGain(from + ((to - from) * step) / 100));
           const direction = Math.sign(gains[100]! - gains[0]!);
-          gains.slice(1).forEach((gain, step) => assert.ok(direction * (gain - gains[step]!) >= -1e-12, `Q ${q} from ${from}`));
+          gains.slice(1).forEach((gain, step) => {
+            assert.ok(direction * (gain - gains[step]!) >= -1e-12, `Q ${q} from ${from}`);
+          });
         });
       }
     });

@@ -8,10 +8,14 @@ import { filterResponse, type Filter } from '../../../src/signal/filter';
 import { rectangleResponse } from '../../../src/signal/pulses/rectangle';
 import { inverse, product } from '../../../src/signal/response-algebra';
 import type { Response } from '../../../src/signal/response';
+import { stretched } from '../../../src/signal/stretched';
 import { largestOverBands, largestOverFolds, type FoldQuestion } from '../../../src/signal/search';
 import { assertWithin, provedGapDb, roundingDb } from '../../support/tolerance';
 
 const toDb = (logGain: number): number => (20 / Math.LN10) * logGain;
+
+/** The gap that the search over factors leaves. */
+const factorGapDb = 1e-5;
 
 /** What an alias search may cost. */
 const evaluationLimit = 500;
@@ -133,6 +137,24 @@ describe('proved maxima over zeros on the axis', () => {
       const extreme = largestOverBands(response, [{ low: 990, high: 1020 }])!;
       assert.equal(extreme.frequencyHz, 1020);
       assert.ok(extreme.evaluations <= evaluationLimit);
+    }
+  });
+
+  it('find the corner of a tolerance at which a lobe is worst, between its ends', () => {
+    // The peak of the last lobe stands between the frequencies that both ends of ± 5 % make of it.
+    const filter = elliptic(8, 1000, 0.1, 70, 'ripple');
+    const peak = (filter.turnsHz ?? []).findLast((_, index, turns) => (turns.length - index) % 2 === 0) ?? NaN;
+    for (const response of responsesOf(filter)) {
+      const worst = stretched(response, { low: 0.95, high: 1.05 }, 'largest');
+      for (const frequency of [peak, peak * 0.98, peak * 1.03, 1020, 1300]) {
+        let most = -Infinity;
+        for (let i = 0; i <= 2000; i += 1) most = Math.max(most, response.logGain(frequency / (0.95 + (0.1 * i) / 2000)));
+        const found = worst.logGain(frequency);
+        assert.ok(toDb(found) >= toDb(most) - factorGapDb);
+        assertWithin(toDb(found), toDb(most), provedGapDb);
+        assertWithin(response.logGain(frequency / worst.factorAt(frequency)), found, 1e-9);
+      }
+      assert.ok(toDb(worst.logGain(peak)) > toDb(Math.max(response.logGain(peak / 0.95), response.logGain(peak / 1.05))));
     }
   });
 });
