@@ -36,22 +36,31 @@ export const bandBetween = (range: { readonly low: Quantity; readonly high: Quan
 });
 
 function sourceOf(model: SourceModel | 'anything', path: Path, scale: Scale, report: Report): Source | null {
-  if (model === 'anything') return { kind: 'anything', name: 'anything', ref: null, levelDb: 0 };
+  if (model === 'anything') return { kind: 'anything', name: 'anything', ref: null, enters: 'input', levelDb: 0 };
   const ref = model.ref ?? null;
   if (model.anything) {
     const level = levelDb(model.anything, scale, [...path, 'anything'], report);
-    return level === null ? null : { kind: 'anything', name: model.name ?? 'anything', ref, levelDb: level };
+    return level === null ? null : { kind: 'anything', name: model.name ?? 'anything', ref, enters: 'input', levelDb: level };
   }
   const level = model.level ? levelDb(model.level, scale, [...path, 'level'], report) : null;
   if (level === null) return null;
   if (model.tone) {
     const { value, tolerance } = model.tone;
     const name = model.name ?? `tone at ${formatFrequency(value)}`;
-    return { kind: 'tone', name, ref, frequencyHz: value, tolerance: settledTolerance(tolerance), levelDb: level };
+    return {
+      kind: 'tone',
+      name,
+      ref,
+      enters: 'input',
+      frequencyHz: value,
+      tolerance: settledTolerance(tolerance),
+      levelDb: level,
+      harmonics: null,
+    };
   }
   if (!model.band) return null;
   const band = bandBetween(model.band);
-  return { kind: 'band', name: model.name ?? bandName(band), ref, ...band, levelDb: level };
+  return { kind: 'band', name: model.name ?? bandName(band), ref, enters: 'input', ...band, levelDb: level, harmonics: null };
 }
 
 function bandName({ lowHz, highHz }: Band): string {

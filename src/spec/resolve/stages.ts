@@ -34,17 +34,33 @@ function stageOf(model: StageModel, label: string): Stage | null {
   const form = formOf(model);
   if (form === null) return null;
   const name = model.name ?? null;
-  return { name, label: name ?? label, form, cornerTolerance: cornerToleranceOf(model), gainTolerance: exact };
+  return {
+    name,
+    label: name ?? label,
+    form,
+    gain: 1,
+    parts: [],
+    cornerTolerance: cornerToleranceOf(model),
+    qTolerance: exact,
+    gainTolerance: exact,
+  };
 }
 
 function formOf(model: StageModel): StageForm | null {
   if (model.rc?.r && model.rc.c) return { kind: 'rc', ohm: model.rc.r.value, farad: model.rc.c.value };
   if (model.bandwidth) return { kind: 'bandwidth', cornerHz: model.bandwidth.value };
   if (!model.family || !model.order || !model.corner) return null;
-  const common = { order: model.order, cornerHz: model.corner.value };
-  if (model.family === 'butterworth') return { kind: 'butterworth', ...common };
-  if (!model.ripple) return null;
-  return { kind: 'chebyshev', ...common, rippleDb: model.ripple.value, cornerAt: model['corner-at'] ?? 'half-power' };
+  return {
+    kind: 'family',
+    family: model.family,
+    filterKind: 'lowpass',
+    order: model.order,
+    cornerHz: model.corner.value,
+    upperCornerHz: null,
+    cornerAt: model['corner-at'] ?? 'half-power',
+    rippleDb: model.ripple?.value ?? null,
+    attenuationDb: null,
+  };
 }
 
 function cornerToleranceOf(model: StageModel) {
