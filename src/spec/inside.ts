@@ -1,7 +1,11 @@
 /** A reading with what the spec layer itself keeps of it: slices, names, resolutions; other layers see only `Reading`. */
 import type { ChannelModel } from './declaration/channel';
 import type { ClockModel } from './declaration/clock';
+import type { SegmentsModel } from './declaration/mask';
+import type { SourceModel } from './declaration/source';
 import type { StagesModel } from './declaration/stage';
+import { nothingShelved } from './files/shelved';
+import type { Shelved } from './files/shelved';
 import { lineIndex } from './line-index';
 import type { LineIndex } from './line-index';
 import type { Reading } from './reading';
@@ -28,6 +32,8 @@ export interface PlacedName<T> {
 export interface Names {
   readonly clocks: ReadonlyMap<string, PlacedName<ClockModel>>;
   readonly filters: ReadonlyMap<string, PlacedName<StagesModel>>;
+  readonly sources: ReadonlyMap<string, PlacedName<SourceModel>>;
+  readonly masks: ReadonlyMap<string, PlacedName<SegmentsModel>>;
   readonly channels: ReadonlyMap<string, PlacedName<ChannelModel>>;
 }
 
@@ -37,6 +43,8 @@ export interface Inside {
   readonly names: Names;
   readonly lists: NameLists;
   readonly resolved: ReadonlyMap<string, Resolved>;
+  /** Other files that were read. */
+  readonly shelved: Shelved;
 }
 
 /** A reading as `read` makes it. */
@@ -47,6 +55,7 @@ export class SpecReading implements Reading {
   readonly names: Reading['names'];
   readonly problems: Reading['problems'];
   readonly acceptances: Reading['acceptances'];
+  readonly paths: Reading['paths'];
   readonly counts: Reading['counts'];
   private index: LineIndex | null = null;
 
@@ -60,6 +69,7 @@ export class SpecReading implements Reading {
     this.names = shown.names;
     this.problems = shown.problems;
     this.acceptances = shown.acceptances;
+    this.paths = shown.paths;
     this.counts = shown.counts;
   }
 
@@ -88,7 +98,8 @@ function ownReading(reading: Reading): SpecReading {
 /** What there is before anything has been read. */
 export const nothingRead: Inside = {
   slices: [],
-  names: { clocks: new Map(), filters: new Map(), channels: new Map() },
-  lists: { clocks: [], filters: [], channels: [] },
+  names: { clocks: new Map(), filters: new Map(), sources: new Map(), masks: new Map(), channels: new Map() },
+  lists: { clocks: [], filters: [], sources: [], masks: [], channels: [] },
   resolved: new Map(),
+  shelved: nothingShelved,
 };
