@@ -12,15 +12,15 @@ export const declaration = fields('a spec', {
   bandkeep: { shape: whole(1, 1), about: 'The version of the language, 1.', required: true },
   title: { shape: text, about: 'What the spec is about.' },
   notes: { shape: text, about: 'Anything worth knowing.' },
-  clocks: { shape: clocks, about: 'Clocks by name: frequency, tolerance and jitter.' },
-  filters: { shape: filters, about: 'Filters by name: a stage, or a list of stages in series.' },
-  channels: { shape: entries('a channel', channel), about: 'Channels by name.' },
   use: {
     shape: listOf(path),
     about: 'Other specs, by relative path, whose clocks, sources, filters and masks may be named here.',
   },
+  clocks: { shape: clocks, about: 'Clocks by name: frequency, tolerance and jitter.' },
   sources: { shape: sources, about: "Unwanted sources by name, for any channel's `unwanted`." },
+  filters: { shape: filters, about: 'Filters by name: a stage, or a list of stages in series.' },
   masks: { shape: masks, about: 'Masks by name: lists of segments.' },
+  channels: { shape: entries('a channel', channel), about: 'Channels by name.' },
 });
 
 /** A file as it was written. */
