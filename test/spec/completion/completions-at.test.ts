@@ -86,7 +86,16 @@ describe('completion', () => {
       'tolerance',
     ]);
     assert.deepEqual(stage('bandwidth: 3 kHz'), ['name', 'tolerance']);
-    assert.deepEqual(labelsAt(`${head}    filter: { name: a, ¦ }\n`), ['family', 'second-order', 'rc', 'cr', 'rlc', 'bandwidth', 'poles', 'measured']);
+    assert.deepEqual(labelsAt(`${head}    filter: { name: a, ¦ }\n`), [
+      'family',
+      'second-order',
+      'rc',
+      'cr',
+      'rlc',
+      'bandwidth',
+      'poles',
+      'measured',
+    ]);
   });
 
   it('offers keys and words behind a dash', () => {
