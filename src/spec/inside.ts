@@ -1,41 +1,13 @@
 /** A reading with what the spec layer itself keeps of it: slices, names, resolutions; other layers see only `Reading`. */
-import type { ChannelModel } from './declaration/channel';
-import type { ClockModel } from './declaration/clock';
-import type { SegmentsModel } from './declaration/mask';
-import type { SourceModel } from './declaration/source';
-import type { StagesModel } from './declaration/stage';
 import { nothingShelved } from './files/shelved';
 import type { Shelved } from './files/shelved';
 import { lineIndex } from './line-index';
 import type { LineIndex } from './line-index';
+import type { Names, PlacedSlice } from './placed';
 import type { Reading } from './reading';
 import type { NameLists, Resolved } from './resolver';
-import type { Named, SliceReading } from './slice-reading';
-import type { Slice } from './slices/slice';
 
-/** A slice at its place in the file. */
-export interface PlacedSlice {
-  readonly slice: Slice;
-  readonly reading: SliceReading;
-}
-
-/** A clock, a filter or a channel at its place in the file. */
-export interface PlacedName<T> {
-  readonly named: Named<T>;
-  /** Offset in the file that the offsets of its tree count from. */
-  readonly base: number;
-  /** A second one has the same name. */
-  readonly twice: boolean;
-}
-
-/** The names of a file by space; of two alike the first. */
-export interface Names {
-  readonly clocks: ReadonlyMap<string, PlacedName<ClockModel>>;
-  readonly filters: ReadonlyMap<string, PlacedName<StagesModel>>;
-  readonly sources: ReadonlyMap<string, PlacedName<SourceModel>>;
-  readonly masks: ReadonlyMap<string, PlacedName<SegmentsModel>>;
-  readonly channels: ReadonlyMap<string, PlacedName<ChannelModel>>;
-}
+export type { Names, PlacedName, PlacedSlice } from './placed';
 
 /** What the spec layer keeps. */
 export interface Inside {

@@ -1,5 +1,5 @@
 /** What a reading keeps of other files, so that the next one need not read them again. */
-import type { Names, PlacedSlice } from '../inside';
+import type { Names, PlacedSlice } from '../placed';
 import type { TableReading } from '../tables/spec-table';
 
 /** Another spec whose names are used. */

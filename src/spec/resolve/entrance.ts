@@ -4,7 +4,7 @@ import type { SourceModel } from '../declaration/source';
 import { nearest } from '../nearest';
 import type { Path } from '../place';
 import { scalarText } from '../scalar-text';
-import type { SourceContext } from './sources';
+import type { SourceContext } from './source-context';
 
 /** Where a source enters, or null where there is no such place. */
 export function resolveEntrance(

@@ -22,7 +22,7 @@ type Written = NonNullable<LimitsModel[LimitKey]>;
 function limitOf(key: LimitKey, written: Written | null): Limit | null {
   if (written === null) return null;
   if ('value' in written) return { key, ...valueOf(written), ref: null, margin: null, withUnwanted: false, sum: false };
-  const sum = 'sum' in written && written.sum !== undefined;
+  const sum = 'sum' in written;
   const at = sum ? written.sum : written.at;
   if (!at || written.ref === null || written.margin === null) return null;
   return {

@@ -1,5 +1,5 @@
 /** Resolves `unwanted` to tones, bands, spectra and `anything`, each with a name that messages can use. */
-import type { AnythingSource, Band, BandSource, Source, SpectrumSource, Stage, ToneSource } from '../channel';
+import type { AnythingSource, Band, BandSource, Source, SpectrumSource, ToneSource } from '../channel';
 import type { ChannelModel } from '../declaration/channel';
 import type { SourceModel } from '../declaration/source';
 import type { Path } from '../place';
@@ -8,23 +8,10 @@ import { formatFrequency } from '../../units/format';
 import type { Quantity } from '../../units/quantity';
 import { resolveEntrance, resolveHarmonics } from './entrance';
 import { levelDb } from './levels';
-import type { Scale } from './levels';
 import { oneOrMany } from './one-or-many';
 import { reportRepeatedNames } from './repeated-names';
-import type { Lookup } from './resolution';
-import type { Report } from './report';
+import type { SourceContext } from './source-context';
 import { settledTolerance } from './tolerance';
-
-/** What sources are resolved against. */
-export interface SourceContext {
-  readonly scale: Scale;
-  /** The stages before the sampler; null where they are faulty. */
-  readonly inputStages: readonly Stage[] | null;
-  /** The stages behind it, which no source can enter. */
-  readonly outputStages: readonly Stage[] | null;
-  readonly lookup: Lookup;
-  readonly report: Report;
-}
 
 /** The sources in their order, or null where one of them is faulty. */
 export function resolveSources(stated: NonNullable<ChannelModel['unwanted']>, context: SourceContext): readonly Source[] | null {

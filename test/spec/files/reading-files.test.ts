@@ -39,7 +39,7 @@ describe('a spec that names a table', () => {
   it('keeps a channel as long as the content of its table stays the same', () => {
     const files = (text: string) => memoryFiles('s.bandkeep.yaml', { 'data/probe.csv': text });
     const first = read(measured, undefined, files(csv));
-    const same = read(`${measured}# a comment\n`, first, files(`${csv}`));
+    const same = read(`${measured}# a comment\n`, first, files(csv));
     const other = read(measured, same, files(csv.replace('-3', '-4')));
     assert.ok(wholeOf(first));
     assert.equal(wholeOf(same), wholeOf(first));
