@@ -9,5 +9,8 @@ await installPackages();
 rmSync(join(root, 'dist'), { recursive: true, force: true });
 await buildBundles();
 const vsce = join(root, 'node_modules', '@vscode', 'vsce', 'vsce');
-const { code } = await runNode([vsce, 'package', '--no-dependencies', '--skip-license', ...process.argv.slice(2)], { cwd: root });
+const { code } = await runNode(
+  [vsce, 'package', '--no-dependencies', '--no-rewrite-relative-links', '--allow-missing-repository', ...process.argv.slice(2)],
+  { cwd: root },
+);
 process.exitCode = code;

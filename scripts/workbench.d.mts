@@ -18,6 +18,6 @@ export function startWorkbench(options: {
 }): Promise<Workbench>;
 export function workbenchAddress(
   workbench: Pick<Workbench, 'port' | 'token'>,
-  what: { folder: string; file?: string | null; tests?: string | null; extension?: string | null },
+  what: { folder: string; file?: string | null; tests?: string | null },
 ): string;
-export function writeMachineSettings(data: string, settings: Record<string, unknown>): void;
+export function writeSettings(data: string, settings: Record<string, unknown>): void;

@@ -3,6 +3,7 @@ import { spawn } from 'node:child_process';
 import { existsSync, mkdirSync, readFileSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { delimiter, join } from 'node:path';
+import { extensionFolder } from './extension-folder.mjs';
 import { root } from './prepare-clone.mjs';
 import { runNpm } from './run-command.mjs';
 
@@ -30,11 +31,11 @@ export async function installWorkbench() {
 
 /**
  * Starts the workbench's server and waits until it answers.
- * `data` is a folder for its settings and logs; `settings` are the machine settings; with a `token` every page needs it.
+ * `data` is a folder for its settings and logs; `settings` are the user's; with a `token` every page needs it.
  */
 export async function startWorkbench({ data, settings = {}, token = null, env = {} }) {
   const port = await freePort();
-  writeMachineSettings(data, settings);
+  writeSettings(data, settings);
   const args = [
     join(server, 'out', 'server-main.js'),
     ...['--host', '127.0.0.1', '--port', String(port)],
@@ -53,10 +54,12 @@ export async function startWorkbench({ data, settings = {}, token = null, env = 
 }
 
 /** The address of the workbench with a folder open, our extension loaded from the clone, and perhaps a file or a test suite. */
-export function workbenchAddress({ port, token }, { folder, file = null, tests = null, extension = root }) {
+export function workbenchAddress({ port, token }, { folder, file = null, tests = null }) {
   const remote = (path) => `vscode-remote://127.0.0.1:${port}${urlPath(path)}`;
-  const payload = [['skipWelcome', 'true']];
-  if (extension !== null) payload.push(['extensionDevelopmentPath', remote(extension)]);
+  const payload = [
+    ['skipWelcome', 'true'],
+    ['extensionDevelopmentPath', remote(extensionFolder())],
+  ];
   if (tests !== null) payload.push(['extensionTestsPath', remote(tests)]);
   if (file !== null) payload.push(['openFile', remote(file)]);
   const query = new URLSearchParams({ folder: urlPath(folder), payload: JSON.stringify(payload) });
@@ -64,16 +67,19 @@ export function workbenchAddress({ port, token }, { folder, file = null, tests =
   return `http://127.0.0.1:${port}/?${query}`;
 }
 
-/** Machine settings of a data folder; the workbench takes a change at once. */
-export function writeMachineSettings(data, settings) {
-  mkdirSync(join(data, 'data', 'Machine'), { recursive: true });
+/** The user's settings in a data folder; the workbench takes a change at once. */
+export function writeSettings(data, settings) {
+  mkdirSync(join(data, 'data', 'User'), { recursive: true });
   const quiet = {
     'security.workspace.trust.enabled': false,
     'workbench.startupEditor': 'none',
     'telemetry.telemetryLevel': 'off',
     'update.mode': 'none',
+    'git.openRepositoryInParentFolders': 'never',
+    // The address names a file to open; without this a reload would open only that and drop the panel.
+    'window.restoreWindows': 'preserve',
   };
-  writeFileSync(join(data, 'data', 'Machine', 'settings.json'), JSON.stringify({ ...quiet, ...settings }, null, 2));
+  writeFileSync(join(data, 'data', 'User', 'settings.json'), JSON.stringify({ ...quiet, ...settings }, null, 2));
 }
 
 /** A path as a URL has it: forward slashes and a leading one, on Windows too. */

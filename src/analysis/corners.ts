@@ -55,9 +55,10 @@ function stretchedStage(path: StagePath, factor: number): StagePath {
   return { stage: path.stage, filter, response: filterResponse(filter) };
 }
 
-function stretchedFilter({ poles, gainAt, turnsHz }: Filter, factor: number): Filter {
+function stretchedFilter({ poles, zeros, gainAt, turnsHz }: Filter, factor: number): Filter {
   return {
     poles: poles.map(({ re, im }) => ({ re: re * factor, im: im * factor })),
+    zeros: zeros.map(({ re, im }) => ({ re: re * factor, im: im * factor })),
     gainAt: { frequencyHz: gainAt.frequencyHz * factor, gain: gainAt.gain },
     turnsHz: turnsHz?.map((turn) => turn * factor) ?? null,
   };

@@ -7,7 +7,7 @@ import { withPulse } from './channel-path';
 import type { ChannelPath } from './channel-path';
 import { axisOf, leavesAt } from './copies';
 import type { Copy, CopyRun, WantedCopy } from './copies';
-import { followsRate, wholePulse } from './pulse';
+import { wholePulse } from './pulse';
 import { cornerDeviations, factorsOf, partsVary } from './tolerances';
 import type { WorstAt } from './figures';
 import { axisFactors, nominalPath, worstPath } from './worst-path';
@@ -97,8 +97,7 @@ interface Tied {
  */
 function splitFor(question: ImageQuestion, run: CopyRun): { readonly path: ChannelPath; readonly ripple: Response | null } {
   const { path, measure } = question;
-  const still = followsRate(path.channel.pulse) || !movesParts(question);
-  const whole = still ? wholePulse(path.channel, path.rateHz) : null;
+  const whole = wholePulse(path.channel, path.rateHz);
   if (whole === null || (measure === 'level' && run.firstFold === 0)) return { path, ripple: null };
   return { path: withPulse(path, whole.envelope), ripple: whole.ripple };
 }
@@ -135,7 +134,7 @@ function strongestTied(question: ImageQuestion, copy: Copy): ImagePoint | null {
     const own = factorsOf(stage.cornerTolerance);
     return { own, tied: tie(response, { low: own.low * periods.low, high: own.high * periods.high }) };
   });
-  const pulse = tie(path.pulse, followsRate(path.channel.pulse) ? { low: 1, high: 1 } : periods);
+  const pulse = tie(path.pulse, { low: 1, high: 1 });
   const found = largestOverBands(product([pulse.response, ...stages.map((one) => one.tied.response)]), [copies.baseband]);
   if (found === null) return null;
   const corners = stages.map(({ own, tied }) => Math.min(Math.max(tied.factorAt(found.frequencyHz), own.low), own.high));

@@ -1,6 +1,8 @@
 /** What a generate channel lets out besides the wanted band: the strongest point of every copy, and the strongest of all to infinity. */
+import type { Enclosure } from '../signal/response';
 import type { Channel, Limit, WantedBand } from '../spec/channel';
 import { gainWithCornersDb } from './capture-view';
+import { channelPath } from './channel-path';
 import type { ChannelPath } from './channel-path';
 import { copiesOf, leavesAt, reportedFolds } from './copies';
 import type { WantedCopy } from './copies';
@@ -8,8 +10,9 @@ import { toDb } from './decibels';
 import type { ImageFigure, WorstAt } from './figures';
 import { strongestOfCopy, strongestOfRun } from './image-search';
 import type { ImagePoint, Measure } from './image-search';
+import { followsRate } from './pulse';
 import { deviation, joinWorst, partsVary, rateLabel, rateRange, varies } from './tolerances';
-import { axisFactors } from './worst-path';
+import { onAxis } from './worst-path';
 
 /** The images of a channel. */
 export interface Images {
@@ -62,40 +65,63 @@ interface Image {
 
 function imagesOfBand(channel: Channel, path: ChannelPath, band: WantedBand, measure: Measure): readonly Image[] {
   const range = { low: band.lowHz, high: band.highHz };
-  const nominalCopies = copiesOf(range, path.rateHz);
-  const nominal = pointsOf({ path, measure, parts: 'nominal', copies: nominalCopies });
-  if (!partsVary(channel)) {
-    return nominal.map((point) => imageOf(path, band, nominalCopies, point, point));
+  const still = { path, copies: copiesOf(range, path.rateHz) };
+  const nominal = pointsOf({ ...still, measure, parts: 'nominal' });
+  if (!partsVary(channel)) return nominal.map((point) => imageOf(band, still, point, still, point));
+  const worst = assumptions(channel, path, range).map((one) => ({ one, points: pointsOf({ ...one, measure, parts: 'worst' }) }));
+  return nominal.flatMap((point, index) =>
+    worst.flatMap(({ one, points }) => {
+      const moved = points[index];
+      return moved === undefined ? [] : [imageOf(band, one, moved, still, point)];
+    }),
+  );
+}
+
+/** A rate, the path at it, and the copies there. */
+interface Assumption {
+  readonly path: ChannelPath;
+  readonly copies: WantedCopy;
+}
+
+/**
+ * Where the worst is looked for. A hold that follows the rate is the same at every rate when frequencies are counted in periods, so that
+ * one search covers the clock's tolerance; a hold of fixed width is looked at with the clock at nominal and at either end.
+ */
+function assumptions(channel: Channel, path: ChannelPath, range: Enclosure): readonly Assumption[] {
+  if (followsRate(channel.pulse) || !varies(channel.rate.tolerance)) {
+    return [{ path, copies: copiesOf(onAxis(channel, 'periods', range), path.rateHz) }];
   }
-  const { low, high } = axisFactors(channel).periods;
-  const copies = copiesOf({ low: range.low * low, high: range.high * high }, path.rateHz);
-  const worst = pointsOf({ path, measure, parts: 'worst', copies });
-  return worst.flatMap((point, index) => {
-    const still = nominal[index];
-    return still === undefined ? [] : [imageOf(path, band, copies, point, still)];
+  const { low, high } = rateRange(channel.rate);
+  return [channel.rate.hz, low, high].map((hz) => {
+    const rate = { ...channel.rate, hz, tolerance: { low: 0, high: 0 } };
+    return { path: channelPath({ ...channel, rate }), copies: copiesOf(range, hz) };
   });
 }
 
-/** The single copies, then the runs; the same order for every set of parts. */
+/** The single copies, then the runs; the same order for every assumption. */
 function pointsOf(question: Parameters<typeof strongestOfCopy>[0]): readonly ImagePoint[] {
   const single = question.copies.single.map((copy) => strongestOfCopy(question, copy));
   const runs = question.copies.runs.map((run) => strongestOfRun(question, run));
   return [...single, ...runs].filter((point) => point !== null);
 }
 
-function imageOf(path: ChannelPath, band: WantedBand, copies: WantedCopy, worst: ImagePoint, nominal: ImagePoint): Image {
-  const levels = levelsOf(path, band, copies, worst);
-  const still = nominal === worst ? levels : levelsOf(path, band, copies, nominal);
-  const scale = rateScale(path.channel, band, leavesAt(copies.wanted, path.rateHz, worst.basebandHz));
-  const { rate } = path.channel;
-  const clock = worst !== nominal && varies(rate.tolerance) ? { [rateLabel(rate)]: deviation(scale, rate.tolerance) } : null;
+function imageOf(band: WantedBand, at: Assumption, worst: ImagePoint, still: Assumption, nominal: ImagePoint): Image {
+  const { rate } = still.path.channel;
+  const levels = levelsOf(band, at, worst);
+  const stillLevels = nominal === worst ? levels : levelsOf(band, still, nominal);
+  const wantedHz = leavesAt(at.copies.wanted, at.path.rateHz, worst.basebandHz);
+  const scale = rateScale(at.path.channel, band, wantedHz);
+  const clock = varies(rate.tolerance)
+    ? { [rateLabel(rate)]: deviation((scale * at.path.rateHz) / rate.hz, rate.tolerance) }
+    : null;
   return {
     copy: worst.copy,
-    fromHz: leavesAt(copies.wanted, path.rateHz, worst.basebandHz) * scale,
+    fromHz: wantedHz * scale,
     frequencyHz: worst.frequencyHz * scale,
-    ...levels,
-    nominalLevelDb: Math.min(still.levelDb, levels.levelDb),
-    nominalRelativeDb: Math.min(still.relativeDb, levels.relativeDb),
+    levelDb: levels.levelDb,
+    relativeDb: levels.relativeDb,
+    nominalLevelDb: Math.min(stillLevels.levelDb, levels.levelDb),
+    nominalRelativeDb: Math.min(stillLevels.relativeDb, levels.relativeDb),
     gapDb: worst.gapDb,
     worstAt: joinWorst(worst.worstAt, clock),
     evaluations: worst.evaluations + (nominal === worst ? 0 : nominal.evaluations),
@@ -104,9 +130,8 @@ function imageOf(path: ChannelPath, band: WantedBand, copies: WantedCopy, worst:
 
 /** The level and the level against the same tone's wanted output, with the same parts for both. */
 function levelsOf(
-  path: ChannelPath,
   band: WantedBand,
-  copies: WantedCopy,
+  { path, copies }: Assumption,
   point: ImagePoint,
 ): { readonly levelDb: number; readonly relativeDb: number } {
   const wantedHz = leavesAt(copies.wanted, path.rateHz, point.basebandHz);

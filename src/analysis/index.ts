@@ -26,9 +26,7 @@ export {
 export { worstPath, type Axis, type WorstPath, type WorstQuestion } from './worst-path';
 export { halfPowerHz } from './half-power';
 export { noiseBandwidthHz } from './noise-bandwidth';
-export { followsRate, pulseNulls, pulseSeconds } from './pulse';
-export { appearance } from './wanted';
-export { rateRange } from './tolerances';
+export { pulseNulls, pulseSeconds } from './pulse';
 export { jitterNoiseDb, quantisationSnrDb } from '../signal/noise';
-export { foldFrequency, rateWindows, type Landing, type RateWindow } from '../signal/folding';
+export { foldFrequency, type Landing } from '../signal/folding';
 export type { Enclosure, Response } from '../signal/response';

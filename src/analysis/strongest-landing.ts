@@ -26,7 +26,7 @@ export function strongestLanding(question: LandingQuestion): Extreme | null {
 }
 
 /** The larger of several maxima, with the work of all. */
-export function largestOf(extremes: readonly (Extreme | null)[]): Extreme | null {
+function largestOf(extremes: readonly (Extreme | null)[]): Extreme | null {
   const found = extremes.filter((extreme) => extreme !== null);
   const [first, ...others] = found;
   if (first === undefined) return null;

@@ -12,7 +12,8 @@ import { cornerLabel, deviation, factorsOf, gainLabel, partsVary, rateRange, var
 
 /**
  * What frequencies are measured in while the rate may deviate. `hertz`: as they are; a pulse that follows the rate is then
- * stretched. `periods`: as multiples of the rate, written in Hz at the nominal rate; whatever does not follow the rate is then stretched.
+ * stretched. `periods`: as multiples of the rate, written in Hz at the nominal rate; the stages are then stretched. It is only for pulses
+ * that follow the rate.
  */
 export type Axis = 'hertz' | 'periods';
 
@@ -101,20 +102,12 @@ function worstStage(path: StagePath, channel: Channel, question: WorstQuestion):
   };
 }
 
-function worstPulse(path: ChannelPath, question: WorstQuestion): readonly Response[] {
-  const { channel, pulse } = path;
+/** A pulse that follows the rate is the same at every rate in periods; one of fixed width is only ever looked at in hertz. */
+function worstPulse({ channel, pulse }: ChannelPath, question: WorstQuestion): readonly Response[] {
   if (channel.pulse.shape === 'instant') return [];
-  const moves = followsRate(channel.pulse) === (question.axis === 'hertz');
-  const factors = moves ? axisFactors(channel)[question.axis] : { low: 1, high: 1 };
-  const shape = stretchedFrom(pulse, factors, question).response;
-  return [shape, ...holdArea(channel, question)];
-}
-
-/** A hold of fixed width carries more of a shorter period. */
-function holdArea(channel: Channel, question: WorstQuestion): readonly Response[] {
-  if (channel.direction === 'capture' || followsRate(channel.pulse) || question.referenceHz !== null) return [];
-  const { low, high } = axisFactors(channel).hertz;
-  return [constantResponse(Math.log(question.sense === 'largest' ? high : low))];
+  const moves = followsRate(channel.pulse) && question.axis === 'hertz';
+  const factors = moves ? axisFactors(channel).hertz : { low: 1, high: 1 };
+  return [stretchedFrom(pulse, factors, question).response];
 }
 
 function stretchedFrom(

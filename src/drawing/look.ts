@@ -42,7 +42,7 @@ export function forbiddenFill(item: Item, look: Look): Fill {
 
 /** The fill of a ribbon: the nearer it comes to harm, the stronger. */
 export function ribbonFill(item: Item, strength: number, look: Look): Fill {
-  const base = item.role === 'harm' ? 0.5 : 0.03 + 0.17 * strength ** 2;
+  const base = item.role === 'harm' ? 0.4 : 0.03 + 0.17 * strength ** 2;
   return fill(item, base, look, hatchOf(item.role, 'pale', look.theme));
 }
 

@@ -33,8 +33,8 @@ export function codeActions(document: SpecDocument, question: ActionQuestion, op
   ];
 }
 
-/** A kind asked for stands for all its sub-kinds; the empty kind for every kind. */
-function asksForQuickFixes(only: readonly string[] | null): boolean {
+/** Whether there is anything of ours among the kinds asked for: a kind stands for all its sub-kinds, the empty one for every kind. */
+export function asksForQuickFixes(only: readonly string[] | null): boolean {
   return only === null || only.includes('') || only.includes(CodeActionKind.QuickFix);
 }
 

@@ -1,6 +1,6 @@
 /** The editor features as pure functions of a judged spec and a position; the server adds the wire and the schedule. */
 export type { ClientAbilities } from './client-abilities';
-export { codeActions } from './code-actions';
+export { asksForQuickFixes, codeActions } from './code-actions';
 export type { ActionQuestion } from './code-actions';
 export { completion } from './completion';
 export { diagnostics } from './diagnostics';

@@ -19,6 +19,6 @@ export function unprovedIn(document: SpecDocument, range: Range): Finding[] {
 }
 
 /** Faults of the text carry their own cures, and an accepted finding asks for none. */
-export function isCurable(finding: Finding): boolean {
+function isCurable(finding: Finding): boolean {
   return finding.accepted === null && 'place' in finding.at && remediesOf(finding.code).length > 0;
 }

@@ -10,12 +10,13 @@ export function frequencyAxis(title: string, lowestHz: number, highestHz: number
   return { title, lowHz, highHz, logLowHz, scale };
 }
 
-/** A level axis in steps of 20 dB from well below what matters up to the highest level. */
-export function levelAxis(highestDb: number, matters: readonly (number | null)[]): LevelAxis {
-  const lowest = Math.min(
+/** A level axis from well below what matters up to the highest level, with so many dB of room above it for labels. */
+export function levelAxis(highestDb: number, roomDb: number, matters: readonly (number | null)[]): LevelAxis {
+  const lowest = matters.reduce<number>(
+    (low, level) => (level !== null && Number.isFinite(level) ? Math.min(low, level - 30) : low),
     -60,
-    ...matters.filter((level) => level !== null && Number.isFinite(level)).map((level) => Number(level) - 30),
   );
-  const high = highestDb <= -1.5 ? 0 : 20 * Math.ceil((highestDb + 1.5) / 20);
-  return { title: 'dBFS', unit: 'dBFS', low: Math.max(-260, 20 * Math.floor(lowest / 20)), high };
+  // The sum makes a 0 of −0, which JSON cannot carry.
+  const high = 10 * Math.ceil((highestDb + roomDb) / 10) + 0;
+  return { title: 'dBFS', unit: 'dBFS', low: Math.max(-260, 20 * Math.floor(lowest / 20)), high: Math.max(high, -20) };
 }

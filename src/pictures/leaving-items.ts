@@ -26,7 +26,6 @@ export function envelopeItems(view: LeavingView): Item[] {
   const { subject, topDb } = view;
   const hold = curveOf(view, subject.path.pulse, topDb, 0, view.output.highHz);
   const both = curveOf(view, subject.largest, topDb, 0, view.output.highHz);
-  const flatHold = subject.channel.pulse.shape === 'instant';
   const items = [
     envelope(view, {
       id: 'hold',
@@ -45,7 +44,9 @@ export function envelopeItems(view: LeavingView): Item[] {
       words: 'What hold and path leave of it, at the worst of the tolerances',
     }),
   ];
-  return flatHold ? items.slice(1) : items;
+  // Where there is no filter, hold and path are one curve; where there is no hold, the path is all there is.
+  if (subject.path.stages.length === 0) return items.slice(0, 1);
+  return subject.channel.pulse.shape === 'instant' ? items.slice(1) : items;
 }
 
 interface EnvelopeParts {
@@ -58,8 +59,9 @@ interface EnvelopeParts {
 }
 
 function envelope(view: LeavingView, { id, name, points, stroke, place, words }: EnvelopeParts): Item {
-  const share = id === 'hold' ? 0.14 : 0.42;
-  const index = points.x.findIndex((x) => x >= share * view.subject.channel.rate.hz * (id === 'hold' ? 3 : 1));
+  // The hold is named on its first lobe beyond the rate, hold and path where they part.
+  const nameHz = (id === 'hold' ? 1.43 : 0.42) * view.subject.channel.rate.hz;
+  const index = points.x.findIndex((x) => x >= nameHz);
   return item({
     id: `envelope-${id}`,
     series: id,
@@ -100,22 +102,27 @@ function beforeItem(view: LeavingView, copy: CopyView): Item {
 
 function beforeLabel(view: LeavingView, copy: CopyView, points: Points): Item['label'] {
   const level = Math.max(...points.y);
+  const middleHz = (copy.range.low + copy.range.high) / 2;
   if (copy.wanted) {
     const text = `wanted ${stretchWords(copy.band.lowHz, copy.band.highHz)}`;
-    return {
-      text,
-      frequencyHz: copy.range.high,
-      level: view.levels.low + (view.levels.high - view.levels.low) * 0.08,
-      prefer: 'right',
-      priority: 8,
-    };
+    return { text, frequencyHz: middleHz, level, prefer: 'above', priority: 8 };
   }
-  // One name a pair, between its sides.
-  if (copy.index > 0 || copy.copy.side === 'lower') return null;
-  const text = copy.copy.fold === 0 ? 'baseband' : `copy ${copy.copy.fold}`;
-  const frequencyHz =
-    copy.copy.fold === 0 ? (copy.range.low + copy.range.high) / 2 : copy.copy.fold * view.subject.channel.rate.hz;
-  return { text, frequencyHz, level: Math.min(view.levels.high, level + 2), prefer: 'above', priority: 5 };
+  if (copy.copy.fold === 0) return { text: 'baseband', frequencyHz: middleHz, level, prefer: 'above', priority: 5 };
+  if (copy.index > 0 || !namesPair(view, copy)) return null;
+  const frequencyHz = copy.copy.fold * view.subject.channel.rate.hz;
+  return {
+    text: `copy ${copy.copy.fold}`,
+    frequencyHz,
+    level: Math.min(view.levels.high, level + 2),
+    prefer: 'above',
+    priority: 5,
+  };
+}
+
+/** One name a pair, between its sides: the upper side carries it, or the lower where the upper is the wanted band. */
+function namesPair({ copies }: LeavingView, { copy, index }: CopyView): boolean {
+  if (copy.side === 'upper') return true;
+  return copies.some((other) => other.wanted && other.index === index && other.copy.fold === copy.fold);
 }
 
 function afterItem(view: LeavingView, copy: CopyView): Item {

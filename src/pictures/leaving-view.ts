@@ -53,7 +53,7 @@ export function leavingView(subject: Subject): LeavingView {
   const levels = channel.wanted.map((band) => band.levelDb);
   const limit = limitFigure(subject, 'image');
   const limitDb = limit === null ? null : limit.unit === 'dBc' ? limit.at + Math.min(...levels) : limit.at;
-  const axis = levelAxis(Math.max(...levels), [limitDb, figures.image?.level ?? null, figures.noise.total]);
+  const axis = levelAxis(Math.max(...levels), 18, [limitDb, figures.image?.level ?? null, figures.noise.total]);
   const low = Math.min(...channel.wanted.map((band) => band.lowHz).filter((f) => f > 0), rateHz / 20);
   return {
     subject,

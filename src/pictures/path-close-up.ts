@@ -200,7 +200,9 @@ function markItems(subject: Subject, limit: LimitFigure | null): Item[] {
 function signedAt({ channel, path }: Subject, frequencyHz: number, departureDb: number): number {
   const at = (sense: 'largest' | 'smallest'): number =>
     gainDb(worstPath(path, { sense, referenceHz: channel.referenceHz, axis: 'hertz' }).response, frequencyHz);
-  return Math.abs(at('largest') - departureDb) < Math.abs(-at('smallest') - departureDb) ? departureDb : -departureDb;
+  const isLoss = Math.abs(-at('smallest') - departureDb) <= Math.abs(at('largest') - departureDb);
+  // Never −0, which JSON cannot carry.
+  return isLoss && departureDb > 0 ? -departureDb : departureDb;
 }
 
 function tableOf(subject: Subject, limit: LimitFigure | null): Plot['table'] {

@@ -14,12 +14,14 @@ import { standingOf } from './words';
 export function pathSection(subject: Subject): Section {
   const limit = limitFigure(subject, 'flatness');
   const closeUp = subject.channel.wanted.length === 0 ? [] : [closeUpPlot(subject)];
+  const plain = subject.channel.stages.length === 0 && subject.channel.pulse.shape === 'instant';
+  const timing = plain ? [] : [phasePlot(subject), delayPlot(subject)];
   return {
     id: 'path',
     title: 'Analogue path',
     answer: { text: answerText(subject), standing: standingOf(subject.channel, limit) },
     place: subject.placeOf(limit === null ? ['filter'] : ['limits', 'flatness']),
-    plots: [...closeUp, magnitudePlot(subject), phasePlot(subject), delayPlot(subject)],
+    plots: [...closeUp, magnitudePlot(subject), ...timing],
   };
 }
 

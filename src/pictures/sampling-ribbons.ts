@@ -9,15 +9,37 @@ import type { SamplingView, SourceView } from './sampling-view';
 import { levelWords, ordinal, sentences, stretchWords } from './words';
 
 /** The most ribbons of one source; beyond that they only cover one another. */
-const mostOfOne = 7;
+const mostOfOne = 6;
 
 /** How far below the limit, in dB, a stretch stops being worth a ribbon. */
 const reachDb = 60;
 
 /** The ribbons of every source, harmless ones first, so that harm is painted on top. */
 export function ribbonItems(view: SamplingView): Item[] {
-  const items = view.sources.flatMap((source) => ribbonsOf(view, source));
+  const items = [...wantedRibbons(view), ...view.sources.flatMap((source) => ribbonsOf(view, source))];
   return [...items.filter(({ role }) => role !== 'harm'), ...items.filter(({ role }) => role === 'harm')];
+}
+
+/** A wanted band that appears elsewhere than it stands; in the first zone there is nothing to show. */
+function wantedRibbons({ subject }: SamplingView): Item[] {
+  return subject.figures.wanted.flatMap((band, index) => {
+    if (band.zone === 1) return [];
+    const { low: lowHz, high: highHz, appearsLow: landsLowHz, appearsHigh: landsHighHz, inverted } = band;
+    const words = `The wanted band ${stretchWords(lowHz, highHz)} appears at ${stretchWords(landsLowHz, landsHighHz)}, zone ${band.zone}`;
+    return [
+      item({
+        id: `ribbon-wanted-${index}`,
+        series: 'wanted',
+        pane: inputPane,
+        role: 'wanted',
+        name: 'fold of the wanted band',
+        words: sentences(inverted ? `${words}, inverted` : words),
+        place: subject.placeOf(['wanted', index]),
+        joins: [`wanted-${index}`, `wanted-lands-${index}`],
+        shapes: [{ kind: 'ribbon', lowHz, highHz, landsPane: outputPane, landsLowHz, landsHighHz, inverted, strength: 1 }],
+      }),
+    ];
+  });
 }
 
 function ribbonsOf(view: SamplingView, source: SourceView): Item[] {

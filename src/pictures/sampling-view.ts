@@ -44,7 +44,7 @@ export function samplingView(subject: Subject): SamplingView {
     rateHz: channel.rate.hz,
   }));
   const stated = [...channel.wanted.map((band) => band.levelDb), ...sources.map(({ levelDb }) => levelDb)];
-  const levels = levelAxis(Math.max(...stated), [limitDb, figures.alias?.level ?? null, figures.noise.total]);
+  const levels = levelAxis(Math.max(...stated), 1.5, [limitDb, figures.alias?.level ?? null, figures.noise.total]);
   const tolerance = (levels.high - levels.low) / 3000;
   return {
     subject,
@@ -71,14 +71,16 @@ function inputAxis(subject: Subject, sources: readonly SourceView[], levels: Lev
   const worst = subject.figures.alias?.frequency ?? null;
   const highest = Math.max(...finite, 1.5 * channel.rate.hz, worst !== null && Number.isFinite(worst) ? worst : 0);
   const fading = endless.map((source) => fadesAt(source, highest, levels.low));
-  const lowest = Math.min(...finite);
+  // A source from 0 Hz up shows the first stretch that lands, too.
+  const fromZero = sources.some(({ range }) => range.low === 0) ? [channel.rate.hz / 20] : [];
+  const lowest = Math.min(...finite, ...fromZero);
   return frequencyAxis('Hz at the input', Number.isFinite(lowest) ? lowest : 0, Math.max(highest * 1.1, ...fading));
 }
 
-/** Where an endless source has faded below what is shown; at most 100 times as far. */
+/** Where an endless source has faded below what is shown; at most 20 times as far. */
 function fadesAt({ levelDb, response }: SourceView, fromHz: number, floorDb: number): number {
-  const steps = Array.from({ length: 21 }, (_, index) => fromHz * 10 ** (index / 10));
-  return steps.find((f) => levelDb + gainDb(response, f) < floorDb) ?? fromHz * 100;
+  const steps = Array.from({ length: 14 }, (_, index) => fromHz * 10 ** (index / 10));
+  return steps.find((f) => levelDb + gainDb(response, f) < floorDb) ?? fromHz * 20;
 }
 
 /** A limit in dBc counts from the weakest wanted tone as it comes out. */

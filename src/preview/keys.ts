@@ -33,25 +33,26 @@ export function actionOf(press: Press): PlotAction | null {
   if (press.shiftKey && (press.key === 'ArrowLeft' || press.key === 'ArrowRight')) {
     return { kind: 'pan', share: press.key === 'ArrowLeft' ? -0.2 : 0.2 };
   }
-  return actions[press.key.length === 1 ? press.key.toLowerCase() : press.key] ?? null;
+  return actions.get(press.key.length === 1 ? press.key.toLowerCase() : press.key) ?? null;
 }
 
-const actions: Readonly<Record<string, PlotAction>> = {
-  '+': { kind: 'zoom', factor: 1.5 },
-  '=': { kind: 'zoom', factor: 1.5 },
-  '-': { kind: 'zoom', factor: 1 / 1.5 },
-  '−': { kind: 'zoom', factor: 1 / 1.5 },
-  '0': { kind: 'whole' },
-  ArrowLeft: { kind: 'step', by: -4 },
-  ArrowRight: { kind: 'step', by: 4 },
-  PageUp: { kind: 'step', by: -40 },
-  PageDown: { kind: 'step', by: 40 },
-  Home: { kind: 'end', which: 'first' },
-  End: { kind: 'end', which: 'last' },
-  ArrowUp: { kind: 'item', by: -1 },
-  ArrowDown: { kind: 'item', by: 1 },
-  Enter: { kind: 'follow' },
-  Escape: { kind: 'leave' },
-  t: { kind: 'table' },
-  l: { kind: 'scale' },
-};
+// A map, since a key may be called anything.
+const actions: ReadonlyMap<string, PlotAction> = new Map<string, PlotAction>([
+  ['+', { kind: 'zoom', factor: 1.5 }],
+  ['=', { kind: 'zoom', factor: 1.5 }],
+  ['-', { kind: 'zoom', factor: 1 / 1.5 }],
+  ['−', { kind: 'zoom', factor: 1 / 1.5 }],
+  ['0', { kind: 'whole' }],
+  ['ArrowLeft', { kind: 'step', by: -4 }],
+  ['ArrowRight', { kind: 'step', by: 4 }],
+  ['PageUp', { kind: 'step', by: -40 }],
+  ['PageDown', { kind: 'step', by: 40 }],
+  ['Home', { kind: 'end', which: 'first' }],
+  ['End', { kind: 'end', which: 'last' }],
+  ['ArrowUp', { kind: 'item', by: -1 }],
+  ['ArrowDown', { kind: 'item', by: 1 }],
+  ['Enter', { kind: 'follow' }],
+  ['Escape', { kind: 'leave' }],
+  ['t', { kind: 'table' }],
+  ['l', { kind: 'scale' }],
+]);

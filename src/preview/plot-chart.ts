@@ -43,6 +43,14 @@ export interface Pointing {
 /** A canvas nobody points at. */
 export const noPointing: Pointing = { lit: new Set(), hovered: new Set(), cross: null, dragged: null };
 
+/** Whether two show the same, so that nothing need be drawn again. */
+export function samePointing(one: Pointing, other: Pointing): boolean {
+  const same = (a: ReadonlySet<string>, b: ReadonlySet<string>): boolean => a.size === b.size && [...a].every((id) => b.has(id));
+  return (
+    same(one.lit, other.lit) && same(one.hovered, other.hovered) && one.cross === other.cross && one.dragged === other.dragged
+  );
+}
+
 /** A live chart. */
 export class PlotChart {
   private readonly chart: Chart<'line', Point[]>;

@@ -16,7 +16,7 @@ import { actionOf } from './keys';
 import type { PlotAction } from './keys';
 import { fillLegend } from './legend';
 import { itemsAt } from './places';
-import { noPointing, PlotChart } from './plot-chart';
+import { noPointing, PlotChart, samePointing } from './plot-chart';
 import type { Pointing } from './plot-chart';
 import { fittedState, isPartial, selectionOf, shownPlot, viewOf, withToggled, withView, withWholeView } from './plot-model';
 import { plotParts } from './plot-parts';
@@ -90,8 +90,10 @@ export class PlotView {
   draw(): void {
     if (this.closed()) return;
     const input = { plot: this.shown(), state: this.state, theme: this.theme };
-    if (this.chart === null) this.chart = new PlotChart(this.parts.canvas, input);
-    else this.chart.show(input);
+    if (this.chart === null) {
+      this.chart = new PlotChart(this.parts.canvas, input);
+      if (this.pointing !== noPointing) this.chart.point(this.pointing);
+    } else this.chart.show(input);
     this.reader.refresh(input.plot, this.chart.frame());
   }
 
@@ -100,9 +102,9 @@ export class PlotView {
     this.plot = plot;
     this.theme = theme;
     this.state = fittedState(plot, state);
-    this.pointing = { ...this.pointing, lit: new Set(itemsAt(plot.items, this.place)) };
     this.fill();
     this.redraw();
+    this.light(this.place);
   }
 
   /** Lights the items of the line that the editor's cursor is in. */
@@ -241,6 +243,7 @@ export class PlotView {
   }
 
   private point(pointing: Pointing): void {
+    if (samePointing(this.pointing, pointing)) return;
     this.pointing = pointing;
     this.chart?.point(pointing);
   }

@@ -3,16 +3,6 @@ import { isCount, isNullOr, isPlaceName, isRecord, isText } from './guards';
 import type { Position, Range } from './position';
 import type { CountsParams, LocateParams, PictureParams, PlaceAtParams } from './requests';
 
-/** A point in a text. */
-export function isPosition(value: unknown): value is Position {
-  return isRecord(value) && isCount(value['line']) && isCount(value['character']);
-}
-
-/** A stretch of a text. */
-export function isRange(value: unknown): value is Range {
-  return isRecord(value) && isPosition(value['start']) && isPosition(value['end']);
-}
-
 /** Parameters of a standard request about a document. */
 export function isAboutDocument(value: unknown): value is { textDocument: { uri: string } } {
   return isRecord(value) && isRecord(value['textDocument']) && isText(value['textDocument']['uri']);
@@ -51,4 +41,14 @@ export function isAboutRange(value: unknown): value is { textDocument: { uri: st
 /** The server's options as the client may hand them over. */
 export function docsBaseOf(options: unknown): string | null {
   return isRecord(options) && isText(options['docsBase']) ? options['docsBase'] : null;
+}
+
+/** A point in a text. */
+function isPosition(value: unknown): value is Position {
+  return isRecord(value) && isCount(value['line']) && isCount(value['character']);
+}
+
+/** A stretch of a text. */
+function isRange(value: unknown): value is Range {
+  return isRecord(value) && isPosition(value['start']) && isPosition(value['end']);
 }

@@ -1,8 +1,10 @@
 /** Diagnostics on their way to the client: asked for where it asks, else sent, never both; of the newest version only, with no timer. */
 import {
   DocumentDiagnosticReportKind,
+  type CancellationToken,
   type Connection,
   type Diagnostic,
+  type DocumentDiagnosticParams,
   type DocumentDiagnosticReport,
 } from 'vscode-languageserver';
 import { diagnostics, type SpecDocument } from '../language';
@@ -10,17 +12,25 @@ import { isAboutDocument } from '../protocol/request-guards';
 import { check, refuseIfCancelled } from './answers';
 import type { ServerState } from './server-state';
 
-/** Answers `textDocument/diagnostic`; a report that has not changed since the client's last is only named. */
-export function answerPulls(connection: Connection, state: ServerState): void {
+/** Answers `textDocument/diagnostic`. */
+export interface DiagnosticAnswers {
+  /** A report that has not changed since the client's last is only named. */
+  diagnostic(params: DocumentDiagnosticParams, token: CancellationToken): Promise<DocumentDiagnosticReport>;
+}
+
+/** The answers of one server. */
+export function diagnosticAnswers(state: ServerState): DiagnosticAnswers {
   const reports = createReports();
-  connection.languages.diagnostics.on(async (params, token) => {
-    const { textDocument, previousResultId } = check(params, isAboutDocument);
-    const document = await state.specs.judged(textDocument.uri);
-    refuseIfCancelled(token);
-    if (document === null) return { kind: DocumentDiagnosticReportKind.Full, items: [] };
-    state.proofs.wake();
-    return reports.reportOf(document, itemsOf(document, state), previousResultId);
-  });
+  return {
+    async diagnostic(params, token) {
+      const { textDocument, previousResultId } = check(params, isAboutDocument);
+      const document = await state.specs.judged(textDocument.uri);
+      refuseIfCancelled(token);
+      if (document === null) return { kind: DocumentDiagnosticReportKind.Full, items: [] };
+      state.proofs.wake();
+      return reports.reportOf(document, itemsOf(document, state), previousResultId);
+    },
+  };
 }
 
 /** Sends the newest version's diagnostics, unless a newer one has come meanwhile: that one sends its own. */

@@ -3,9 +3,9 @@ import type { ClientProfile } from './client-profile';
 import type { OpenSpecs } from './open-specs';
 import type { Proofs } from './proofs';
 
-/** One server's state; `profile` is the plain client's until `initialize` has come. */
+/** One server's state. */
 export interface ServerState {
-  profile: ClientProfile;
+  readonly profile: ClientProfile;
   readonly specs: OpenSpecs;
   readonly proofs: Proofs;
 }

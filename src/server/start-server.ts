@@ -4,35 +4,43 @@ import {
   PositionEncodingKind,
   TextDocuments,
   TextDocumentSyncKind,
+  type CancellationToken,
   type Connection,
   type InitializeResult,
 } from 'vscode-languageserver';
 import { TextDocument } from 'vscode-languageserver-textdocument';
+import {
+  countsRequest,
+  locateRequest,
+  pictureRequest,
+  placeAtRequest,
+  type CountsParams,
+  type LocateParams,
+  type PictureParams,
+  type PlaceAtParams,
+} from '../protocol/requests';
 import { plainClient, profileOf, type ClientProfile } from './client-profile';
-import { answerPulls, clear, push } from './diagnostic-reports';
-import { answerEditor } from './editor-requests';
-import { createOpenSpecs } from './open-specs';
-import { answerOwn } from './own-requests';
 import type { Platform } from './platform';
-import { Proofs } from './proofs';
-import type { ServerState } from './server-state';
+import type { Services } from './services';
 
 /** Registers everything the server answers and starts listening. */
 export function startServer(connection: Connection, platform: Platform): void {
-  const report = (fault: unknown): void => {
-    connection.console.error(fault instanceof Error ? (fault.stack ?? fault.message) : String(fault));
-  };
-  const specs = createOpenSpecs(platform);
-  const state: ServerState = { profile: plainClient, specs, proofs: new Proofs(specs, platform, report) };
+  let profile = plainClient;
+  let services: Promise<Services> | null = null;
+  const load = async (): Promise<Services> => (await import('./services')).createServices(connection, profile, platform);
+  // All messages wait for the same promise, so they are handled in the order in which they came.
+  const loaded = (): Promise<Services> => (services ??= load());
 
   connection.onInitialize((params) => {
-    state.profile = profileOf(params);
-    if (state.profile.pullsDiagnostics) answerPulls(connection, state);
-    return whatWeOffer(state.profile, platform.version);
+    profile = profileOf(params);
+    if (profile.pullsDiagnostics) {
+      connection.languages.diagnostics.on(async (asked, token) => (await loaded()).diagnostic(asked, token));
+    }
+    return whatWeOffer(profile, platform.version);
   });
-  keepDocuments(connection, state, report);
-  answerEditor(connection, state);
-  answerOwn(connection, state);
+  connection.onInitialized(() => void loaded());
+  keepDocuments(connection, loaded);
+  answerRequests(connection, loaded);
   connection.listen();
 }
 
@@ -53,16 +61,32 @@ function whatWeOffer(profile: ClientProfile, version: string): InitializeResult 
   };
 }
 
-/** Follows the client's documents; where it does not ask for diagnostics, each change sends them. */
-function keepDocuments(connection: Connection, state: ServerState, report: (fault: unknown) => void): void {
+function keepDocuments(connection: Connection, loaded: () => Promise<Services>): void {
   const documents = new TextDocuments(TextDocument);
   documents.onDidChangeContent(({ document }) => {
-    state.specs.change(document.uri, document.version, document.getText());
-    if (!state.profile.pullsDiagnostics) push(connection, state, document.uri).catch(report);
+    const { uri, version } = document;
+    const text = document.getText();
+    void loaded().then((services) => {
+      services.changed(uri, version, text);
+    });
   });
   documents.onDidClose(({ document }) => {
-    state.specs.close(document.uri);
-    if (!state.profile.pullsDiagnostics) clear(connection, document.uri).catch(report);
+    void loaded().then((services) => {
+      services.closed(document.uri);
+    });
   });
   documents.listen(connection);
+}
+
+function answerRequests(connection: Connection, loaded: () => Promise<Services>): void {
+  connection.onHover(async (params, token) => (await loaded()).hover(params, token));
+  connection.onCompletion(async (params, token) => (await loaded()).completion(params, token));
+  connection.onDocumentSymbol(async (params, token) => (await loaded()).documentSymbol(params, token));
+  connection.onCodeAction(async (params, token) => (await loaded()).codeAction(params, token));
+  connection.onRequest(pictureRequest, async (params: PictureParams, token: CancellationToken) =>
+    (await loaded()).picture(params, token),
+  );
+  connection.onRequest(locateRequest, async (params: LocateParams) => (await loaded()).locate(params));
+  connection.onRequest(placeAtRequest, async (params: PlaceAtParams) => (await loaded()).placeAt(params));
+  connection.onRequest(countsRequest, async (params: CountsParams) => (await loaded()).counts(params));
 }

@@ -1,7 +1,7 @@
 /** max over a corner factor c of H(f/c)/H(r/c), at points and over boxes of f and r: one part seen at two frequencies at once. */
 import { dividedBy, negated, plus, times, unlessNaN } from './interval-arithmetic';
 import type { Enclosure, Response } from './response';
-import { Frontier } from './search/frontier';
+import { Frontier, nestedEvaluationLimit } from './search/frontier';
 import { toNepers } from './search/gap';
 import { openInterval, type Curve } from './search/interval';
 
@@ -26,7 +26,7 @@ export class FactorRatio {
 
   /** The largest ratio at two frequencies, and the factor that makes it. */
   at(frequencyHz: number, referenceHz: number): { readonly logGain: number; readonly factor: number } {
-    const frontier = new Frontier(nestedGap);
+    const frontier = new Frontier(nestedGap, nestedEvaluationLimit);
     openInterval(frontier, this.curveAt(frequencyHz, referenceHz), this.factors.low, this.factors.high);
     frontier.prove();
     return { logGain: frontier.best, factor: frontier.bestHz };
@@ -34,7 +34,7 @@ export class FactorRatio {
 
   /** A proved upper bound over boxes of both frequencies; it tightens as the boxes shrink. */
   upper(frequencies: Enclosure, references: Enclosure): number {
-    const frontier = new Frontier(Math.max(nestedGap, looseness * this.spread(frequencies, references)));
+    const frontier = new Frontier(Math.max(nestedGap, looseness * this.spread(frequencies, references)), nestedEvaluationLimit);
     openInterval(frontier, this.curveOver(frequencies, references), this.factors.low, this.factors.high);
     return frontier.prove();
   }

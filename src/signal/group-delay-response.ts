@@ -5,7 +5,7 @@ import type { Enclosure, Response } from './response';
 /** Bounds are widened by this, in place of directed rounding. */
 const logSlack = 1e-9;
 
-/** One pole's share of the delay: strength / (width² + (f − centre)²), in seconds. */
+/** One root's share of the delay: strength / (width² + (f − centre)²), in seconds; negative for a zero left of the axis. */
 interface Hump {
   readonly strength: number;
   readonly width: number;
@@ -13,28 +13,45 @@ interface Hump {
 }
 
 /**
- * The group delay of filters in series as a response: τ(f) = Σ w / (2π·(w² + (f − c)²)) over all poles −w + jc, given as ln(τ / 1 s).
+ * The group delay of filters in series as a response: τ(f) = Σ w / (2π·(w² + (f − c)²)) over all poles −w + jc and zeros w + jc, less the
+ * zeros −w + jc, given as ln((τ + offset) / 1 s) with the offset of `delayOffset`, so that differences of two values are those of τ.
  *
  * Bounds over an interval are the sum of the humps' exact ranges; the slope is (ln τ)′ = τ′/τ with τ′ bounded hump by hump, each
  * of which is steepest at c ± w/√3.
  *
  * @param filters at least one pole in all; poles in Hz with negative real parts.
- * @returns ln τ at f ≥ 0; −Infinity at Infinity.
+ * @returns ln(τ + offset) at f ≥ 0; at Infinity ln(offset), −Infinity without one.
  * Source: the derivative of the phase, common practice; the ranges are elementary.
- * @example Math.exp(groupDelayResponse([{ poles: [{ re: -1000, im: 0 }], gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: [] }]).logGain(0)) // 0.000159154943
+ * @example Math.exp(groupDelayResponse([{ poles: [{ re: -1000, im: 0 }], zeros: [], gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: [] }]).logGain(0)) // 0.000159154943
  */
 export function groupDelayResponse(filters: readonly Filter[]): Response {
-  const humps = filters.flatMap((filter) =>
-    filter.poles.map(({ re, im }) => ({ strength: -re / (2 * Math.PI), width: -re, centre: im })),
-  );
-  return new DelayResponse(humps);
+  return new DelayResponse(filters.flatMap(humpsOf), delayOffset(filters));
+}
+
+/**
+ * What `groupDelayResponse` adds to the delay in seconds, so that its logarithm exists where zeros left of the axis make it negative: the
+ * sum of all that they can take away. 0 without such zeros.
+ *
+ * @example delayOffset([realPole(1000)]) // 0
+ */
+export function delayOffset(filters: readonly Filter[]): number {
+  return filters.flatMap(humpsOf).reduce((sum, { strength, width }) => sum + Math.max(0, -strength) / (width * width), 0);
+}
+
+/** A zero on the axis only steps the phase, which is no delay. */
+function humpsOf({ poles, zeros }: Filter): readonly Hump[] {
+  const hump = (re: number, im: number): Hump => ({ strength: re / (2 * Math.PI), width: Math.abs(re), centre: im });
+  return [...poles.map(({ re, im }) => hump(-re, im)), ...zeros.filter(({ re }) => re !== 0).map(({ re, im }) => hump(re, im))];
 }
 
 class DelayResponse implements Response {
-  constructor(private readonly humps: readonly Hump[]) {}
+  constructor(
+    private readonly humps: readonly Hump[],
+    private readonly offset: number,
+  ) {}
 
   logGain(frequencyHz: number): number {
-    let sum = 0;
+    let sum = this.offset;
     for (const hump of this.humps) sum += heightAt(hump, frequencyHz);
     return Math.log(sum);
   }
@@ -75,13 +92,12 @@ class DelayResponse implements Response {
   }
 
   private range(lowHz: number, highHz: number): Enclosure {
-    let low = 0;
-    let high = 0;
+    let low = this.offset;
+    let high = this.offset;
     for (const hump of this.humps) {
-      const atLow = heightAt(hump, lowHz);
-      const atHigh = heightAt(hump, highHz);
-      low += Math.min(atLow, atHigh);
-      high += lowHz < hump.centre && hump.centre < highHz ? heightAt(hump, hump.centre) : Math.max(atLow, atHigh);
+      const range = rangeOf(heightAt, hump, [lowHz, highHz], [hump.centre]);
+      low += range.low;
+      high += range.high;
     }
     return { low, high };
   }
@@ -101,14 +117,7 @@ function slopeAt({ strength, width, centre }: Hump, frequencyHz: number): number
 /** A hump rises most at centre − width/√3 and falls most at centre + width/√3; between those and beyond its slope is monotonic. */
 function slopeRange(hump: Hump, lowHz: number, highHz: number): Enclosure {
   const offset = hump.width * steepestOffset;
-  const atLow = slopeAt(hump, lowHz);
-  const atHigh = slopeAt(hump, highHz);
-  const rises = hump.centre - offset;
-  const falls = hump.centre + offset;
-  return {
-    low: lowHz < falls && falls < highHz ? slopeAt(hump, falls) : Math.min(atLow, atHigh),
-    high: lowHz < rises && rises < highHz ? slopeAt(hump, rises) : Math.max(atLow, atHigh),
-  };
+  return rangeOf(slopeAt, hump, [lowHz, highHz], [hump.centre - offset, hump.centre + offset]);
 }
 
 function bendAt({ strength, width, centre }: Hump, frequencyHz: number): number {
@@ -120,13 +129,27 @@ function bendAt({ strength, width, centre }: Hump, frequencyHz: number): number 
 /** A hump's second derivative is lowest at its centre and highest at centre ± width. */
 function bendRange(hump: Hump, lowHz: number, highHz: number): Enclosure {
   const { width, centre } = hump;
-  const atLow = bendAt(hump, lowHz);
-  const atHigh = bendAt(hump, highHz);
-  const inside = (frequencyHz: number): boolean => lowHz < frequencyHz && frequencyHz < highHz;
-  return {
-    low: inside(centre) ? bendAt(hump, centre) : Math.min(atLow, atHigh),
-    high: inside(centre - width) || inside(centre + width) ? bendAt(hump, centre + width) : Math.max(atLow, atHigh),
-  };
+  return rangeOf(bendAt, hump, [lowHz, highHz], [centre - width, centre, centre + width]);
+}
+
+/** The range of something that is monotonic between its extremes. */
+function rangeOf(
+  at: (hump: Hump, frequencyHz: number) => number,
+  hump: Hump,
+  [lowHz, highHz]: readonly [number, number],
+  extremesHz: readonly number[],
+): Enclosure {
+  const atLow = at(hump, lowHz);
+  const atHigh = at(hump, highHz);
+  let low = Math.min(atLow, atHigh);
+  let high = Math.max(atLow, atHigh);
+  for (const extremeHz of extremesHz) {
+    if (!(lowHz < extremeHz && extremeHz < highHz)) continue;
+    const value = at(hump, extremeHz);
+    low = Math.min(low, value);
+    high = Math.max(high, value);
+  }
+  return { low, high };
 }
 
 const steepestOffset = 1 / Math.sqrt(3);

@@ -1,4 +1,4 @@
-/** First- and second-order pole factors over u = f², which stay exact beside a sharp resonance, and the ranges they take over an interval. */
+/** First- and second-order factors over u = f², which stay exact beside a sharp resonance, and how they slope and bend over an interval. */
 import type { Enclosure } from './response';
 
 /** A pole or zero in Hz: s = 2π·(re + j·im); of a conjugate pair both are listed. */
@@ -7,90 +7,134 @@ export interface Root {
   readonly im: number;
 }
 
-/**
- * The squared magnitude of one factor, (u − centre)² + width for a conjugate pair with centre = im² − re² and width = (2·re·im)²,
- * or u + width for a real root with width = re²; divided by its value at u = 0, so that products neither over- nor underflow.
- */
-interface Section {
-  readonly pair: boolean;
+/** The squared magnitude of one real root: u + square, square = re². */
+export interface SingleSection {
+  readonly kind: 'single';
+  readonly square: number;
+}
+
+/** Of two real roots: (u + near)·(u + far), near ≤ far their squares. */
+export interface DoubleSection {
+  readonly kind: 'double';
+  readonly near: number;
+  readonly far: number;
+}
+
+/** Of a conjugate pair: (u − centre)² + width with centre = im² − re² and width = (2·re·im)². */
+export interface PairSection {
+  readonly kind: 'pair';
+  readonly re: number;
+  readonly im: number;
   readonly centre: number;
   readonly width: number;
-  readonly scale: number;
 }
 
-/** The denominator of |H|² as a product of sections, 1 at 0 Hz. */
-export class Sections {
-  private readonly sections: readonly Section[];
+/** One factor of a numerator or denominator of |H|². */
+export type Section = SingleSection | DoubleSection | PairSection;
 
-  constructor(poles: readonly Root[]) {
-    this.sections = poles.filter((pole) => pole.im >= 0).map(sectionOf);
+/**
+ * The section of one real root.
+ *
+ * @example singleSection(-3).square // 9
+ */
+export function singleSection(re: number): SingleSection {
+  return { kind: 'single', square: re * re };
+}
+
+/**
+ * The section of two real roots.
+ *
+ * @example doubleSection(-3, 2).far // 9
+ */
+export function doubleSection(one: number, other: number): DoubleSection {
+  return { kind: 'double', near: Math.min(one * one, other * other), far: Math.max(one * one, other * other) };
+}
+
+/**
+ * The section of a conjugate pair.
+ *
+ * @param root either of the two.
+ * @example pairSection({ re: -1, im: 3 }).centre // 8
+ */
+export function pairSection({ re, im }: Root): PairSection {
+  return { kind: 'pair', re, im, centre: (im - re) * (im + re), width: 4 * re * re * im * im };
+}
+
+/**
+ * The value at a frequency in Hz. f − im is taken before anything is squared, so nothing is lost beside a resonance.
+ *
+ * @example sectionAt(pairSection({ re: 0, im: 3 }), 5) // 256
+ */
+export function sectionAt(section: Section, frequencyHz: number): number {
+  if (section.kind === 'pair') {
+    const { re, im, width } = section;
+    const offset = (frequencyHz - im) * (frequencyHz + im) + re * re;
+    return offset * offset + width;
   }
+  const u = frequencyHz * frequencyHz;
+  return section.kind === 'single' ? u + section.square : (u + section.near) * (u + section.far);
+}
 
-  /** ln of the product at u. */
-  logAt(u: number): number {
-    let logarithm = 0;
-    let product = 1;
-    for (const section of this.sections) {
-      product *= valueAt(section, u);
-      if (product > 1e150 || product < 1e-150) {
-        logarithm += Math.log(product);
-        product = 1;
-      }
-    }
-    return logarithm + Math.log(product);
-  }
+/**
+ * An enclosure of the values over [lowHz, highHz], finite.
+ *
+ * @example sectionRange(pairSection({ re: 0, im: 2 }), 0, 3).high // 25
+ */
+export function sectionRange(section: Section, lowHz: number, highHz: number): Enclosure {
+  const atLow = sectionAt(section, lowHz);
+  const atHigh = sectionAt(section, highHz);
+  if (section.kind !== 'pair') return { low: atLow, high: atHigh };
+  const inside = lowHz * lowHz < section.centre && section.centre < highHz * highHz;
+  return { low: inside ? section.width : Math.min(atLow, atHigh), high: Math.max(atLow, atHigh) };
+}
 
-  /** An enclosure of the logarithm over [low, high], factor by factor; high may be Infinity. */
-  logRange(low: number, high: number): Enclosure {
-    let least = 0;
-    let most = 0;
-    for (const section of this.sections) {
-      const atLow = valueAt(section, low);
-      const atHigh = valueAt(section, high);
-      const inside = section.pair && low < section.centre && section.centre < high;
-      least += Math.log(inside ? section.width / section.scale : Math.min(atLow, atHigh));
-      most += Math.log(Math.max(atLow, atHigh));
-    }
-    return { low: least, high: most };
-  }
-
-  /**
-   * An enclosure of the logarithm's derivative in u over a finite interval: the sum of each factor's exact range, met with the mean-value
-   * form, which is the tighter one where factors cancel, as they do in a ripple.
-   */
-  slopeRange(low: number, high: number): Enclosure {
-    const middle = 0.5 * (low + high);
-    let least = 0;
-    let most = 0;
-    let atMiddle = 0;
-    let leastBend = 0;
-    let mostBend = 0;
-    for (const section of this.sections) {
-      const slopes = section.pair ? pairSlopes(section, low, high) : realSlopes(section, low, high);
-      const bends = section.pair ? pairBends(section, low, high) : realBends(section, low, high);
-      least += slopes.low;
-      most += slopes.high;
-      leastBend += bends.low;
-      mostBend += bends.high;
-      atMiddle += section.pair ? pairSlope(middle - section.centre, section.width) : 1 / (middle + section.width);
-    }
-    const reach = 0.5 * (high - low) * Math.max(Math.abs(leastBend), Math.abs(mostBend));
-    return { low: Math.max(least, atMiddle - reach), high: Math.min(most, atMiddle + reach) };
+/**
+ * The slope d ln(section)/du at one u.
+ *
+ * @example sectionSlopeAt(singleSection(1), 3) // 0.25
+ */
+export function sectionSlopeAt(section: Section, u: number): number {
+  switch (section.kind) {
+    case 'single':
+      return 1 / (u + section.square);
+    case 'double':
+      return 1 / (u + section.near) + 1 / (u + section.far);
+    case 'pair':
+      return pairSlope(u - section.centre, section.width);
   }
 }
 
-function sectionOf({ re, im }: Root): Section {
-  if (im === 0) return { pair: false, centre: 0, width: re * re, scale: re * re };
-  const centre = (im - re) * (im + re);
-  const width = 4 * re * re * im * im;
-  const squared = re * re + im * im;
-  return { pair: true, centre, width, scale: squared * squared };
+/**
+ * Its exact range over [low, high] in u, finite; NaN or infinite where a null lies in it.
+ *
+ * @example sectionSlopes(singleSection(1), 0, 3).low // 0.25
+ */
+export function sectionSlopes(section: Section, low: number, high: number): Enclosure {
+  if (section.kind === 'pair') return pairSlopes(section, low, high);
+  return { low: sectionSlopeAt(section, high), high: sectionSlopeAt(section, low) };
 }
 
-function valueAt(section: Section, u: number): number {
-  if (!section.pair) return (u + section.width) / section.scale;
-  const offset = u - section.centre;
-  return (offset * offset + section.width) / section.scale;
+/**
+ * The range of the second derivative d² ln(section)/du² over [low, high] in u, finite; NaN or infinite where a null lies in it.
+ *
+ * @example sectionBends(singleSection(1), 0, 3).low // -1
+ */
+export function sectionBends(section: Section, low: number, high: number): Enclosure {
+  switch (section.kind) {
+    case 'single':
+      return { low: realBend(section.square, low), high: realBend(section.square, high) };
+    case 'double':
+      return {
+        low: realBend(section.near, low) + realBend(section.far, low),
+        high: realBend(section.near, high) + realBend(section.far, high),
+      };
+    case 'pair':
+      return pairBends(section, low, high);
+  }
+}
+
+function realBend(square: number, u: number): number {
+  return -1 / (u + square) ** 2;
 }
 
 /** d/du of ln((u − centre)² + width). */
@@ -99,7 +143,7 @@ function pairSlope(offset: number, width: number): number {
 }
 
 /** Its range: extremes ±1/√width stand at u − centre = ±√width. */
-function pairSlopes({ centre, width }: Section, low: number, high: number): Enclosure {
+function pairSlopes({ centre, width }: PairSection, low: number, high: number): Enclosure {
   const turn = Math.sqrt(width);
   const from = low - centre;
   const to = high - centre;
@@ -111,10 +155,6 @@ function pairSlopes({ centre, width }: Section, low: number, high: number): Encl
   };
 }
 
-function realSlopes({ width }: Section, low: number, high: number): Enclosure {
-  return { low: 1 / (high + width), high: 1 / (low + width) };
-}
-
 /** d²/du² of ln((u − centre)² + width). */
 function pairBend(offset: number, width: number): number {
   const sum = offset * offset + width;
@@ -122,7 +162,7 @@ function pairBend(offset: number, width: number): number {
 }
 
 /** Its range: 2/width at the centre, −1/(4·width) at u − centre = ±√(3·width). */
-function pairBends({ centre, width }: Section, low: number, high: number): Enclosure {
+function pairBends({ centre, width }: PairSection, low: number, high: number): Enclosure {
   const turn = Math.sqrt(3 * width);
   const from = low - centre;
   const to = high - centre;
@@ -133,8 +173,4 @@ function pairBends({ centre, width }: Section, low: number, high: number): Enclo
     low: turns ? -1 / (4 * width) : Math.min(atLow, atHigh),
     high: from < 0 && 0 < to ? 2 / width : Math.max(atLow, atHigh),
   };
-}
-
-function realBends({ width }: Section, low: number, high: number): Enclosure {
-  return { low: -1 / (low + width) ** 2, high: -1 / (high + width) ** 2 };
 }

@@ -3,6 +3,8 @@ import { FactorRatio } from './factor-ratio';
 import { dividedBy } from './interval-arithmetic';
 import { inverse } from './response-algebra';
 import type { Enclosure, Response } from './response';
+import type { SearchOptions } from './search/extreme';
+import { nestedEvaluationLimit } from './search/frontier';
 import { largestOverBands } from './search/largest-over-bands';
 
 /** Which extreme is wanted. */
@@ -52,8 +54,8 @@ export function stretchedRatio(response: Response, referenceHz: number, factors:
   return sense === 'largest' ? ratio : turnedOver(ratio);
 }
 
-/** The gap of a nested search, in dB: far below that of the search it serves. */
-const nestedGapDb = 1e-5;
+/** A nested search: its gap in dB lies far below that of the search it serves. */
+const nested: SearchOptions = { gapDb: 1e-5, evaluationLimit: nestedEvaluationLimit };
 
 function checkFactors({ low, high }: Enclosure): void {
   if (!(low > 0 && low <= high && high < Infinity))
@@ -101,7 +103,7 @@ class Stretched implements StretchedResponse {
   private most(lowHz: number, highHz: number): number {
     const { response } = this;
     if (response.turnsHz !== undefined) return response.bounds(lowHz, highHz).high;
-    return largestOverBands(response, [{ low: lowHz, high: highHz }], { gapDb: nestedGapDb })?.logGain ?? -Infinity;
+    return largestOverBands(response, [{ low: lowHz, high: highHz }], nested)?.logGain ?? -Infinity;
   }
 
   private worstHz(frequencyHz: number): number {
@@ -109,7 +111,7 @@ class Stretched implements StretchedResponse {
     const highHz = frequencyHz / this.factors.low;
     // Without a turning point in between the worst is at an end, which needs no search.
     if (this.response.turnsHz?.length === 0) return this.response.logGain(highHz) > this.response.logGain(lowHz) ? highHz : lowHz;
-    return largestOverBands(this.response, [{ low: lowHz, high: highHz }], { gapDb: nestedGapDb })?.frequencyHz ?? frequencyHz;
+    return largestOverBands(this.response, [{ low: lowHz, high: highHz }], nested)?.frequencyHz ?? frequencyHz;
   }
 }
 

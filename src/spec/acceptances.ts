@@ -20,8 +20,9 @@ export function findAcceptances(text: string, inScalar: (offset: number) => bool
     from = at + mark.length;
     const index = commentStart(text, at);
     if (index === null || inScalar(index)) continue;
-    const span = { start: index, end: lineOf(text, index).end };
-    from = Math.max(from, span.end);
+    const { end } = lineOf(text, index);
+    from = Math.max(from, end);
+    const span = { start: index, end: index + text.slice(index, end).trimEnd().length };
     const read = acceptanceOf(text.slice(at + mark.length, span.end).trim());
     if ('message' in read) found.problems.push(errorAt(span, 'syntax', read.message));
     // Comments that are stacked speak for the same line; finding it once keeps this linear.

@@ -56,21 +56,34 @@ export function definedNames({ names, resolved }: Inside): DefinedName[] {
 const definedSpaces: readonly DefinedName['space'][] = ['clocks', 'filters', 'sources', 'masks'];
 
 /** Keys of the file, and names of clocks, filters and channels, that stand a second time; offsets into the file. */
-export function problemsOfTwins(slices: readonly PlacedSlice[]): LocalProblem[] {
+export function problemsOfTwins(slices: readonly PlacedSlice[], names: Names): LocalProblem[] {
   const problems: LocalProblem[] = [];
-  const seen = new Set<string>();
-  const note = (space: string, pair: Pair, base: number): void => {
-    const mark = `${space} ${pair.key}`;
-    if (seen.has(mark)) problems.push(twin(space, pair, base));
-    seen.add(mark);
+  const keys = new Set<string>();
+  const anyTwice = (map: ReadonlyMap<string, PlacedName<unknown>>): boolean => {
+    for (const { twice } of map.values()) if (twice) return true;
+    return false;
   };
   for (const { slice, reading } of slices) {
-    if (slice.kind === 'top') for (const pair of reading.pairs) note('', pair, slice.start);
-    for (const { pair } of reading.clocks) note('clocks', pair, slice.start);
-    for (const { pair } of reading.filters) note('filters', pair, slice.start);
-    for (const { pair } of reading.sources) note('sources', pair, slice.start);
-    for (const { pair } of reading.masks) note('masks', pair, slice.start);
-    for (const { pair } of reading.channels) note('channels', pair, slice.start);
+    if (slice.kind === 'channel') continue;
+    for (const pair of reading.pairs) {
+      if (keys.has(pair.key)) problems.push(twin('', pair, slice.start));
+      keys.add(pair.key);
+    }
+  }
+  for (const space of ['clocks', 'filters', 'sources', 'masks', 'channels'] as const) {
+    if (anyTwice(names[space])) problems.push(...twinsOf(space, slices));
+  }
+  return problems;
+}
+
+function twinsOf(space: keyof Names, slices: readonly PlacedSlice[]): LocalProblem[] {
+  const problems: LocalProblem[] = [];
+  const seen = new Set<string>();
+  for (const { slice, reading } of slices) {
+    for (const { name, pair } of reading[space]) {
+      if (seen.has(name)) problems.push(twin(space, pair, slice.start));
+      seen.add(name);
+    }
   }
   return problems;
 }

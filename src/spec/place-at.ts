@@ -19,7 +19,7 @@ export interface PlaceAt {
   readonly about: Key | null;
 }
 
-/** The innermost place at an offset; in a channel's blank space the channel, with an empty span; null outside everything. */
+/** The innermost place at an offset; behind a channel's last value the channel, with an empty span; null outside everything. */
 export function placeAt(reading: Reading, offset: number): PlaceAt | null {
   const placed = sliceAt(insideOf(reading).slices, offset);
   if (placed === null) return null;

@@ -11,6 +11,7 @@ import type { Inside, PlacedSlice } from './inside';
 import { problemsOf } from './problems';
 import type { ChannelEntry, Reading } from './reading';
 import { Resolver } from './resolver';
+import type { Resolved } from './resolver';
 import { readSlices } from './read-slices';
 import { sliceAt } from './slices/slice-at';
 import { scan } from './slices/scan';
@@ -36,12 +37,17 @@ export function read(text: string, previous?: Reading, files: FileSource = noFil
   for (const name of names.channels.keys()) resolver.resolve(name);
   const inside: Inside = { slices: placed, names, lists, resolved: resolver.resolved, shelved: shelf.shelved };
   const accepted = findAcceptances(text, (offset) => isInScalar(placed, offset));
+  const problems = problemsOf(text, inside, faults, [...accepted.problems, ...problemsOfTwins(placed, names), ...outside.problems]);
+  // No channel is whole that has an error of any kind in its text.
+  const faulty = new Set(
+    problems.flatMap(({ severity, channel }) => (severity === 'error' && channel !== null ? [channel] : [])),
+  );
   const shown: Reading = {
     text,
     title: placed.find(({ reading }) => reading.title !== null)?.reading.title ?? null,
-    entries: [...names.channels.keys()].map((name) => entryOf(name, inside)),
+    entries: [...names.channels.keys()].map((name) => entryOf(name, inside.resolved.get(name), faulty.has(name))),
     names: definedNames(inside),
-    problems: problemsOf(text, inside, faults, [...accepted.problems, ...problemsOfTwins(placed), ...outside.problems]),
+    problems,
     acceptances: accepted.acceptances,
     paths: shelf.paths,
     counts: { slices: slices.length, slicesRead: count, channelsResolved: resolver.count },
@@ -49,14 +55,13 @@ export function read(text: string, previous?: Reading, files: FileSource = noFil
   return new SpecReading(shown, inside);
 }
 
-function entryOf(name: string, { names, resolved }: Inside): ChannelEntry {
-  const resolution = resolved.get(name)?.resolution;
-  const twice = names.channels.get(name)?.twice === true;
+function entryOf(name: string, resolved: Resolved | undefined, isFaulty: boolean): ChannelEntry {
+  const resolution = resolved?.resolution;
   return {
     name,
     direction: resolution?.direction ?? null,
     ref: resolution?.ref ?? null,
-    channel: twice ? null : (resolution?.channel ?? null),
+    channel: isFaulty ? null : (resolution?.channel ?? null),
   };
 }
 

@@ -29,10 +29,10 @@ export interface ParsedSlice {
 }
 
 /** No legal spec nests deeper than a dozen levels; beyond this many nothing is read, so that no walk can run out of stack. */
-export const deepest = 64;
+const deepest = 64;
 
 // Running bracket depth that the parser still takes in its stride.
-const deepestBrackets = 1000;
+const deepestBrackets = 200;
 
 /** Parses a text that has no document markers; never throws. */
 export function parseSlice(text: string): ParsedSlice {
@@ -73,7 +73,7 @@ function parsed(text: string): ParsedSlice {
   };
 }
 
-/** Quotes and comments are not looked at: a legal spec does not hold a thousand more opening than closing brackets in them either. */
+/** Quotes and comments are not looked at: a legal spec does not hold that many more opening than closing brackets in them either. */
 function bracketsTooDeep(text: string): Oddity | null {
   let depth = 0;
   for (let at = 0; at < text.length; at += 1) {

@@ -1,7 +1,7 @@
 /** Text to findings for whole files and for one edit, beside the bare `yaml` parse of the same text. */
 import { parseDocument } from 'yaml';
-import { createFigureStore } from '../../src/analysis';
-import { judge } from '../../src/findings';
+
+import { createJudgeStore, judge } from '../../src/findings';
 import { read } from '../../src/spec';
 import { medians, report } from './ratio';
 import { editedText, specText } from './spec-text';
@@ -19,8 +19,8 @@ function whole(what: string, text: string, goal: number, judgementGoal: number):
   const reading = read(text);
   const times = medians({
     parse: () => parseDocument(text, { uniqueKeys: false }),
-    all: () => judge(read(text), createFigureStore()),
-    judged: () => judge(reading, createFigureStore()),
+    all: () => judge(read(text), createJudgeStore()),
+    judged: () => judge(reading, createJudgeStore()),
   });
   const parsed = `(yaml ${times.parse.toFixed(0)} ms)`;
   report(`${what}: text to findings / yaml`, times.all / times.parse, goal, parsed);
@@ -29,7 +29,7 @@ function whole(what: string, text: string, goal: number, judgementGoal: number):
 
 function oneEdit(): void {
   const text = specText(channels);
-  const store = createFigureStore();
+  const store = createJudgeStore();
   let reading = read(text);
   judge(reading, store);
   const times = medians(

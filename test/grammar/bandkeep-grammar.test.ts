@@ -50,7 +50,7 @@ describe('the TextMate grammar', () => {
     const text = 'channels:\n  bearing-x:\n    filter: pick-up guard\n    like: bearing-y';
     assert.deepEqual(scopes(text, 'channels', 'bearing-x', 'filter', 'pick-up guard', 'bearing-y'), [
       'keyword.other.section',
-      'entity.name.section',
+      'entity.name.type',
       'entity.name.tag',
       'variable.other.name',
       'variable.other.name',
@@ -60,10 +60,10 @@ describe('the TextMate grammar', () => {
   it('does not take a key inside a channel for the name of a channel', () => {
     const text = 'channels:\n   ice pulse:\n      limits:\n         alias: −96 dBFS\n   second:\n      bits: 16';
     assert.deepEqual(scopes(text, 'ice pulse', 'limits', 'alias', 'second', 'bits'), [
-      'entity.name.section',
+      'entity.name.type',
       'entity.name.tag',
       'entity.name.tag',
-      'entity.name.section',
+      'entity.name.type',
       'entity.name.tag',
     ]);
   });
@@ -78,7 +78,7 @@ describe('the TextMate grammar', () => {
   });
 
   it('knows the words of the language only as whole values', () => {
-    assert.equal(scopes('hold: zero-order', 'zero-order')[0], 'support.constant');
+    assert.equal(scopes('hold: zero-order', 'zero-order')[0], 'support.constant.property-value');
     assert.equal(scopes('name: capture of ice', 'capture of ice')[0], 'string.unquoted');
   });
 

@@ -89,20 +89,22 @@ describe('the server process', () => {
     child.stdout.on('data', (chunk: Buffer) => (out = Buffer.concat([out, chunk])));
     const exited = codeOf(child);
     const textDocument = { uri: 'file:///gate.bandkeep.yaml', languageId: 'bandkeep', version: 1, text: passingSpec };
-    for (const message of [
-      { id: 1, method: 'initialize', params: { processId: null, rootUri: null, capabilities: {} } },
-      { method: 'initialized', params: {} },
-      { method: 'textDocument/didOpen', params: { textDocument } },
-      { id: 2, method: 'textDocument/hover', params: { textDocument, position: { line: 17, character: 12 } } },
-      { id: 3, method: 'shutdown' },
-      { method: 'exit' },
-    ]) {
+    const line = passingSpec.split('\n').findIndex((each) => each.startsWith('    rate:'));
+    const send = (message: object): void => {
       const body = Buffer.from(JSON.stringify({ jsonrpc: '2.0', ...message }));
-      child.stdin.write(`Content-Length: ${body.length}\r\n\r\n`);
-      child.stdin.write(body);
-    }
+      child.stdin.write(Buffer.concat([Buffer.from(`Content-Length: ${body.length}\r\n\r\n`), body]));
+    };
+    // All at once, without waiting for an answer: what comes before the server has loaded all of itself must not be lost.
+    send({ id: 1, method: 'initialize', params: { processId: null, rootUri: null, capabilities: {} } });
+    send({ method: 'initialized', params: {} });
+    send({ method: 'textDocument/didOpen', params: { textDocument } });
+    send({ id: 2, method: 'textDocument/hover', params: { textDocument, position: { line, character: 4 } } });
+    send({ id: 3, method: 'shutdown' });
+    while (!out.includes('"id":3')) await once(child.stdout, 'data');
+    send({ method: 'exit' });
     assert.equal(await exited, 0);
     const answers = messagesIn(out);
+    assert.match(JSON.stringify(answers.find(({ id }) => id === 2)), /64 kHz/);
     assert.deepEqual(answers.flatMap((message) => (message.id === undefined ? [] : [message.id])).sort(), [1, 2, 3]);
   });
 });

@@ -1,7 +1,10 @@
 /** Requests over the wire: hover, completion, outline, quick fixes, our own ones, and those that make no sense. */
 import assert from 'node:assert/strict';
 import {
+  CancellationToken,
+  CancellationTokenSource,
   MarkupContent,
+  type CodeAction,
   type CompletionList,
   type DocumentSymbol,
   type Hover,
@@ -10,7 +13,7 @@ import {
 import type { LocateResult, PictureResult, PlaceAtResult } from '../../src/protocol/requests';
 import { exampleText } from '../support/examples';
 import { buildServer, LanguageClient, plainEditor, pullingEditor, type ClientDocument } from '../support/language-client';
-import { passingSpec } from '../support/spec-texts';
+import { manyChannels, passingSpec } from '../support/spec-texts';
 
 describe('requests over LSP', () => {
   let server = '';
@@ -196,6 +199,33 @@ describe('requests over LSP', () => {
       await assert.rejects(client.connection.sendRequest(method, params), { code: -32602 }, method);
     }
     assert.deepEqual(await client.pull(document), []);
+  });
+
+  describe('that take long', () => {
+    const broken = manyChannels(4).replaceAll('level: -40 dBFS', 'level: 0 dBFS').replaceAll('alias: -80', 'alias: -140');
+    const whole = { start: { line: 0, character: 0 }, end: { line: 1000, character: 0 } };
+    const ask = (document: ClientDocument, token?: CancellationToken): Promise<CodeAction[]> => {
+      const params = { textDocument: { uri: document.uri }, range: whole, context: { diagnostics: [] } };
+      return client.connection.sendRequest('textDocument/codeAction', params, token ?? CancellationToken.None);
+    };
+
+    it('are answered with what there is when they are cancelled', async () => {
+      const document = await client.open(broken);
+      const source = new CancellationTokenSource();
+      const asked = ask(document, source.token);
+      source.cancel();
+      const actions = await asked;
+      assert.ok(actions.filter(({ title }) => title.startsWith('Accept')).length >= 4);
+    });
+
+    it('are answered with a refusal when the text changes meanwhile', async () => {
+      const document = await client.open(broken);
+      await client.pull(document);
+      const asked = assert.rejects(ask(document), { code: -32801 });
+      await document.replace('title: Many gauges', 'title: Four gauges');
+      await asked;
+      assert.ok((await ask(document)).some(({ isPreferred }) => isPreferred === true));
+    });
   });
 
   it('find nothing in a document that is not open', async () => {

@@ -12,6 +12,9 @@ export interface BruteForceAnswer {
   readonly imageRelative?: number;
 }
 
+/** The script. */
+export const bruteForceScript = join(import.meta.dirname, '..', 'brute-force', 'channel.py');
+
 /** Whether Python with numpy is here; the script needs nothing else. */
 export function hasBruteForce(): boolean {
   return spawnSync('python3', ['-c', 'import numpy']).status === 0;
@@ -19,8 +22,7 @@ export function hasBruteForce(): boolean {
 
 /** Runs the script on a channel. */
 export function bruteForce(channel: Channel): BruteForceAnswer {
-  const script = join(import.meta.dirname, '..', 'brute-force', 'channel.py');
-  const run = spawnSync('python3', [script], { input: JSON.stringify(describeChannel(channel)), encoding: 'utf8' });
+  const run = spawnSync('python3', [bruteForceScript], { input: JSON.stringify(describeChannel(channel)), encoding: 'utf8' });
   if (run.status !== 0) throw new Error(run.stderr);
   return JSON.parse(run.stdout) as BruteForceAnswer;
 }

@@ -9,8 +9,6 @@ export const viewType = 'bandkeep.panel';
 /** What a page tells its owner. */
 export interface PageEvents {
   message(message: PageMessage): void;
-  /** It came to the front again. */
-  shown(): void;
   closed(): void;
   /** Something arrived that no page of ours would say. */
   refused(): void;
@@ -33,13 +31,14 @@ export class Page {
   /** A page that the editor has brought back after a reload. */
   static adopt(view: vscode.WebviewPanel, extensionUri: vscode.Uri, events: PageEvents): Page {
     const files = vscode.Uri.joinPath(extensionUri, 'dist');
+    view.iconPath = {
+      light: vscode.Uri.joinPath(extensionUri, 'media', 'file-light.svg'),
+      dark: vscode.Uri.joinPath(extensionUri, 'media', 'file-dark.svg'),
+    };
     view.webview.options = { enableScripts: true, enableForms: false, enableCommandUris: false, localResourceRoots: [files] };
     view.webview.onDidReceiveMessage((message: unknown) => {
       if (isPageMessage(message)) events.message(message);
       else events.refused();
-    });
-    view.onDidChangeViewState(() => {
-      if (view.visible) events.shown();
     });
     view.onDidDispose(() => {
       events.closed();
@@ -63,7 +62,7 @@ export class Page {
     this.view.reveal(undefined, true);
   }
 
-  /** Nothing can be said to a hidden page; it asks for the newest once it is shown. */
+  /** Nothing can be said to a hidden page; the workbench makes it anew when it is shown, and it then says `ready`. */
   say(message: HostMessage): void {
     if (this.view.visible) void this.view.webview.postMessage(message);
   }

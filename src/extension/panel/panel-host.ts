@@ -83,9 +83,6 @@ export class PanelHost implements vscode.Disposable {
           this.log.error(`The panel's "${message.kind}" failed: ${String(error)}`);
         });
       },
-      shown: () => {
-        this.repeat();
-      },
       closed: () => {
         this.page = null;
         this.subject = null;

@@ -14,5 +14,5 @@ import { checkFamily, mirrored } from './low-pass';
 export function butterworth(order: number, cornerHz: number): Filter {
   checkFamily(order, cornerHz);
   const poles = mirrored(order, (angle) => ({ re: -cornerHz * Math.sin(angle), im: cornerHz * Math.cos(angle) }));
-  return { poles, gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: [] };
+  return { poles, zeros: [], gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: [] };
 }

@@ -1,6 +1,6 @@
 /** Chebyshev (type I) low-pass filters: equal ripple in the passband, poles on an ellipse. */
 import type { Filter } from '../filter';
-import { checkFamily, mirrored } from './low-pass';
+import { checkDb, checkFamily, epsilonOf, mirrored } from './low-pass';
 
 /** What the corner frequency names: the half-power point, or the last frequency at which the loss equals the ripple. */
 export type ChebyshevCorner = 'half-power' | 'ripple';
@@ -19,14 +19,15 @@ export type ChebyshevCorner = 'half-power' | 'ripple';
  */
 export function chebyshev(order: number, cornerHz: number, rippleDb: number, cornerAt: ChebyshevCorner): Filter {
   checkFamily(order, cornerHz);
-  if (!(rippleDb > 0) || !Number.isFinite(rippleDb)) throw new RangeError(`A ripple must be above 0 dB, not ${rippleDb}.`);
-  const epsilon = Math.sqrt(Math.expm1((rippleDb * Math.LN10) / 10));
+  checkDb('ripple', rippleDb);
+  const epsilon = epsilonOf(rippleDb);
   const edgeHz = cornerAt === 'ripple' ? cornerHz : cornerHz / halfPowerRatio(order, epsilon);
   const a = Math.asinh(1 / epsilon) / order;
   const across = edgeHz * Math.sinh(a);
   const along = edgeHz * Math.cosh(a);
   return {
     poles: mirrored(order, (angle) => ({ re: -across * Math.sin(angle), im: along * Math.cos(angle) })),
+    zeros: [],
     gainAt: { frequencyHz: 0, gain: order % 2 === 1 ? 1 : 10 ** (-rippleDb / 20) },
     turnsHz: turns(order, edgeHz),
   };

@@ -8,6 +8,21 @@ export function checkFamily(order: number, cornerHz: number): void {
     throw new RangeError(`A corner must be a frequency above 0 Hz, not ${cornerHz}.`);
 }
 
+/** Throws unless a ripple or an attenuation is a finite number of dB above 0. */
+export function checkDb(what: string, db: number): void {
+  if (!(db > 0) || !Number.isFinite(db)) throw new RangeError(`The ${what} must be above 0 dB, not ${db}.`);
+}
+
+/**
+ * ε of a ripple or an attenuation: √(10^(dB/10) − 1).
+ *
+ * @param db > 0.
+ * @example epsilonOf(40) // 99.9949999
+ */
+export function epsilonOf(db: number): number {
+  return Math.sqrt(Math.expm1((db * Math.LN10) / 10));
+}
+
 /**
  * Poles at the angles π(2i + 1)/(2·order) from the imaginary axis: the upper half as `poleAt` places it, its mirror image, and the real one.
  *

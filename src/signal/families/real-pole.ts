@@ -12,5 +12,5 @@ import { checkFamily } from './low-pass';
  */
 export function realPole(cornerHz: number): Filter {
   checkFamily(1, cornerHz);
-  return { poles: [{ re: -cornerHz, im: 0 }], gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: [] };
+  return { poles: [{ re: -cornerHz, im: 0 }], zeros: [], gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: [] };
 }

@@ -5,6 +5,8 @@ import type { Enclosure, Response } from '../response';
 export interface SearchOptions {
   /** The gap at which a result counts as proved, in dB; 0.001 unless given. */
   readonly gapDb?: number;
+  /** After how many evaluations it gives up and reports the gap as it stands. */
+  readonly evaluationLimit?: number;
 }
 
 /** A proved maximum. */

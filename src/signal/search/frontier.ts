@@ -9,7 +9,10 @@ export interface Node {
 }
 
 /** Past this many evaluations a search gives up and reports the gap as it stands; reached only where bounds do not tighten. */
-const evaluationLimit = 20_000;
+const evaluationLimit = 5_000;
+
+/** The same for a search that runs inside every evaluation of another: both limits multiply, and absurd input must still end soon. */
+export const nestedEvaluationLimit = 500;
 
 /** The open nodes as a heap, largest upper bound first, beside the best point so far. */
 export class Frontier {
@@ -23,7 +26,10 @@ export class Frontier {
   private readonly heap: Node[] = [];
   private settled = -Infinity;
 
-  constructor(private readonly gap: number) {}
+  constructor(
+    private readonly gap: number,
+    private readonly limit = evaluationLimit,
+  ) {}
 
   /** Takes note of an evaluated point. */
   note(logGain: number, frequencyHz: number, tag: number): void {
@@ -63,7 +69,7 @@ export class Frontier {
     for (;;) {
       const top = this.heap[0];
       if (top === undefined) return Math.max(this.best, this.settled);
-      if (top.upper <= this.best + this.gap || this.evaluations >= evaluationLimit) {
+      if (top.upper <= this.best + this.gap || this.evaluations >= this.limit) {
         return Math.max(this.best, this.settled, top.upper);
       }
       this.removeTop();

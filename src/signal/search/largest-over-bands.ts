@@ -19,7 +19,7 @@ import { curveOf, openInterval, type Curve } from './interval';
  */
 export function largestOverBands(response: Response, bands: readonly Enclosure[], options: SearchOptions = {}): Extreme | null {
   if (bands.length === 0) return null;
-  const frontier = new Frontier(toNepers(options.gapDb));
+  const frontier = new Frontier(toNepers(options.gapDb), options.evaluationLimit);
   const curve = curveOf(response, 0);
   for (const band of bands) {
     if (!(band.low >= 0 && band.low <= band.high))

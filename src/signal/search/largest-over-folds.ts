@@ -21,7 +21,7 @@ import { innerAxis, Sight, SightCurve } from './sight';
  */
 export function largestOverFolds(question: FoldQuestion, options: SearchOptions = {}): FoldExtreme | null {
   checkQuestion(question);
-  const frontier = new Frontier(toNepers(options.gapDb));
+  const frontier = new Frontier(toNepers(options.gapDb), options.evaluationLimit);
   const rungs: Rung[] = [];
   for (const band of question.bands) {
     for (const within of question.within ?? [everywhere]) {

@@ -34,7 +34,7 @@ export function quotes(text: string, start: number, end: number): CureText {
 }
 
 /** A text in quotes. */
-export function inQuotes(text: string): string {
+function inQuotes(text: string): string {
   return /["\\]/.test(text) ? `'${text.replaceAll("'", "''")}'` : `"${text}"`;
 }
 

@@ -47,6 +47,16 @@ function noColon(text: string, content: string, start: number): Diagnosis | null
   return cured(start, start + content.length, message, { title: 'Put a colon behind it', mends });
 }
 
+/** `wanted { band: 1 kHz .. 2 kHz }`, whose key YAML takes to be `wanted { band`. */
+export function noColonBeforeBracket(text: string, start: number, end: number): Diagnosis | null {
+  const key = /^[^\s"'{[:]+(?= *[{[])/.exec(text.slice(start, end))?.[0];
+  if (key === undefined) return null;
+  const at = start + key.length;
+  const mends = [{ start: at, end: at, newText: text.charAt(at) === ' ' ? ':' : ': ' }];
+  const message = `The colon behind \`${key}\` is missing.`;
+  return cured(start, contentEnd(text, start), message, { title: 'Put a colon behind it', mends });
+}
+
 /** Whether the next line with content is indented further than the one that begins at `start`. */
 function opensBlock(text: string, start: number): boolean {
   const indent = start - lineStart(text, start);

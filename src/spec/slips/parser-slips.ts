@@ -5,7 +5,7 @@ import type { ParsedSlice, ParserError } from '../yaml-tree';
 import { contentEnd, cured, lineStart, passed, spaces } from './diagnosis';
 import type { Diagnosis } from './diagnosis';
 import { betweenLevels, tooDeep } from './indent-slips';
-import { lineSlip, noSpaceBehindDash } from './line-slips';
+import { lineSlip, noColonBeforeBracket, noSpaceBehindDash } from './line-slips';
 import { closeQuote, unclosedBracket, unclosedQuote } from './open-slips';
 import { colonInText, commaBefore, reservedStart, spacedMinus } from './text-slips';
 
@@ -39,7 +39,7 @@ function inValue(text: string, tree: TreeNode | null, error: ParserError): Diagn
       return spacedMinus(text, at, around) ?? unexpected(text, error);
     case 'BLOCK_IN_FLOW':
     case 'BLOCK_AS_IMPLICIT_KEY':
-      return spacedMinus(text, at, around) ?? gluedDash(text, at) ?? colonInText(text, at, around) ?? tooDeep(text, at);
+      return spacedMinus(text, at, around) ?? gluedBracket(text, at) ?? colonInText(text, at, around) ?? tooDeep(text, at);
     case 'MULTILINE_IMPLICIT_KEY':
       return around === null ? null : spacedMinus(text, at, around);
     case 'MISSING_CHAR':
@@ -49,11 +49,11 @@ function inValue(text: string, tree: TreeNode | null, error: ParserError): Diagn
   }
 }
 
-/** `-{ tone: 3 kHz }`, of which the parser makes a key `-{ tone`. */
-function gluedDash(text: string, at: number): Diagnosis | null {
+/** `-{ tone: 3 kHz }` or `wanted { band: 3 kHz }`, of which the parser makes one long key. */
+function gluedBracket(text: string, at: number): Diagnosis | null {
   const line = lineStart(text, at);
-  const content = line + (/^[ \t]*/.exec(text.slice(line, at))?.[0].length ?? 0);
-  if (!/^-[[{"']/.test(text.slice(content, content + 2))) return null;
+  const content = line + (/^[ \t]*(?:- +)*/.exec(text.slice(line, at))?.[0].length ?? 0);
+  if (!/^-[[{"']/.test(text.slice(content, content + 2))) return noColonBeforeBracket(text, content, at);
   return noSpaceBehindDash(text.slice(content, contentEnd(text, content)), content);
 }
 

@@ -6,7 +6,7 @@ import { contentEnd, cured, quotes } from './diagnosis';
 import type { Diagnosis } from './diagnosis';
 
 /** Where the value that begins at `start` ends: at the end of the line, or inside brackets at the next comma or bracket. */
-export function valueEnd(text: string, start: number, around: TreeNode | null): number {
+function valueEnd(text: string, start: number, around: TreeNode | null): number {
   const end = contentEnd(text, start);
   if (around === null || !isFlow(text, around)) return end;
   const stop = text.slice(start, end).search(/[,\]}]/);

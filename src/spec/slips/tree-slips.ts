@@ -4,7 +4,7 @@ import { isFlow, visits } from '../tree-walk';
 import { vocabulary } from '../vocabulary';
 import { cured, passed, quotes } from './diagnosis';
 import type { Diagnosis } from './diagnosis';
-import { noSpaceBehindColon, noSpaceBehindDash } from './line-slips';
+import { noColonBeforeBracket, noSpaceBehindColon, noSpaceBehindDash } from './line-slips';
 import { spacedMinus } from './text-slips';
 
 /** All of them in one tree. */
@@ -35,6 +35,8 @@ function blockPairSlip(text: string, pair: Pair): Diagnosis | null {
   if (pair.value === null && !/^[ \t]*:/.test(text.slice(pair.keyEnd, pair.keyEnd + 80))) {
     return noSpaceBehindColon(text.slice(pair.keyStart, pair.keyEnd), pair.keyStart);
   }
+  const opened = noColonBeforeBracket(text, pair.keyStart, pair.keyEnd);
+  if (opened !== null) return opened;
   const { value } = pair;
   if (value?.form === 'scalar' && !value.quoted && text.slice(pair.keyEnd, value.start).includes('\n')) return gluedItem(value);
   return /^-[a-z]/.test(pair.key) && vocabulary.all.has(pair.key.slice(1)) ? noSpaceBehindDash(pair.key, pair.keyStart) : null;

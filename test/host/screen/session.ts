@@ -4,31 +4,17 @@ import { join } from 'node:path';
 import type { Browser, Frame, Page } from 'playwright-core';
 import { browse } from '../../../scripts/browse.mjs';
 import { scratchFolder } from '../../../scripts/scratch-folder.mjs';
-import {
-  installWorkbench,
-  startWorkbench,
-  workbenchAddress,
-  writeMachineSettings,
-  type Workbench,
-} from '../../../scripts/workbench.mjs';
+import { installWorkbench, startWorkbench, workbenchAddress, type Workbench } from '../../../scripts/workbench.mjs';
 
 const root = join(__dirname, '..', '..', '..');
 
-/** The workbench's own themes that the panel is looked at in. */
+/** The workbench's own themes that the panel is looked at in, by the class that each puts on the body of a panel. */
 export const themes = {
-  dark: 'Default Dark Modern',
-  light: 'Default Light Modern',
-  'high-contrast': 'Default High Contrast',
-  'high-contrast-light': 'Default High Contrast Light',
+  'vscode-dark': 'Dark Modern',
+  'vscode-light': 'Light Modern',
+  'vscode-high-contrast': 'Dark High Contrast',
+  'vscode-high-contrast-light': 'Light High Contrast',
 } as const;
-
-/** The class that a theme's kind puts on the body of a panel. */
-export const themeClasses: Record<keyof typeof themes, string> = {
-  dark: 'vscode-dark',
-  light: 'vscode-light',
-  'high-contrast': 'vscode-high-contrast',
-  'high-contrast-light': 'vscode-high-contrast-light',
-};
 
 /** A running workbench with a browser looking at it. */
 export class Session {
@@ -38,10 +24,10 @@ export class Session {
   private constructor(
     private readonly workbench: Workbench,
     private readonly browser: Browser,
-    private readonly data: string,
     readonly folder: string,
     readonly page: Page,
   ) {
+    page.setDefaultTimeout(60_000);
     page.on('console', (message) => {
       if (message.type() === 'error') this.complaints.push(message.text());
     });
@@ -52,10 +38,10 @@ export class Session {
     await installWorkbench();
     const data = join(root, 'out', 'scratch', `${name}-data`);
     rmSync(data, { recursive: true, force: true });
-    const workbench = await startWorkbench({ data, settings: settingsFor('dark') });
+    const workbench = await startWorkbench({ data, settings });
     const browser = await browse();
     const page = await browser.newPage({ viewport: { width: 1500, height: 950 } });
-    return new Session(workbench, browser, data, scratchFolder(name), page);
+    return new Session(workbench, browser, scratchFolder(name), page);
   }
 
   /** Opens a spec and waits until its channel's line is on the screen. */
@@ -79,10 +65,16 @@ export class Session {
     return frame;
   }
 
-  /** Changes the theme and waits until the panel has it. */
+  /** Chooses a theme from the workbench's own list, as a person does, and waits until the panel wears it. */
   async choose(theme: keyof typeof themes): Promise<void> {
-    writeMachineSettings(this.data, settingsFor(theme));
-    await (await this.panel()).locator(`body.${themeClasses[theme]}`).waitFor();
+    await this.page.keyboard.press('Control+k');
+    await this.page.keyboard.press('Control+t');
+    const list = this.page.locator('.quick-input-widget');
+    await list.locator('input').first().fill(themes[theme]);
+    await list.locator('.monaco-list-row.focused').getByText(themes[theme], { exact: true }).first().waitFor();
+    await this.page.keyboard.press('Enter');
+    await list.waitFor({ state: 'hidden' });
+    await (await this.panel()).locator(`body.${theme}`).waitFor();
   }
 
   /** Stores what is on the screen under test-results/screenshots. */
@@ -100,12 +92,10 @@ export class Session {
   }
 }
 
-function settingsFor(theme: keyof typeof themes): Record<string, unknown> {
-  return {
-    'workbench.colorTheme': themes[theme],
-    'workbench.secondarySideBar.defaultVisibility': 'hidden',
-    'workbench.tips.enabled': false,
-    'editor.minimap.enabled': false,
-    'chat.commandCenter.enabled': false,
-  };
-}
+/** Nothing in the way of what is looked at. */
+const settings = {
+  'workbench.colorTheme': 'Default Dark Modern',
+  'window.autoDetectColorScheme': false,
+  'workbench.tips.enabled': false,
+  'editor.minimap.enabled': false,
+};

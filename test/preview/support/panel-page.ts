@@ -1,5 +1,6 @@
 /** The built page in a real browser under its own strict policy, with a stand-in for the workbench that records what the page says. */
 import { join } from 'node:path';
+import { pathToFileURL } from 'node:url';
 import { build } from 'esbuild';
 import { chromium } from 'playwright-core';
 import type { Browser, BrowserContext, Page } from 'playwright-core';
@@ -32,9 +33,9 @@ export interface PanelPage {
 
 /** Builds the page as the product does and starts a browser. */
 export async function openBrowser(): Promise<PanelBrowser> {
-  // @ts-expect-error: a script without types.
-  const scripts = (await import('../../../scripts/find-browser.mjs')) as { findBrowser: () => Promise<object> };
   const root = join(__dirname, '..', '..', '..');
+  const script = join(root, 'scripts', 'find-browser.mjs');
+  const { findBrowser } = (await import(pathToFileURL(script).href)) as { findBrowser: () => Promise<object> };
   const built = await build({
     entryPoints: [join(root, 'src/preview/main.ts'), join(root, 'src/preview/panel.css')],
     bundle: true,
@@ -45,7 +46,7 @@ export async function openBrowser(): Promise<PanelBrowser> {
     write: false,
   });
   const files = new Map(built.outputFiles.map((file) => [file.path.endsWith('.css') ? '/panel.css' : '/panel.js', file.text]));
-  return { browser: await chromium.launch({ ...(await scripts.findBrowser()), headless: true }), files };
+  return { browser: await chromium.launch({ ...(await findBrowser()), headless: true }), files };
 }
 
 /** Opens a fresh page in a theme. */

@@ -59,6 +59,7 @@ const outers: readonly Response[] = [
       { re: -400, im: -333e3 },
       { re: -2e3, im: 0 },
     ],
+    zeros: [],
     gainAt: { frequencyHz: 0, gain: 1 },
     turnsHz: null,
   }),

@@ -161,7 +161,7 @@ function twoRipples(): HardCase {
 export const betweenPointsHz = 200 * 4321.5;
 
 function betweenPoints(): HardCase {
-  const filter: Filter = { poles: pair(-1.5, betweenPointsHz), gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: null };
+  const filter: Filter = { poles: pair(-1.5, betweenPointsHz), zeros: [], gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: null };
   const power = filterPower(filter);
   return {
     name: 'a resonance 3 Hz wide between the points of a 10,000-point grid over 2 MHz',
@@ -174,6 +174,7 @@ function betweenPoints(): HardCase {
 function deepResonance(): HardCase {
   const filter: Filter = {
     poles: [...pair(-3, 1.23456e6), { re: -30e3, im: 0 }],
+    zeros: [],
     gainAt: { frequencyHz: 0, gain: 1 },
     turnsHz: null,
   };
@@ -253,7 +254,7 @@ function stretchedRipple(): HardCase {
 }
 
 function approachedAtInfinity(): HardCase {
-  const filter: Filter = { poles: pair(-1e3, 40e3), gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: null };
+  const filter: Filter = { poles: pair(-1e3, 40e3), zeros: [], gainAt: { frequencyHz: 0, gain: 1 }, turnsHz: null };
   const power = filterPower(filter);
   return overFolds({
     name: 'a gain that rises in every fold and is only approached at infinity',

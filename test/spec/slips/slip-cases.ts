@@ -155,6 +155,13 @@ export const slipCases: Readonly<Record<string, SlipCase>> = {
     cured: 'a:\n  b: 1\n  rate: 51 kHz\n  c: 2\n',
     reads: { a: { b: '1', rate: '51 kHz', c: '2' } },
   },
+  'a missing colon in front of a brace': {
+    text: 'a:\n  wanted { band: 1 kHz, level: 2 }\n  c: 2\n',
+    at: 'wanted { band: 1 kHz, level: 2 }',
+    says: /colon behind `wanted`/,
+    cured: 'a:\n  wanted: { band: 1 kHz, level: 2 }\n  c: 2\n',
+    reads: { a: { wanted: { band: '1 kHz', level: '2' }, c: '2' } },
+  },
   'a missing colon above a block': {
     text: 'a:\n  limits\n    x: 1\n  c: 2\n',
     at: 'limits',

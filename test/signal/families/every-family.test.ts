@@ -1,0 +1,158 @@
+/** Every family, orders 1 to 20, against arithmetic of 50 digits and more (test/reference/make-filter-vectors.py). */
+import assert from 'node:assert/strict';
+import { designFilter, type CornerAt, type FilterFamily } from '../../../src/signal/families/design-filter';
+import { filterResponse, type Filter } from '../../../src/signal/filter';
+import { readFilterVectors, type StoredFilter } from '../../reference/filter-vectors';
+import { assertGainAndDelay, assertRoots } from '../../support/stored-filters';
+import { assertClose, assertWithin, filterRelative } from '../../support/tolerance';
+
+const vectors = readFilterVectors();
+const toDb = (logGain: number): number => (20 / Math.LN10) * logGain;
+
+const groups: readonly (readonly [FilterFamily, CornerAt, readonly StoredFilter[], number])[] = [
+  ['inverse-chebyshev', 'stopband', vectors.inverseChebyshev, 4],
+  ['elliptic', 'ripple', vectors.elliptic, 8],
+  ['bessel', 'half-power', vectors.bessel, 1],
+  ['legendre', 'half-power', vectors.legendre, 1],
+  ['gaussian', 'half-power', vectors.gaussian, 1],
+];
+
+function design(family: FilterFamily, stored: StoredFilter, corners: number, cornerAt: CornerAt): Filter {
+  const { order, ripple = null, attenuation = null } = stored;
+  return designFilter({
+    family,
+    order,
+    kind: 'lowpass',
+    corners,
+    cornerAt,
+    rippleDb: ripple,
+    attenuationDb: attenuation,
+    gain: 1,
+  });
+}
+
+function nameOf(family: FilterFamily, { order, ripple, attenuation }: StoredFilter): string {
+  return [
+    family,
+    `order ${order}`,
+    ripple === undefined ? [] : `${ripple} dB`,
+    attenuation === undefined ? [] : `${attenuation} dB`,
+  ]
+    .flat()
+    .join(', ');
+}
+
+describe('every filter family', () => {
+  for (const [family, cornerAt, stored, sets] of groups) {
+    it(`${family} has the poles, zeros, gain and delay of 50-digit arithmetic for orders 1 to 20`, () => {
+      assert.equal(stored.length, sets * 20);
+      assert.deepEqual(
+        [...new Set(stored.map(({ order }) => order))],
+        Array.from({ length: 20 }, (_, index) => index + 1),
+      );
+      for (const one of stored) {
+        const filter = design(family, one, 1, cornerAt);
+        const name = nameOf(family, one);
+        assertRoots(filter.poles, one.poles, `pole of ${name}`);
+        assertRoots(filter.zeros, one.zeros, `zero of ${name}`);
+        assertGainAndDelay(filter, one, { grid: vectors.grid, edgeHz: 1, perSecond: 2 * Math.PI }, name);
+      }
+    });
+
+    it(`${family} is 10·log10(2) dB down at its corner unless the corner names something else`, () => {
+      for (const one of stored) {
+        const response = filterResponse(design(family, one, 14e3, 'half-power'));
+        // Only as steep as the edge is can a double of the frequency tell.
+        const steep = (one.stopEdgeLessOne ?? 1) < 1e-3 ? 1e-4 : 1e-8;
+        assertWithin(toDb(response.logGain(14e3)), -10 * Math.log10(2), steep, nameOf(family, one));
+        if (one.halfPower === undefined) continue;
+        const byEdge = design(family, one, 1000, cornerAt).poles;
+        design(family, one, 1000 * one.halfPower, 'half-power').poles.forEach((pole, index) => {
+          assertWithin(
+            Math.hypot(pole.re - byEdge[index]!.re, pole.im - byEdge[index]!.im) / Math.hypot(pole.re, pole.im),
+            0,
+            filterRelative,
+          );
+        });
+      }
+    });
+  }
+
+  it('keeps an elliptic filter beside a brick wall, where the edges are 2e−11 and less apart', () => {
+    assert.equal(vectors.tight.length, 6);
+    assert.ok(vectors.tight.some(({ stopEdgeLessOne }) => stopEdgeLessOne! < 2e-11));
+    for (const one of vectors.tight) {
+      const filter = design('elliptic', one, 1, 'ripple');
+      const name = nameOf('elliptic', one);
+      assertRoots(filter.poles, one.poles, `pole of ${name}`);
+      assertRoots(filter.zeros, one.zeros, `zero of ${name}`);
+      assertGainAndDelay(filter, one, { grid: vectors.tightGrid, edgeHz: 1, perSecond: 2 * Math.PI }, name);
+    }
+  });
+
+  it('puts the stop edge of an elliptic filter where its attenuation is first reached', () => {
+    for (const one of vectors.elliptic) {
+      const byRipple = design('elliptic', one, 1000, 'ripple').poles;
+      design('elliptic', one, 1000 * one.stopEdge!, 'stopband').poles.forEach((pole, index) => {
+        assertWithin(
+          Math.hypot(pole.re - byRipple[index]!.re, pole.im - byRipple[index]!.im) / Math.hypot(pole.re, pole.im),
+          0,
+          filterRelative,
+        );
+      });
+    }
+  });
+
+  it('turns exactly where its list says: passband between 0 dB and the ripple, stop band between nulls and the attenuation', () => {
+    for (const one of vectors.elliptic.filter(({ stopEdgeLessOne }) => stopEdgeLessOne! > 1e-5)) {
+      const filter = design('elliptic', one, 1, 'ripple');
+      const response = filterResponse(filter);
+      const levels = (filter.turnsHz ?? []).map((turn) => toDb(response.logGain(turn)));
+      assert.equal(levels.length, 2 * (one.order - 1));
+      levels.forEach((level, index) => {
+        const inside = index < one.order - 1;
+        const fromEdge = inside ? one.order - 2 - index : index - one.order + 1;
+        const expected = fromEdge % 2 === 0 ? (inside ? 0 : -Infinity) : -(inside ? one.ripple! : one.attenuation!);
+        assertWithin(level, expected, 1e-7, `${nameOf('elliptic', one)}, turn ${index}`);
+      });
+    }
+    for (const one of vectors.inverseChebyshev) {
+      const filter = design('inverse-chebyshev', one, 1, 'stopband');
+      const response = filterResponse(filter);
+      const levels = (filter.turnsHz ?? []).map((turn) => toDb(response.logGain(turn)));
+      assert.equal(levels.length, one.order - 1);
+      levels.forEach((level, index) => {
+        assertWithin(
+          level,
+          index % 2 === 0 ? -Infinity : -one.attenuation!,
+          1e-8,
+          `${nameOf('inverse-chebyshev', one)}, turn ${index}`,
+        );
+      });
+    }
+  });
+
+  it('never rises in the families that promise it, whatever the order', () => {
+    for (const [family, , stored] of groups.slice(2)) {
+      for (const one of stored) {
+        const response = filterResponse({ ...design(family, one, 1, 'half-power'), turnsHz: null });
+        let before = Infinity;
+        for (let i = 0; i <= 400; i += 1) {
+          const now = response.logGain(i / 100);
+          assert.ok(now <= before + 1e-12, `${nameOf(family, one)} rises at ${i / 100}`);
+          before = now;
+        }
+      }
+    }
+  });
+
+  it('gives a Bessel filter the delay that its corner names', () => {
+    for (const one of vectors.bessel) {
+      const byDelay = design('bessel', one, 1000, 'delay').poles;
+      design('bessel', one, 1000 * one.unitDelayHalfPower!, 'half-power').poles.forEach((pole, index) => {
+        assertClose(pole.re, byDelay[index]!.re, filterRelative);
+        assertClose(pole.im, byDelay[index]!.im, filterRelative);
+      });
+    }
+  });
+});
