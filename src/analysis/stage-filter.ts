@@ -1,6 +1,5 @@
 /** The poles of one stage, from the form in which the spec gives it. */
-import { butterworth } from '../signal/families/butterworth';
-import { chebyshev } from '../signal/families/chebyshev';
+import { designFilter } from '../signal/families/design-filter';
 import { realPole } from '../signal/families/real-pole';
 import type { Filter } from '../signal/filter';
 import type { FamilyForm, StageForm } from '../spec/channel';
@@ -23,12 +22,18 @@ export function stageFilter(form: StageForm): Filter {
   }
 }
 
-function familyFilter(form: FamilyForm): Filter {
-  const { family, filterKind, order, cornerHz, cornerAt, rippleDb } = form;
-  if (filterKind !== 'lowpass') throw notComputed(filterKind);
-  if (family === 'butterworth') return butterworth(order, cornerHz);
-  if (family !== 'chebyshev' || rippleDb === null) throw notComputed(family);
-  return chebyshev(order, cornerHz, rippleDb, cornerAt === 'ripple' ? 'ripple' : 'half-power');
+function familyFilter({
+  family,
+  filterKind,
+  order,
+  cornerHz,
+  upperCornerHz,
+  cornerAt,
+  rippleDb,
+  attenuationDb,
+}: FamilyForm): Filter {
+  const corners = upperCornerHz === null ? cornerHz : { low: cornerHz, high: upperCornerHz };
+  return designFilter({ family, kind: filterKind, order, corners, cornerAt, rippleDb, attenuationDb, gain: 1 });
 }
 
 const notComputed = (form: string) => new RangeError(`a stage that is not computed yet: ${form}`);

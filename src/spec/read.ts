@@ -10,6 +10,7 @@ import { SpecReading, insideOf, nothingRead } from './inside';
 import type { Inside, PlacedSlice } from './inside';
 import { problemsOf } from './problems';
 import type { ChannelEntry, Reading } from './reading';
+import { withoutNotComputed } from './resolve/not-computed';
 import { Resolver } from './resolver';
 import type { Resolved } from './resolver';
 import { readSlices } from './read-slices';
@@ -33,11 +34,15 @@ export function read(text: string, previous?: Reading, files: FileSource = noFil
   const shelf = new Shelf(files, before.shelved);
   const outside = outsideOf(placed, names, shelf);
   const lists = nameLists(names, outside, before.lists);
-  const resolver = new Resolver(definitionsOf(names, lists, placed, outside, shelf), before.resolved);
+  const resolver = new Resolver(definitionsOf(names, lists, placed, outside, shelf), before.resolved, withoutNotComputed);
   for (const name of names.channels.keys()) resolver.resolve(name);
   const inside: Inside = { slices: placed, names, lists, resolved: resolver.resolved, shelved: shelf.shelved };
   const accepted = findAcceptances(text, (offset) => isInScalar(placed, offset));
-  const problems = problemsOf(text, inside, faults, [...accepted.problems, ...problemsOfTwins(placed, names), ...outside.problems]);
+  const problems = problemsOf(text, inside, faults, [
+    ...accepted.problems,
+    ...problemsOfTwins(placed, names),
+    ...outside.problems,
+  ]);
   // No channel is whole that has an error of any kind in its text.
   const faulty = new Set(
     problems.flatMap(({ severity, channel }) => (severity === 'error' && channel !== null ? [channel] : [])),

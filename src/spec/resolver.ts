@@ -45,6 +45,8 @@ export class Resolver {
   constructor(
     private readonly definitions: Definitions,
     private readonly earlier: ReadonlyMap<string, Resolved>,
+    /** Refuses what resolves but must not be handed out. */
+    private readonly accepted: (resolution: Resolution) => Resolution,
   ) {
     this.lookup = {
       channel: (name) => definitions.channel(name),
@@ -78,7 +80,7 @@ export class Resolver {
 
   private anew(name: string, own: Decoded<ChannelModel>): Resolved {
     this.count += 1;
-    const resolution = resolveChannel(name, own, this.lookup);
+    const resolution = this.accepted(resolveChannel(name, own, this.lookup));
     const answers = resolution.uses.map((use) => ({ ...use, answer: this.answer(use.space, use.name) }));
     const chose = resolution.problems.some(({ code }) => code === 'unknown-name');
     return { own, resolution, answers, choice: chose ? this.definitions.lists : null };

@@ -65,6 +65,8 @@ export function resolveText(text: string, name: string): Resolution {
       },
     },
     new Map(),
+    // How a channel resolves is looked at here, computed or not.
+    (resolved) => resolved,
   );
   const resolution = resolver.resolve(name);
   assert.ok(resolution);
