@@ -10,6 +10,7 @@ import { SpecReading, insideOf, nothingRead } from './inside';
 import type { Inside, PlacedSlice } from './inside';
 import { problemsOf } from './problems';
 import type { ChannelEntry, Reading } from './reading';
+import type { Resolution } from './resolve/resolution';
 import { withoutNotComputed } from './resolve/not-computed';
 import { Resolver } from './resolver';
 import type { Resolved } from './resolver';
@@ -26,6 +27,16 @@ import { vocabulary } from './vocabulary';
  * @param files contents of the files that the spec names; those that are missing are asked for in `Reading.paths`
  */
 export function read(text: string, previous?: Reading, files: FileSource = noFiles): Reading {
+  return readAccepting(withoutNotComputed, text, previous, files);
+}
+
+/** Reads a text, handing out what of each channel is accepted; apart from `read` only to look at what is not computed yet. */
+export function readAccepting(
+  acceptedOf: (resolution: Resolution) => Resolution,
+  text: string,
+  previous?: Reading,
+  files: FileSource = noFiles,
+): Reading {
   if (text.length > largestSpec) return new SpecReading(tooLarge(text), nothingRead);
   const before = previous === undefined ? nothingRead : insideOf(previous);
   const { slices, faults } = scan(text, vocabulary);
@@ -34,7 +45,7 @@ export function read(text: string, previous?: Reading, files: FileSource = noFil
   const shelf = new Shelf(files, before.shelved);
   const outside = outsideOf(placed, names, shelf);
   const lists = nameLists(names, outside, before.lists);
-  const resolver = new Resolver(definitionsOf(names, lists, placed, outside, shelf), before.resolved, withoutNotComputed);
+  const resolver = new Resolver(definitionsOf(names, lists, placed, outside, shelf), before.resolved, acceptedOf);
   for (const name of names.channels.keys()) resolver.resolve(name);
   const inside: Inside = { slices: placed, names, lists, resolved: resolver.resolved, shelved: shelf.shelved };
   const accepted = findAcceptances(text, (offset) => isInScalar(placed, offset));
