@@ -3,7 +3,7 @@
 const node = { platform: 'node', format: 'cjs', target: 'node20' };
 const page = { platform: 'browser', format: 'iife', target: 'es2022' };
 
-/** Every bundle; `out` is relative to dist/. One that is `planned` is left out until its source is there. */
+/** Every bundle; `out` is relative to dist/. */
 export const bundles = [
   { out: 'extension.js', entry: 'src/extension/main-node.ts', options: { ...node, external: ['vscode'] } },
   { out: 'server.js', entry: 'src/server/main-node.ts', options: node },
@@ -16,7 +16,6 @@ export const bundles = [
     entry: 'src/extension/main-browser.ts',
     // The workbench's worker host hands `vscode` in through require, as in Node.
     options: { ...page, format: 'cjs', external: ['vscode'] },
-    planned: true,
   },
-  { out: 'web/server.js', entry: 'src/server/main-browser.ts', options: page, planned: true },
+  { out: 'web/server.js', entry: 'src/server/main-browser.ts', options: page },
 ];

@@ -18,6 +18,7 @@ export function startWorkbench(options: {
 }): Promise<Workbench>;
 export function workbenchAddress(
   workbench: Pick<Workbench, 'port' | 'token'>,
-  what: { folder: string; file?: string | null; tests?: string | null },
+  what: { folder: string; file?: string | null; tests?: string | null; host?: 'node' | 'worker' },
 ): string;
+export function serveExtension(): string;
 export function writeSettings(data: string, settings: Record<string, unknown>): void;

@@ -3,7 +3,7 @@ import { spawn } from 'node:child_process';
 import { existsSync, mkdirSync, readFileSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { delimiter, join } from 'node:path';
-import { extensionFolder } from './extension-folder.mjs';
+import { copyExtension, extensionFolder } from './extension-folder.mjs';
 import { root } from './prepare-clone.mjs';
 import { runNpm } from './run-command.mjs';
 
@@ -53,13 +53,24 @@ export async function startWorkbench({ data, settings = {}, token = null, env = 
   return { port, token, log, stop: () => stop(child), ended: new Promise((resolve) => child.once('close', resolve)) };
 }
 
-/** The address of the workbench with a folder open, our extension loaded from the clone, and perhaps a file or a test suite. */
-export function workbenchAddress({ port, token }, { folder, file = null, tests = null }) {
+/**
+ * Lays the extension among the files that the workbench's server hands out, and gives its path there: the worker
+ * host takes an extension under development only from the page's own origin.
+ */
+export function serveExtension() {
+  copyExtension(join(server, 'extension-under-test'));
+  const { commit } = JSON.parse(readFileSync(join(server, 'product.json'), 'utf8'));
+  return `/stable-${commit}/static/extension-under-test`;
+}
+
+/**
+ * The address of the workbench with a folder open, and perhaps a file or a test suite. The extension is loaded from the
+ * clone into the Node host, unless `host` is `worker`: then the page itself must name the extension that is served.
+ */
+export function workbenchAddress({ port, token }, { folder, file = null, tests = null, host = 'node' }) {
   const remote = (path) => `vscode-remote://127.0.0.1:${port}${urlPath(path)}`;
-  const payload = [
-    ['skipWelcome', 'true'],
-    ['extensionDevelopmentPath', remote(extensionFolder())],
-  ];
+  const payload = [['skipWelcome', 'true']];
+  if (host === 'node') payload.push(['extensionDevelopmentPath', remote(extensionFolder())]);
   if (tests !== null) payload.push(['extensionTestsPath', remote(tests)]);
   if (file !== null) payload.push(['openFile', remote(file)]);
   const query = new URLSearchParams({ folder: urlPath(folder), payload: JSON.stringify(payload) });

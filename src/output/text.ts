@@ -55,13 +55,7 @@ function adviceLines(file: CheckedFile, finding: Finding): string[] {
   const cure = file.cures.get(finding);
   const titles = [...(cure?.fixes ?? []), ...(textProblem(file, finding)?.cures ?? [])].map((fix) => `fix: ${fix.title}`);
   const notes = cure?.note ? [cure.note] : [];
-  const blocked = cure?.blockedBy;
-  const wall = blocked
-    ? [
-        `no single change works: \`${blocked.limit}\` stands in the way; nearest: ${blocked.candidate}, ${formatDb(blocked.misses)} short`,
-      ]
-    : [];
-  return [...titles, ...notes, ...wall];
+  return [...titles, ...notes];
 }
 
 function channelLine(judged: ChannelJudgement, paint: Paint): string {

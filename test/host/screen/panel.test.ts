@@ -53,6 +53,10 @@ describe('the panel on the screen', () => {
     session = await Session.start('screen');
     await session.open(spec);
   });
+  afterEach(async function () {
+    const test = this.currentTest;
+    if (test?.state === 'failed') await session.picture(`failed-${test.title.replace(/\W+/g, '-')}`);
+  });
   after(async () => {
     await session.end();
   });

@@ -4,7 +4,13 @@ import { join } from 'node:path';
 import type { Browser, Frame, Page } from 'playwright-core';
 import { browse } from '../../../scripts/browse.mjs';
 import { scratchFolder } from '../../../scripts/scratch-folder.mjs';
-import { installWorkbench, startWorkbench, workbenchAddress, type Workbench } from '../../../scripts/workbench.mjs';
+import {
+  installWorkbench,
+  serveExtension,
+  startWorkbench,
+  workbenchAddress,
+  type Workbench,
+} from '../../../scripts/workbench.mjs';
 
 const root = join(__dirname, '..', '..', '..');
 
@@ -24,6 +30,7 @@ export class Session {
   private constructor(
     private readonly workbench: Workbench,
     private readonly browser: Browser,
+    private readonly host: 'node' | 'worker',
     readonly folder: string,
     readonly page: Page,
   ) {
@@ -33,20 +40,23 @@ export class Session {
     });
   }
 
-  /** Starts a workbench with fresh settings and a fresh copy of the examples. */
-  static async start(name: string): Promise<Session> {
+  /** Starts a workbench with fresh settings and a fresh copy of the examples; the extension runs in Node or in a worker of the browser. */
+  static async start(name: string, host: 'node' | 'worker' = 'node'): Promise<Session> {
     await installWorkbench();
     const data = join(root, 'out', 'scratch', `${name}-data`);
     rmSync(data, { recursive: true, force: true });
     const workbench = await startWorkbench({ data, settings });
     const browser = await browse();
     const page = await browser.newPage({ viewport: { width: 1500, height: 950 } });
-    return new Session(workbench, browser, scratchFolder(name), page);
+    if (host === 'worker') await page.addInitScript(nameExtension, serveExtension());
+    return new Session(workbench, browser, host, scratchFolder(name), page);
   }
 
   /** Opens a spec and waits until its channel's line is on the screen. */
   async open(file: string): Promise<void> {
-    await this.page.goto(workbenchAddress(this.workbench, { folder: this.folder, file: join(this.folder, file) }));
+    await this.page.goto(
+      workbenchAddress(this.workbench, { folder: this.folder, file: join(this.folder, file), host: this.host }),
+    );
     await this.page.locator('.view-lines').getByText('bandkeep', { exact: false }).first().waitFor();
   }
 
@@ -90,6 +100,19 @@ export class Session {
     await this.browser.close();
     await this.workbench.stop();
   }
+}
+
+/** Runs in the page before anything else: names the served extension in the configuration that the workbench reads from its page. */
+function nameExtension(path: string): void {
+  const watcher = new MutationObserver(() => {
+    const meta = document.getElementById('vscode-workbench-web-configuration');
+    if (meta === null) return;
+    watcher.disconnect();
+    const configuration = JSON.parse(meta.getAttribute('data-settings') ?? '{}') as Record<string, unknown>;
+    const extensions = [{ scheme: 'http', authority: location.host, path }];
+    meta.setAttribute('data-settings', JSON.stringify({ ...configuration, developmentOptions: { extensions } }));
+  });
+  watcher.observe(document, { childList: true, subtree: true });
 }
 
 /** Nothing in the way of what is looked at. */

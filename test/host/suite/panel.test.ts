@@ -80,6 +80,16 @@ describe('the panel', () => {
     assert.equal((await drawn).channel, 'bearing-y');
   });
 
+  it('shows the newest picture when it comes out from behind another tab', async () => {
+    const covering = await vscode.workspace.openTextDocument({ content: 'in front of the panel' });
+    await vscode.window.showTextDocument(covering, { viewColumn: vscode.ViewColumn.Two });
+    assert.equal(panelTabs()[0]?.isActive, false);
+    const drawn = next(api.onDidDraw);
+    await vscode.commands.executeCommand('bandkeep.showPanel', document.uri);
+    assert.equal((await drawn).channel, 'bearing-x');
+    assert.equal(panelTabs()[0]?.isActive, true);
+  });
+
   it('is gone after it is closed, and draws afresh when it is opened again', async () => {
     await vscode.window.tabGroups.close(panelTabs());
     assert.equal(panelTabs().length, 0);
