@@ -136,7 +136,7 @@ describe('track and hold', () => {
       ]) {
         const response = trackAndHoldCopy(at(d), copy);
         const found = largestOverBands(response, [band]);
-        assert.ok(found !== null && found.gapDb <= 0.001 && found.evaluations < 1500, JSON.stringify([d, copy, band, found]));
+        assert.ok(found !== null && found.gapDb <= 0.001 && found.evaluations < 200, JSON.stringify([d, copy, band, found]));
         for (let i = 0; i <= 1000; i += 1)
           assert.ok(response.logGain(band.low + ((band.high - band.low) * i) / 1000) <= found.logGain + 1e-12);
       }
