@@ -4,6 +4,7 @@ import { heights, margins } from '../drawing/frame';
 import type { Frame } from '../drawing/frame';
 import { curvePen } from '../drawing/look';
 import type { Look } from '../drawing/look';
+import type { Theme } from '../drawing/theme';
 import type { Item, Plot, Points, Shape } from '../protocol/picture';
 
 /** A chart of lines. */
@@ -14,8 +15,9 @@ export interface CurveDataset extends ChartDataset<'line', Point[]> {
   readonly item: Item;
 }
 
-/** One dataset for each curve. */
-export function datasetsOf(plot: Plot, look: Look): CurveDataset[] {
+/** One dataset for each curve, as nobody points at it: emphasis comes and goes between updates, so it is painted over the chart. */
+export function datasetsOf(plot: Plot, theme: Theme): CurveDataset[] {
+  const look: Look = { theme, emphasisOf: () => 'plain' };
   return plot.items.flatMap((item) =>
     item.shapes.flatMap((shape) => (shape.kind === 'curve' ? [datasetOf(item, shape, look)] : [])),
   );
@@ -49,10 +51,10 @@ export function scalesOf(frame: Frame): NonNullable<PlotConfig['options']>['scal
 }
 
 /** The configuration of a chart that neither animates nor listens: the page does what is left to do. */
-export function configOf(plot: Plot, frame: Frame, look: Look): PlotConfig {
+export function configOf(plot: Plot, frame: Frame, theme: Theme): PlotConfig {
   return {
     type: 'line',
-    data: { datasets: datasetsOf(plot, look) },
+    data: { datasets: datasetsOf(plot, theme) },
     options: {
       animation: false,
       responsive: true,

@@ -62,7 +62,7 @@ export class PlotChart {
     private readonly canvas: HTMLCanvasElement,
     private input: ChartInput,
   ) {
-    const config = configOf(input.plot, this.frame(), this.look());
+    const config = configOf(input.plot, this.frame(), input.theme);
     this.chart = new Chart(canvas, { ...config, plugins: [this.plugin()] });
   }
 
@@ -70,7 +70,7 @@ export class PlotChart {
   show(input: ChartInput): void {
     const kept = this.input.plot === input.plot && this.input.theme === input.theme;
     this.input = input;
-    if (!kept) this.chart.data.datasets = datasetsOf(input.plot, this.look());
+    if (!kept) this.chart.data.datasets = datasetsOf(input.plot, input.theme);
     this.chart.options.scales = scalesOf(this.frame()) ?? {};
     this.chart.update('none');
   }

@@ -214,6 +214,15 @@ describe('the panel page in a browser', function () {
     await panel.page.waitForFunction((old) => document.querySelector('canvas')?.toDataURL() === old, before);
   });
 
+  it('lets go of what was lit while a newer picture came', async () => {
+    await draw(1, capture);
+    const before = await pixels(panel);
+    await panel.say({ kind: 'lit', place: { channel: 'bearing-x', path: ['unwanted', 1, 'level'] } });
+    await draw(2, structuredClone(capture));
+    await panel.say({ kind: 'lit', place: null });
+    await panel.page.waitForFunction((old) => document.querySelector('canvas')?.toDataURL() === old, before);
+  });
+
   it('asks to hold the channel, to let it go, and for a fresh picture', async () => {
     await draw(1, capture);
     await panel.page.getByRole('button', { name: 'Hold' }).click();

@@ -31,8 +31,26 @@ async function noteMessages(panel: Frame): Promise<void> {
   });
 }
 
-/** What is seen of a plot, without its outermost pixels, which belong to the ring around what has the focus. */
+/** What is seen of a plot once it has come to rest, without its outermost pixels, which belong to the ring around what has the focus. */
 async function pictureOf(session: Session, canvas: Locator): Promise<Buffer> {
+  let before = await snapshotOf(session, canvas);
+  for (let alike = 0, left = 60; alike < 3 && left > 0; left -= 1) {
+    // A key's effect reaches the screen some frames after the key has been taken, later on a busy machine.
+    await session.page.waitForTimeout(100);
+    const now = await snapshotOf(session, canvas);
+    alike = now.equals(before) ? alike + 1 : 0;
+    before = now;
+  }
+  return before;
+}
+
+/** Whether a plot looks like an earlier picture of it once it has come to rest; the editor's cursor may light an item a moment later. */
+async function comesToLookLike(session: Session, canvas: Locator, picture: Buffer): Promise<boolean> {
+  for (let left = 10; left > 0; left -= 1) if (picture.equals(await pictureOf(session, canvas))) return true;
+  return false;
+}
+
+async function snapshotOf(session: Session, canvas: Locator): Promise<Buffer> {
   const box = await canvas.boundingBox();
   assert.ok(box !== null, 'the plot is not on the screen');
   const inset = 6;
@@ -124,8 +142,7 @@ describe('the panel on the screen', () => {
     await session.page.keyboard.press('Control+s');
     await panel.locator('body[data-pictures]').waitFor();
     await canvas.click({ position: { x: 4, y: 4 } });
-    const saved = await pictureOf(session, canvas);
-    assert.ok(zoomed.equals(saved), 'the save changed what is seen');
+    assert.ok(await comesToLookLike(session, canvas, zoomed), 'the save changed what is seen');
     await session.page.keyboard.press('0');
   });
 
