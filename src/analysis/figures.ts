@@ -16,7 +16,7 @@ export type WorstAt = Readonly<Record<string, number>>;
 export interface LimitFigure {
   readonly limit: LimitKey;
   readonly ref: string | null;
-  readonly unit: 'dBFS' | 'dBc' | 'dB';
+  readonly unit: 'dBFS' | 'dBc' | 'dB' | 's';
   readonly sense: 'at-most' | 'at-least';
   readonly at: number;
   /** Worst case over all tolerances; null where it was not judged. */
@@ -115,7 +115,7 @@ export interface Overlap {
 /** All figures of one channel. */
 export interface Figures {
   readonly name: string;
-  readonly direction: 'capture' | 'generate';
+  readonly direction: 'capture' | 'generate' | 'relay';
   readonly ref: string | null;
   readonly rate: number;
   readonly outputRate: number;

@@ -50,6 +50,10 @@ function measured(channel: Channel, limit: Limit, judged: Judged): Measured | nu
       return snrMeasured(channel, judged.noise);
     case 'headroom':
       return headroomMeasured(judged.headroom);
+    case 'delay':
+    case 'delay-spread':
+    case 'crosstalk':
+      return null;
   }
 }
 

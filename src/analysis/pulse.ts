@@ -8,12 +8,14 @@ import type { Channel, Pulse } from '../spec/channel';
 /** How long the pulse lasts at a rate, in seconds; 0 for `instant`. */
 export function pulseSeconds(pulse: Pulse, rateHz: number): number {
   if (pulse.shape === 'instant') return 0;
+  if (pulse.shape === 'linear') return 2 / rateHz;
   return 'seconds' in pulse.width ? pulse.width.seconds : pulse.width.share / rateHz;
 }
 
 /** Whether the width is a share of the period, so that the pulse follows the rate. */
 export function followsRate(pulse: Pulse): boolean {
-  return pulse.shape === 'rectangle' && 'share' in pulse.width;
+  if (pulse.shape === 'instant') return false;
+  return pulse.shape === 'linear' || 'share' in pulse.width;
 }
 
 /** The pulse's response at a rate: an aperture has gain 1 at 0 Hz, a hold of height 1 its area over the period. */

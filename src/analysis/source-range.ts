@@ -14,6 +14,8 @@ export function sourceRange(source: Source): Enclosure {
       return { low: source.lowHz, high: source.highHz };
     case 'anything':
       return { low: 0, high: Infinity };
+    case 'spectrum':
+      return { low: source.points[0]?.frequencyHz ?? 0, high: source.points.at(-1)?.frequencyHz ?? 0 };
   }
 }
 

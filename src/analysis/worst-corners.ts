@@ -23,7 +23,7 @@ export function worstCorners(path: ChannelPath, further: readonly Corners[], mea
   };
   for (const corners of [...cornerSets(path), ...further]) note(corners);
   path.stages.forEach(({ stage }, index) => {
-    if (stage.form.kind !== 'chebyshev' || !varies(stage.cornerTolerance)) return;
+    if (stage.form.kind !== 'family' || stage.form.rippleDb === null || !varies(stage.cornerTolerance)) return;
     const { low, high } = factorsOf(stage.cornerTolerance);
     const others = worst;
     const at = (factor: number): number => note(others.map((known, position) => (position === index ? factor : known)));

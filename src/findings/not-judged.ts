@@ -63,8 +63,12 @@ function missing(channel: Channel, figure: LimitFigure, folded: boolean): string
       return 'the channel has no noise. Give it `bits`, or `jitter`';
     case 'flatness':
       return folded ? foldsFirst : 'a path without a filter is flat by nature. Give it its `filter`';
+    case 'crosstalk':
+      return 'the channel has no time slots. Give it `slots`';
     case 'image':
     case 'headroom':
+    case 'delay':
+    case 'delay-spread':
       return folded ? foldsFirst : 'the channel has nothing that could break it';
   }
 }

@@ -35,9 +35,17 @@ export const unusedName: FindingKind = {
   remedies: [],
   // A channel with a fault may be the one that uses the name, so the answer waits until all are whole.
   checkFile: (reading) =>
-    reading.entries.some((entry) => entry.channel === null)
+    // A file without channels is there to be used by others.
+    reading.entries.length === 0 || reading.entries.some((entry) => entry.channel === null)
       ? []
       : reading.names.filter((name) => name.users.length === 0).map(unused),
+};
+
+const spaceWords: Readonly<Record<DefinedName['space'], string>> = {
+  clocks: 'clock',
+  filters: 'filter',
+  sources: 'source',
+  masks: 'mask',
 };
 
 function unused({ space, name, place }: DefinedName): Finding {
@@ -46,7 +54,7 @@ function unused({ space, name, place }: DefinedName): Finding {
     severity: 'hint',
     channel: null,
     ref: null,
-    message: `The ${space === 'clocks' ? 'clock' : 'filter'} \`${name}\` is used by no channel.`,
+    message: `The ${spaceWords[space]} \`${name}\` is used by no channel.`,
     at: { place: { ...place, part: 'key' } },
     related: [],
     figures: null,

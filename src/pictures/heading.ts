@@ -23,6 +23,7 @@ function summaryOf(channel: Channel): string {
 
 function holdWords(pulse: Pulse): string {
   if (pulse.shape === 'instant') return 'impulses';
+  if (pulse.shape === 'linear') return 'straight lines from sample to sample';
   if ('seconds' in pulse.width) return `held for ${formatTime(pulse.width.seconds)}`;
   return pulse.width.share === 1 ? 'zero-order hold' : `held for ${formatPercent(pulse.width.share)} of the period`;
 }

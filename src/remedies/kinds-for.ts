@@ -4,14 +4,15 @@ import type { Channel, LimitKey } from '../spec';
 
 /** The kinds to try, cheapest first. */
 export function kindsFor(finding: Finding, channel: Channel): readonly RemedyKind[] {
-  const code = finding.code === 'thin-margin' && isLimit(finding.limit) ? brokenCodes[finding.limit] : finding.code;
+  const broken = finding.code === 'thin-margin' && isLimit(finding.limit) ? brokenCodes[finding.limit] : undefined;
+  const code = broken ?? finding.code;
   // In generate the words are what they are before the hold and the filter come into play.
   const fixed = channel.direction === 'generate' && (code === 'headroom-short' || code === 'overdriven');
   return fixed ? [] : remediesOf(code);
 }
 
 /** What breaks a limit cures a thin margin of it too. */
-const brokenCodes: Readonly<Record<LimitKey, Code>> = {
+const brokenCodes: Readonly<Partial<Record<LimitKey, Code>>> = {
   alias: 'alias-over-limit',
   image: 'image-over-limit',
   flatness: 'flatness-over-limit',

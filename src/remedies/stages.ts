@@ -1,8 +1,5 @@
 /** The stages of a channel whose order and corner a designer chooses, and what titles call them. */
-import type { Channel, Stage, StageForm } from '../spec';
-
-/** The forms that have an order and a corner to choose. */
-type FamilyForm = Extract<StageForm, { order: number }>;
+import type { Channel, FamilyForm, Stage } from '../spec';
 
 /** A stage that a fix may change. */
 export interface FamilyStage {
@@ -29,7 +26,7 @@ export function familyStages(channel: Channel): readonly FamilyStage[] {
 }
 
 function familyForm({ form }: Stage): FamilyForm | null {
-  return form.kind === 'butterworth' || form.kind === 'chebyshev' ? form : null;
+  return form.kind === 'family' ? form : null;
 }
 
 /** The shortest name that tells the stage from the others that a fix could mean. */

@@ -85,7 +85,10 @@ function unknownKey(map: Fields, pair: Pair): LocalProblem {
 
 function misplaced(map: Fields, key: Key, pair: Pair, company: Company): LocalProblem | null {
   if (key.later === true) return errorAt(keySpan(pair), 'unknown-key', `\`${pair.key}\` in ${map.called} is not supported yet`);
-  if (key.with === undefined || company.unsettled || goes(key, company)) return null;
+  if (company.unsettled) return null;
+  const bar = key.notWith?.find((other) => company.has.has(other));
+  if (bar !== undefined) return errorAt(keySpan(pair), 'contradiction', `\`${pair.key}\` cannot stand beside \`${bar}\``);
+  if (key.with === undefined || goes(key, company)) return null;
   const others = orList(key.with.map((other) => `\`${other}\``));
   return errorAt(keySpan(pair), 'contradiction', `\`${pair.key}\` goes with ${others}, which does not stand here`);
 }
@@ -114,9 +117,15 @@ function reportMissing(
   if (map.completedBy !== undefined && first.has(map.completedBy)) return;
   for (const name of map.needed) {
     const key = first.has(name) ? null : keyOf(map, name);
-    if (key?.required !== true || !goes(key, company)) continue;
+    if (key === null || !isAskedFor(key, company)) continue;
     problems.push(errorAt(home.span, 'missing-key', `${home.called} needs \`${name}\`: ${lowerFirst(key.about)}`));
   }
+}
+
+function isAskedFor(key: Key, company: Company): boolean {
+  if (key.requiredWith?.some((other) => company.has.has(other)) === true) return true;
+  const barred = key.notWith?.some((other) => company.has.has(other)) ?? false;
+  return key.required === true && !barred && goes(key, company);
 }
 
 const lowerFirst = (sentence: string) => sentence.charAt(0).toLowerCase() + sentence.slice(1).replace(/\.$/, '');

@@ -1,8 +1,11 @@
 /** Decodes one scalar: a word, a name, a whole number, a quantity, a range or text, as its place asks for. */
 import { readQuantity } from '../units/read-quantity';
+import { numberAhead, scaled } from '../units/number-text';
 import { readRange } from '../units/read-range';
+import { readRoot } from '../units/read-root';
 import { oneSpelling } from '../units/one-spelling';
 import type { QuantityFault } from '../units/fault';
+import { rootHz } from './declaration/bounds';
 import { expected } from './expected';
 import { errorAt, writeInstead } from './local-problem';
 import type { LocalProblem } from './local-problem';
@@ -39,6 +42,8 @@ const isNumeric = (text: string) => /^[-+±\u2212.]?\s*\.?\d|^[±.…]/.test(one
 /** Whole numbers, ranges and quantities; null where none of them is asked for. */
 function decodeMeasured(scalar: Scalar, node: ScalarNode): ScalarReading | null {
   if (scalar.wholeRange !== undefined && node.text.includes('..')) return decodeWholeRange(scalar.wholeRange, node);
+  if (scalar.root !== undefined) return decodeRoot(scalar.root, node);
+  if (scalar.number !== undefined) return decodeNumber(scalar.number, node);
   if (scalar.whole !== undefined) return decodeWhole(scalar, scalar.whole, node);
   if (scalar.range !== undefined && (scalar.quantity === undefined || looksLikeRange(node.text)))
     return decodeRange(scalar, node);
@@ -87,6 +92,31 @@ function decodeWhole(scalar: Scalar, [least, most]: readonly [number, number], n
   }
   if (value >= least && value <= most) return { value };
   return { fault: outside(node, node.text, least, most) };
+}
+
+function decodeNumber([least, most]: readonly [number, number], node: ScalarNode): ScalarReading {
+  const plain = oneSpelling(node.text);
+  const ahead = numberAhead(plain);
+  if (ahead?.rest.trim() === '') {
+    const value = scaled(ahead.digits, 0);
+    return value >= least && value <= most ? { value } : { fault: outside(node, plain, least, most) };
+  }
+  const meant = /^\d+,\d+$/.test(plain) ? plain.replace(',', '.') : ahead?.digits;
+  const cures = meant === undefined ? [] : [writeInstead(node, meant)];
+  return { fault: errorAt(node, 'not-a-quantity', `\`${plain}\` is not a plain number such as \`0.707\``, cures) };
+}
+
+function decodeRoot(as: 'pole' | 'zero', node: ScalarNode): ScalarReading {
+  const reading = readRoot(node.text);
+  if ('fault' in reading) return { fault: quantityFault(reading.fault, node) };
+  const { re, im } = reading.root;
+  const [least, most] = rootHz;
+  const absurd = [re, im].some((part) => part !== 0 && (Math.abs(part) < least || Math.abs(part) > most));
+  const shown = oneSpelling(node.text);
+  if (absurd) return { fault: errorAt(node, 'out-of-range', `\`${shown}\` is out of range: from 1 nHz to 1000 THz`) };
+  if (as === 'zero' || re < 0) return { value: reading.root };
+  const message = `a pole at \`${shown}\` does not decay: its real part must be below zero`;
+  return { fault: errorAt(node, 'out-of-range', message, re === 0 ? [] : [writeInstead(node, `-${shown.replace(/^\+/, '')}`)]) };
 }
 
 function decodeWholeRange([least, most]: readonly [number, number], node: ScalarNode): ScalarReading {

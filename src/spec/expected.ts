@@ -31,5 +31,7 @@ function* scalarParts(scalar: Scalar): Generator<string> {
     yield `a range \`LOW .. HIGH\` of ${orList(scalar.range.map((kind) => kindProse[kind].called))}`;
   if (scalar.whole !== undefined) yield `a whole number from ${scalar.whole[0]} to ${scalar.whole[1]}`;
   if (scalar.wholeRange !== undefined) yield 'a range of whole numbers such as `120 .. 480`';
-  if (scalar.text === true) yield 'text';
+  if (scalar.number !== undefined) yield 'a plain number without a unit';
+  if (scalar.root !== undefined) yield `a ${scalar.root} such as \`-800 ± 600j Hz\``;
+  if (scalar.text === true) yield scalar.path === true ? 'the path of a file' : 'text';
 }

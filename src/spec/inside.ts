@@ -1,35 +1,13 @@
 /** A reading with what the spec layer itself keeps of it: slices, names, resolutions; other layers see only `Reading`. */
-import type { ChannelModel } from './declaration/channel';
-import type { ClockModel } from './declaration/clock';
-import type { StagesModel } from './declaration/stage';
+import { nothingShelved } from './files/shelved';
+import type { Shelved } from './files/shelved';
 import { lineIndex } from './line-index';
 import type { LineIndex } from './line-index';
+import type { Names, PlacedSlice } from './placed';
 import type { Reading } from './reading';
 import type { NameLists, Resolved } from './resolver';
-import type { Named, SliceReading } from './slice-reading';
-import type { Slice } from './slices/slice';
 
-/** A slice at its place in the file. */
-export interface PlacedSlice {
-  readonly slice: Slice;
-  readonly reading: SliceReading;
-}
-
-/** A clock, a filter or a channel at its place in the file. */
-export interface PlacedName<T> {
-  readonly named: Named<T>;
-  /** Offset in the file that the offsets of its tree count from. */
-  readonly base: number;
-  /** A second one has the same name. */
-  readonly twice: boolean;
-}
-
-/** The names of a file by space; of two alike the first. */
-export interface Names {
-  readonly clocks: ReadonlyMap<string, PlacedName<ClockModel>>;
-  readonly filters: ReadonlyMap<string, PlacedName<StagesModel>>;
-  readonly channels: ReadonlyMap<string, PlacedName<ChannelModel>>;
-}
+export type { Names, PlacedName, PlacedSlice } from './placed';
 
 /** What the spec layer keeps. */
 export interface Inside {
@@ -37,6 +15,8 @@ export interface Inside {
   readonly names: Names;
   readonly lists: NameLists;
   readonly resolved: ReadonlyMap<string, Resolved>;
+  /** Other files that were read. */
+  readonly shelved: Shelved;
 }
 
 /** A reading as `read` makes it. */
@@ -47,6 +27,7 @@ export class SpecReading implements Reading {
   readonly names: Reading['names'];
   readonly problems: Reading['problems'];
   readonly acceptances: Reading['acceptances'];
+  readonly paths: Reading['paths'];
   readonly counts: Reading['counts'];
   private index: LineIndex | null = null;
 
@@ -60,6 +41,7 @@ export class SpecReading implements Reading {
     this.names = shown.names;
     this.problems = shown.problems;
     this.acceptances = shown.acceptances;
+    this.paths = shown.paths;
     this.counts = shown.counts;
   }
 
@@ -88,7 +70,8 @@ function ownReading(reading: Reading): SpecReading {
 /** What there is before anything has been read. */
 export const nothingRead: Inside = {
   slices: [],
-  names: { clocks: new Map(), filters: new Map(), channels: new Map() },
-  lists: { clocks: [], filters: [], channels: [] },
+  names: { clocks: new Map(), filters: new Map(), sources: new Map(), masks: new Map(), channels: new Map() },
+  lists: { clocks: [], filters: [], sources: [], masks: [], channels: [] },
   resolved: new Map(),
+  shelved: nothingShelved,
 };

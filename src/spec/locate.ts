@@ -22,7 +22,7 @@ export function locate(inside: Inside, place: Place): Located | null {
   const { channel, path } = place;
   if (channel !== null) return inChannel(inside, channel, path);
   const [section, name, ...rest] = path;
-  if ((section === 'clocks' || section === 'filters' || section === 'channels') && typeof name === 'string') {
+  if (isSpace(section) && typeof name === 'string') {
     const entry = inside.names[section].get(name);
     if (entry !== undefined) return follow(inside, atPair(entry.base, entry.named.pair), rest);
   }
@@ -32,6 +32,10 @@ export function locate(inside: Inside, place: Place): Located | null {
   }
   return null;
 }
+
+const isSpace = (section: unknown): section is keyof Inside['names'] => typeof section === 'string' && spaces.has(section);
+
+const spaces: ReadonlySet<string> = new Set(['clocks', 'filters', 'sources', 'masks', 'channels']);
 
 /** The span of what was found: of the value, of the key, or of the key with its value. */
 export function spanOfLocated({ base, pair, node, item, missing }: Located, part: 'value' | 'key' | 'pair'): Span {
@@ -98,13 +102,26 @@ function stepInto(inside: Inside, at: Located, step: string | number): Located |
   return step === 'at' && node?.form === 'scalar' ? from : null;
 }
 
-/** Where a value is the name of a filter or a clock, what it names. */
+/** Where a value is the name of a filter, a clock, a source or a mask, what it names. */
 function throughName(inside: Inside, at: Located): Located {
   if (at.node?.form !== 'scalar' || at.pair === null) return at;
-  const space = at.pair.key === 'filter' ? inside.names.filters : at.pair.key === 'clock' ? inside.names.clocks : null;
-  const entry = space?.get(at.node.text);
+  const space = Object.hasOwn(named, at.pair.key) ? named[at.pair.key] : undefined;
+  const entry = space === undefined ? undefined : inside.names[space].get(at.node.text);
   return entry === undefined ? at : atPair(entry.base, entry.named.pair);
 }
+
+/** The keys whose values may be names, and where those are defined. */
+const named: Readonly<Record<string, Exclude<keyof Inside['names'], 'channels'>>> = {
+  filter: 'filters',
+  'input-filter': 'filters',
+  'output-filter': 'filters',
+  clock: 'clocks',
+  unwanted: 'sources',
+  response: 'masks',
+  through: 'masks',
+  output: 'masks',
+  at: 'masks',
+};
 
 function pairOf(map: MapNode, key: string): Pair | undefined {
   return map.pairs.find((pair) => pair.key === key);

@@ -3,7 +3,6 @@ import { errorAt } from './local-problem';
 import type { LocalProblem } from './local-problem';
 import type { Inside, Names, PlacedName, PlacedSlice } from './inside';
 import type { DefinedName } from './reading';
-import type { Definitions, NameLists } from './resolver';
 import type { Named } from './slice-reading';
 import type { Pair } from './tree';
 
@@ -12,6 +11,8 @@ export function namesIn(slices: readonly PlacedSlice[]): Names {
   return {
     clocks: gathered(slices, ({ reading }) => reading.clocks),
     filters: gathered(slices, ({ reading }) => reading.filters),
+    sources: gathered(slices, ({ reading }) => reading.sources),
+    masks: gathered(slices, ({ reading }) => reading.masks),
     channels: gathered(slices, ({ reading }) => reading.channels),
   };
 }
@@ -30,44 +31,7 @@ function gathered<T>(
   return names;
 }
 
-/** The names as lists; the earlier lists where none has come or gone. */
-export function nameLists(names: Names, before: NameLists): NameLists {
-  const lists = {
-    clocks: [...names.clocks.keys()],
-    filters: [...names.filters.keys()],
-    channels: [...names.channels.keys()],
-  };
-  const same = (a: readonly string[], b: readonly string[]): boolean =>
-    a.length === b.length && a.every((name, at) => name === b[at]);
-  const unchanged =
-    same(lists.clocks, before.clocks) && same(lists.filters, before.filters) && same(lists.channels, before.channels);
-  return unchanged ? before : lists;
-}
-
-/** Where the resolver looks names up. What was lost to a fault in `clocks` or `filters` counts as faulty, not as missing. */
-export function definitionsOf(names: Names, lists: NameLists, slices: readonly PlacedSlice[]): Definitions {
-  const valueOf = <T>(map: ReadonlyMap<string, PlacedName<T>>, name: string, lossy: boolean): T | null | undefined => {
-    const placed = map.get(name);
-    if (placed === undefined) return lossy ? null : undefined;
-    return placed.twice || placed.named.decoded.problems.length > 0 ? null : placed.named.decoded.value;
-  };
-  const lossyClocks = isLossy(slices, 'clocks');
-  const lossyFilters = isLossy(slices, 'filters');
-  return {
-    channel: (name) => names.channels.get(name)?.named.decoded,
-    clock: (name) => valueOf(names.clocks, name, lossyClocks),
-    filter: (name) => valueOf(names.filters, name, lossyFilters),
-    lists,
-  };
-}
-
-function isLossy(slices: readonly PlacedSlice[], key: string): boolean {
-  return slices.some(
-    ({ slice, reading }) => slice.kind === 'top' && reading.lossy && reading.pairs.some((pair) => pair.key === key),
-  );
-}
-
-/** The clocks and filters with the channels that use them, directly or through `like`. */
+/** The names with the channels that use them, directly or through `like`. */
 export function definedNames({ names, resolved }: Inside): DefinedName[] {
   const users = new Map<string, string[]>();
   for (const [channel, { resolution }] of resolved) {
@@ -78,15 +42,18 @@ export function definedNames({ names, resolved }: Inside): DefinedName[] {
       else known.push(channel);
     }
   }
-  const defined = (space: 'clocks' | 'filters'): DefinedName[] =>
+  const defined = (space: DefinedName['space']): DefinedName[] =>
     [...names[space].keys()].map((name) => ({
       space,
       name,
       users: users.get(`${space} ${name}`) ?? [],
       place: { channel: null, path: [space, name] },
     }));
-  return [...defined('clocks'), ...defined('filters')];
+  return definedSpaces.flatMap(defined);
 }
+
+/** The spaces of names that channels use, in the order they are listed. */
+const definedSpaces: readonly DefinedName['space'][] = ['clocks', 'filters', 'sources', 'masks'];
 
 /** Keys of the file, and names of clocks, filters and channels, that stand a second time; offsets into the file. */
 export function problemsOfTwins(slices: readonly PlacedSlice[], names: Names): LocalProblem[] {
@@ -103,7 +70,7 @@ export function problemsOfTwins(slices: readonly PlacedSlice[], names: Names): L
       keys.add(pair.key);
     }
   }
-  for (const space of ['clocks', 'filters', 'channels'] as const) {
+  for (const space of ['clocks', 'filters', 'sources', 'masks', 'channels'] as const) {
     if (anyTwice(names[space])) problems.push(...twinsOf(space, slices));
   }
   return problems;

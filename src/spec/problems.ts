@@ -2,6 +2,7 @@
 import type { Inside } from './inside';
 import type { LocalProblem } from './local-problem';
 import { locate, spanOfLocated } from './locate';
+import type { Located } from './locate';
 import type { Problem } from './reading';
 import type { Resolved } from './resolver';
 import { sliceAt } from './slices/slice-at';
@@ -52,7 +53,7 @@ function resolutionProblems(inside: Inside, channel: string, { resolution }: Res
 
 function placed(inside: Inside, channel: string, { path, part, code, message, cures }: ResolveProblem): Problem {
   const located = locate(inside, { channel, path });
-  const span = located === null ? { start: 0, end: 0 } : spanOfLocated(located, path.length === 0 ? 'key' : part);
+  const span = located === null ? { start: 0, end: 0 } : spanOfLocated(nameItself(located), path.length === 0 ? 'key' : part);
   return {
     code,
     severity: 'error',
@@ -61,6 +62,11 @@ function placed(inside: Inside, channel: string, { path, part, code, message, cu
     message,
     cures: cures.map(({ title, newText }) => ({ title, edits: [{ span, newText }] })),
   };
+}
+
+/** What cannot be followed into another file stands at the name that leads there. */
+function nameItself(located: Located): Located {
+  return located.node?.form === 'scalar' ? { ...located, missing: [] } : located;
 }
 
 /** A spec says which version of the language it is written in. */

@@ -11,10 +11,12 @@ export interface ReadSlices {
 }
 
 /** Reads them. */
-export function readSlices(slices: readonly Slice[], before: Inside): ReadSlices {
+export function readSlices(slices: readonly Slice[], before: Pick<Inside, 'slices' | 'names'>): ReadSlices {
   const known: Known = {
     clock: (name) => before.names.clocks.get(name)?.named,
     filter: (name) => before.names.filters.get(name)?.named,
+    source: (name) => before.names.sources.get(name)?.named,
+    mask: (name) => before.names.masks.get(name)?.named,
     channel: (name) => before.names.channels.get(name)?.named,
   };
   const earlier = new EarlierSlices(before.slices, slices.length);

@@ -1,10 +1,17 @@
 /** Reads a spec's text: slices, names, channels and every fault, taking over from an earlier reading all that has not changed. */
 import { findAcceptances } from './acceptances';
-import { definedNames, definitionsOf, nameLists, namesIn, problemsOfTwins } from './names';
+import { definitionsOf, nameLists } from './definitions';
+import { noFiles } from './files/file-source';
+import type { FileSource } from './files/file-source';
+import { outsideOf } from './files/outside';
+import { Shelf } from './files/shelf';
+import { definedNames, namesIn, problemsOfTwins } from './names';
 import { SpecReading, insideOf, nothingRead } from './inside';
 import type { Inside, PlacedSlice } from './inside';
 import { problemsOf } from './problems';
 import type { ChannelEntry, Reading } from './reading';
+import type { Resolution } from './resolve/resolution';
+import { withoutNotComputed } from './resolve/not-computed';
 import { Resolver } from './resolver';
 import type { Resolved } from './resolver';
 import { readSlices } from './read-slices';
@@ -17,19 +24,36 @@ import { vocabulary } from './vocabulary';
 /**
  * Reads a text. Never throws and does no I/O; takes time linear in the text.
  * @param previous a reading of an earlier text of the same file: slices and channels on which nothing has changed are taken over
+ * @param files contents of the files that the spec names; those that are missing are asked for in `Reading.paths`
  */
-export function read(text: string, previous?: Reading): Reading {
+export function read(text: string, previous?: Reading, files: FileSource = noFiles): Reading {
+  return readAccepting(withoutNotComputed, text, previous, files);
+}
+
+/** Reads a text, handing out what of each channel is accepted; apart from `read` only to look at what is not computed yet. */
+export function readAccepting(
+  acceptedOf: (resolution: Resolution) => Resolution,
+  text: string,
+  previous?: Reading,
+  files: FileSource = noFiles,
+): Reading {
   if (text.length > largestSpec) return new SpecReading(tooLarge(text), nothingRead);
   const before = previous === undefined ? nothingRead : insideOf(previous);
   const { slices, faults } = scan(text, vocabulary);
   const { placed, count } = readSlices(slices, before);
   const names = namesIn(placed);
-  const lists = nameLists(names, before.lists);
-  const resolver = new Resolver(definitionsOf(names, lists, placed), before.resolved);
+  const shelf = new Shelf(files, before.shelved);
+  const outside = outsideOf(placed, names, shelf);
+  const lists = nameLists(names, outside, before.lists);
+  const resolver = new Resolver(definitionsOf(names, lists, placed, outside, shelf), before.resolved, acceptedOf);
   for (const name of names.channels.keys()) resolver.resolve(name);
-  const inside: Inside = { slices: placed, names, lists, resolved: resolver.resolved };
+  const inside: Inside = { slices: placed, names, lists, resolved: resolver.resolved, shelved: shelf.shelved };
   const accepted = findAcceptances(text, (offset) => isInScalar(placed, offset));
-  const problems = problemsOf(text, inside, faults, [...accepted.problems, ...problemsOfTwins(placed, names)]);
+  const problems = problemsOf(text, inside, faults, [
+    ...accepted.problems,
+    ...problemsOfTwins(placed, names),
+    ...outside.problems,
+  ]);
   // No channel is whole that has an error of any kind in its text.
   const faulty = new Set(
     problems.flatMap(({ severity, channel }) => (severity === 'error' && channel !== null ? [channel] : [])),
@@ -41,6 +65,7 @@ export function read(text: string, previous?: Reading): Reading {
     names: definedNames(inside),
     problems,
     acceptances: accepted.acceptances,
+    paths: shelf.paths,
     counts: { slices: slices.length, slicesRead: count, channelsResolved: resolver.count },
   };
   return new SpecReading(shown, inside);

@@ -55,9 +55,9 @@ export interface ChannelEntry {
   readonly channel: Channel | null;
 }
 
-/** A name defined in this file under `clocks` or `filters`, and the channels that use it. */
+/** A name defined in this file under `clocks`, `filters`, `sources` or `masks`, and the channels that use it. */
 export interface DefinedName {
-  readonly space: 'clocks' | 'filters';
+  readonly space: 'clocks' | 'filters' | 'sources' | 'masks';
   readonly name: string;
   readonly users: readonly string[];
   readonly place: Place;
@@ -71,6 +71,8 @@ export interface Reading {
   readonly names: readonly DefinedName[];
   readonly problems: readonly Problem[];
   readonly acceptances: readonly Acceptance[];
+  /** The other files that the spec leans on, from the root, with `/`: load them, and read again with their contents. */
+  readonly paths: readonly string[];
   /** How much work this reading was, for tests and benchmarks. */
   readonly counts: { readonly slices: number; readonly slicesRead: number; readonly channelsResolved: number };
 }

@@ -5,7 +5,7 @@ import type { Kind, Unit } from '../units/quantity';
 export type Direction = 'capture' | 'generate' | 'relay';
 
 /** Where names are defined. */
-export type NameSpace = 'channels' | 'clocks' | 'filters' | 'sources';
+export type NameSpace = 'channels' | 'clocks' | 'filters' | 'sources' | 'masks';
 
 /** A word or key and what it means, for hovers, completion and the reference page. */
 export type Prose = Readonly<Record<string, string>>;
@@ -37,7 +37,13 @@ export interface Scalar {
   readonly whole?: readonly [number, number];
   /** Whole numbers `A .. B`. */
   readonly wholeRange?: readonly [number, number];
+  /** A plain number without a unit, such as a Q. */
+  readonly number?: readonly [number, number];
+  /** A pole or zero as a frequency; `pole`: left of the imaginary axis. */
+  readonly root?: 'pole' | 'zero';
   readonly text?: true;
+  /** A text that is the path of a file. */
+  readonly path?: true;
 }
 
 /** The least and the largest value, in the base unit; zero stands outside unless it is within or `zero` admits it. */
@@ -94,6 +100,10 @@ export interface Key {
   readonly only?: readonly Direction[];
   /** Keys or words of the same map, one of which must stand beside this key. */
   readonly with?: readonly string[];
+  /** Keys or words beside which this key cannot stand, and is not required. */
+  readonly notWith?: readonly string[];
+  /** Keys or words that ask for this key. */
+  readonly requiredWith?: readonly string[];
   /** In the language, but not computed yet: using it is an error that says so. */
   readonly later?: true;
 }

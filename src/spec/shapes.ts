@@ -1,5 +1,6 @@
 /** The constructors that the declaration of the language is written with; the decoded types follow from them. */
 import type { Kind, Quantity, QuantityRange } from '../units/quantity';
+import type { RootPair } from '../units/read-root';
 import type {
   Clash,
   Direction,
@@ -45,6 +46,15 @@ export const whole = (least: number, most: number): Shape<number> => ({ scalar: 
 /** Whole numbers `A .. B`. */
 export const wholeRange = (least: number, most: number): Shape<WholeRange> => ({ scalar: { wholeRange: [least, most] } });
 
+/** A plain number. */
+export const plainNumber = (least: number, most: number): Shape<number> => ({ scalar: { number: [least, most] } });
+
+/** A pole or zero, or a pair of conjugates. */
+export const root = (as: 'pole' | 'zero'): Shape<RootPair> => ({ scalar: { root: as } });
+
+/** The path of a file, relative to the spec. */
+export const path: Shape<string> = { scalar: { text: true, path: true } };
+
 /** Free text. */
 export const text: Shape<string> = { scalar: { text: true } };
 
@@ -59,9 +69,11 @@ export const fields = <const F extends Readonly<Record<string, Key>>>(
 ): Shape<Model<F>> => {
   const { check, ...others } = rules;
   // The decoder hands a map of these keys to the check, so the model's type holds.
-  const needed = Object.entries<Key>(keys).flatMap(([name, { required }]) => (required === true ? [name] : []));
+  const needed = Object.entries<Key>(keys).flatMap(([name, key]) => (isNeeded(key) ? [name] : []));
   return { map: { fields: keys, called, needed, ...others, ...(check && { check: (model) => check(model as Model<F>) }) } };
 };
+
+const isNeeded = ({ required, requiredWith }: Key) => required === true || requiredWith !== undefined;
 
 /** A map with free names. */
 export const entries = <T>(called: string, each: Shape<T>): Shape<ReadonlyMap<string, T | null>> => ({ map: { each, called } });

@@ -5,9 +5,15 @@ import type { ClockModel } from './declaration/clock';
 import { clock } from './declaration/clock';
 import type { StagesModel } from './declaration/stage';
 import { stages } from './declaration/stage';
+import type { SegmentsModel } from './declaration/mask';
+import { maskSegments } from './declaration/mask';
+import type { SourceModel } from './declaration/source';
+import { source } from './declaration/source';
 import { declaration } from './declaration/top-level';
 import { decode } from './decode';
 import type { Decoded } from './decode';
+import { pathUses } from './files/path-uses';
+import type { PathUse } from './files/path-uses';
 import { errorAt } from './local-problem';
 import type { LocalProblem } from './local-problem';
 import type { Shape } from './shape';
@@ -37,8 +43,12 @@ export interface SliceReading {
   readonly title: string | null;
   readonly clocks: readonly Named<ClockModel>[];
   readonly filters: readonly Named<StagesModel>[];
+  readonly sources: readonly Named<SourceModel>[];
+  readonly masks: readonly Named<SegmentsModel>[];
   readonly channels: readonly Named<ChannelModel>[];
   readonly problems: readonly OwnedProblem[];
+  /** The paths of other files that stand in it. */
+  readonly paths: readonly PathUse[];
   /** Whether names that seem to be missing may stand in what was passed over. */
   readonly lossy: boolean;
 }
@@ -53,6 +63,8 @@ export interface OwnedProblem {
 export interface Known {
   clock(name: string): Named<ClockModel> | undefined;
   filter(name: string): Named<StagesModel> | undefined;
+  source(name: string): Named<SourceModel> | undefined;
+  mask(name: string): Named<SegmentsModel> | undefined;
   channel(name: string): Named<ChannelModel> | undefined;
 }
 
@@ -68,6 +80,8 @@ class SliceReader {
   private title: string | null = null;
   private readonly clocks: Named<ClockModel>[] = [];
   private readonly filters: Named<StagesModel>[] = [];
+  private readonly sources: Named<SourceModel>[] = [];
+  private readonly masks: Named<SegmentsModel>[] = [];
   private readonly channels: Named<ChannelModel>[] = [];
 
   constructor(
@@ -90,8 +104,11 @@ class SliceReader {
       title: this.title,
       clocks: this.clocks,
       filters: this.filters,
+      sources: this.sources,
+      masks: this.masks,
       channels: this.channels,
       problems: this.owned(),
+      paths: pathUses(this.text, pairs),
       lossy: lossy || doubtful,
     };
   }
@@ -101,7 +118,9 @@ class SliceReader {
     const channels = new Map<LocalProblem, string>();
     for (const { name, decoded } of this.channels) for (const problem of decoded.problems) channels.set(problem, name);
     const owner = this.slice.kind === 'channel' ? (this.channels[0]?.name ?? null) : null;
-    const named = [...this.clocks, ...this.filters, ...this.channels].flatMap(({ decoded }) => decoded.problems);
+    const named = [...this.clocks, ...this.filters, ...this.sources, ...this.masks, ...this.channels].flatMap(
+      ({ decoded }) => decoded.problems,
+    );
     // A fault inside an entry stands in the list of both.
     const problems = [...new Set([...this.faults, ...this.sections, ...named])].filter((problem) => problem !== doubt);
     return problems.map((problem) => ({ problem, channel: channels.get(problem) ?? owner }));
@@ -113,8 +132,10 @@ class SliceReader {
     if (value?.form === 'map') {
       if (key === 'clocks') this.entries(value, clock, (name) => this.known.clock(name), this.clocks);
       if (key === 'filters') this.entries(value, stages, (name) => this.known.filter(name), this.filters);
+      if (key === 'sources') this.entries(value, source, (name) => this.known.source(name), this.sources);
+      if (key === 'masks') this.entries(value, maskSegments, (name) => this.known.mask(name), this.masks);
       if (key === 'channels') this.entries(value, channel, (name) => this.known.channel(name), this.channels);
-      if (key === 'clocks' || key === 'filters' || key === 'channels') return;
+      if (sectionsOfNames.has(key)) return;
     }
     // The channels themselves may stand in slices of their own.
     if (key === 'channels' && value === null) return;
@@ -148,6 +169,8 @@ class SliceReader {
     return own && this.slice.doubtful ? [doubt, ...faults] : faults;
   }
 }
+
+const sectionsOfNames: ReadonlySet<string> = new Set(['clocks', 'filters', 'sources', 'masks', 'channels']);
 
 /** Stands for a fault that was found while the file was cut, and is reported there. */
 const doubt = errorAt({ start: 0, end: 0 }, 'syntax', '');

@@ -26,7 +26,13 @@ export function symbolsOf(reading: Reading): readonly SpecSymbol[] {
   return symbols;
 }
 
-const kinds: Readonly<Record<string, SpecSymbol['kind']>> = { clocks: 'clock', filters: 'filter', channels: 'channel' };
+const kinds: Readonly<Record<string, SpecSymbol['kind']>> = {
+  clocks: 'clock',
+  filters: 'filter',
+  sources: 'source',
+  masks: 'key',
+  channels: 'channel',
+};
 
 function sections({ slice, reading }: PlacedSlice): readonly SpecSymbol[] {
   return reading.pairs.map((pair) => {
@@ -64,9 +70,11 @@ function entryOf(pair: Pair, kind: SpecSymbol['kind'], base: number): SpecSymbol
 }
 
 function keySymbol(pair: Pair, base: number): SpecSymbol {
-  const inside = pair.key === 'unwanted' ? 'source' : pair.key === 'filter' ? 'stage' : null;
+  const inside = pair.key === 'unwanted' ? 'source' : filterKeys.has(pair.key) ? 'stage' : null;
   return symbolOf(pair, 'key', base, inside === null ? [] : items(pair.value, inside, base));
 }
+
+const filterKeys: ReadonlySet<string> = new Set(['filter', 'input-filter', 'output-filter']);
 
 /** The items of a list, or the one map that stands for a list. */
 function items(node: TreeNode | null, kind: 'stage' | 'source', base: number): readonly SpecSymbol[] {

@@ -17,6 +17,7 @@ export function tooLarge(text: string): Reading {
     names: [],
     problems: [{ code: 'too-large', severity: 'error', channel: null, span: { start: 0, end }, message, cures: [] }],
     acceptances: [],
+    paths: [],
     counts: { slices: 0, slicesRead: 0, channelsResolved: 0 },
   };
 }

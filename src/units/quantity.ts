@@ -19,6 +19,8 @@ export type Kind =
   /** % or ppm alone. */
   | 'share'
   | 'density'
+  /** How a level falls with frequency: dB/decade. */
+  | 'slope'
   | 'code'
   | 'resistance'
   | 'capacitance'
@@ -47,6 +49,7 @@ export type Unit =
   | 'V/√Hz'
   | 'dBFS/√Hz'
   | 'dBm/Hz'
+  | 'dB/decade'
   | 'LSB'
   | 'Ω'
   | 'F'

@@ -6,6 +6,8 @@ import type { Decoded } from '../../src/spec/decode';
 import { channel as channelShape } from '../../src/spec/declaration/channel';
 import type { ChannelModel } from '../../src/spec/declaration/channel';
 import { clocks } from '../../src/spec/declaration/clock';
+import { masks } from '../../src/spec/declaration/mask';
+import { sources } from '../../src/spec/declaration/source';
 import { filters } from '../../src/spec/declaration/stage';
 import type { Shape } from '../../src/spec/shape';
 import type { TreeNode } from '../../src/spec/tree';
@@ -39,6 +41,8 @@ export function resolveText(text: string, name: string): Resolution {
     sections.get(key) ? decode(shape, sections.get(key) ?? null, home).value : null;
   const knownClocks = section(clocks, 'clocks') ?? new Map<string, null>();
   const knownFilters = section(filters, 'filters') ?? new Map<string, null>();
+  const knownSources = section(sources, 'sources') ?? new Map<string, null>();
+  const knownMasks = section(masks, 'masks') ?? new Map<string, null>();
   const own = new Map<string, Decoded<ChannelModel>>();
   const map = sections.get('channels');
   for (const pair of map?.form === 'map' ? map.pairs : [])
@@ -48,9 +52,21 @@ export function resolveText(text: string, name: string): Resolution {
       channel: (known) => own.get(known),
       clock: (known) => knownClocks.get(known),
       filter: (known) => knownFilters.get(known),
-      lists: { channels: [...own.keys()], clocks: [...knownClocks.keys()], filters: [...knownFilters.keys()] },
+      source: (known) => knownSources.get(known),
+      mask: (known) => knownMasks.get(known),
+      table: () => null,
+      fileOf: () => null,
+      lists: {
+        channels: [...own.keys()],
+        clocks: [...knownClocks.keys()],
+        filters: [...knownFilters.keys()],
+        sources: [...knownSources.keys()],
+        masks: [...knownMasks.keys()],
+      },
     },
     new Map(),
+    // How a channel resolves is looked at here, computed or not.
+    (resolved) => resolved,
   );
   const resolution = resolver.resolve(name);
   assert.ok(resolution);

@@ -35,7 +35,7 @@ export function describeChannel(channel: Channel): object {
     rate: [hz * (1 + tolerance.low), hz, hz * (1 + tolerance.high)],
     wanted: channel.wanted.map((band) => [band.lowHz, band.highHz, band.levelDb]),
     reference: channel.referenceHz,
-    pulse: channel.pulse.shape === 'instant' ? null : channel.pulse.width,
+    pulse: 'width' in channel.pulse ? channel.pulse.width : null,
     stages: channel.stages.map(describeStage),
     sources: channel.unwanted.map(describeSource),
     protect: channel.protect?.map((range) => [range.lowHz, range.highHz]) ?? null,
@@ -49,11 +49,9 @@ function describeStage({ form, cornerTolerance, gainTolerance }: Stage): object 
     gains: [1 + gainTolerance.low, 1 + gainTolerance.high],
   };
   switch (form.kind) {
-    case 'butterworth':
-      return { kind: form.kind, order: form.order, corner: form.cornerHz, ...varied };
-    case 'chebyshev':
+    case 'family':
       return {
-        kind: form.kind,
+        kind: form.family,
         order: form.order,
         corner: form.cornerHz,
         ripple: form.rippleDb,
@@ -64,6 +62,8 @@ function describeStage({ form, cornerTolerance, gainTolerance }: Stage): object 
       return { kind: 'bandwidth', corner: 1 / (2 * Math.PI * form.ohm * form.farad), ...varied };
     case 'bandwidth':
       return { kind: form.kind, corner: form.cornerHz, ...varied };
+    default:
+      throw new RangeError(`the brute-force script does not know ${form.kind}`);
   }
 }
 
@@ -75,5 +75,7 @@ function describeSource(source: Source): readonly (number | null)[] {
       return [source.lowHz, Number.isFinite(source.highHz) ? source.highHz : null, source.levelDb];
     case 'anything':
       return [0, null, source.levelDb];
+    case 'spectrum':
+      throw new RangeError('the brute-force script does not know spectra');
   }
 }

@@ -1,5 +1,18 @@
 /** Builds channels without any text: sensible defaults, each overridable, for tests of what lies behind the spec layer. */
-import type { Channel, Limit, LimitKey, Pulse, Rate, Source, Stage, StageForm, WantedBand } from '../../src/spec/channel';
+import type {
+  Channel,
+  Family,
+  FamilyForm,
+  Gate,
+  Limit,
+  LimitKey,
+  Pulse,
+  Rate,
+  Source,
+  Stage,
+  StageForm,
+  WantedBand,
+} from '../../src/spec/channel';
 import type { Tolerance } from '../../src/units/quantity';
 
 /** No tolerance at all. */
@@ -39,14 +52,17 @@ export function stage(form: StageForm, options: Partial<Omit<Stage, 'form'>> = {
     name: options.name ?? null,
     label: options.label ?? 'stage 1',
     form,
+    gain: options.gain ?? 1,
+    parts: options.parts ?? [],
     cornerTolerance: options.cornerTolerance ?? exact,
+    qTolerance: options.qTolerance ?? exact,
     gainTolerance: options.gainTolerance ?? exact,
   };
 }
 
 /** A Butterworth low-pass as a stage's form. */
 export function butterworthForm(order: number, cornerHz: number): StageForm {
-  return { kind: 'butterworth', order, cornerHz };
+  return family('butterworth', order, cornerHz);
 }
 
 /** A Chebyshev low-pass as a stage's form. */
@@ -56,7 +72,23 @@ export function chebyshevForm(
   rippleDb: number,
   cornerAt: 'half-power' | 'ripple' = 'half-power',
 ): StageForm {
-  return { kind: 'chebyshev', order, cornerHz, rippleDb, cornerAt };
+  return family('chebyshev', order, cornerHz, { rippleDb, cornerAt });
+}
+
+/** A filter of a family as a stage's form; a low-pass with its corner at half power unless the options say otherwise. */
+export function family(name: Family, order: number, cornerHz: number, options: Partial<FamilyForm> = {}): FamilyForm {
+  return {
+    kind: 'family',
+    family: name,
+    filterKind: 'lowpass',
+    order,
+    cornerHz,
+    upperCornerHz: null,
+    cornerAt: 'half-power',
+    rippleDb: null,
+    attenuationDb: null,
+    ...options,
+  };
 }
 
 /** A tone as a source. */
@@ -66,19 +98,21 @@ export function tone(frequencyHz: number, levelDb = 0, options: { name?: string;
     name: options.name ?? `tone at ${String(frequencyHz)} Hz`,
     ref: null,
     frequencyHz,
+    enters: 'input',
     tolerance: options.tolerance ?? exact,
     levelDb,
+    harmonics: null,
   };
 }
 
 /** A tone anywhere in a band, as a source. */
 export function band(lowHz: number, highHz: number, levelDb = 0, name = 'band'): Source {
-  return { kind: 'band', name, ref: null, lowHz, highHz, levelDb };
+  return { kind: 'band', name, ref: null, enters: 'input', lowHz, highHz, levelDb, harmonics: null };
 }
 
 /** A tone anywhere outside the wanted bands, as a source. */
 export function anything(levelDb = 0): Source {
-  return { kind: 'anything', name: 'anything', ref: null, levelDb };
+  return { kind: 'anything', name: 'anything', ref: null, enters: 'input', levelDb };
 }
 
 /** A rectangle whose width is a share of the period; share 1 is `zero-order`. */
@@ -91,15 +125,23 @@ export function rectangleSeconds(seconds: number): Pulse {
   return { shape: 'rectangle', width: { seconds } };
 }
 
+const usualUnits: Readonly<Partial<Record<LimitKey, Limit['unit']>>> = {
+  alias: 'dBFS',
+  image: 'dBc',
+  delay: 's',
+  'delay-spread': 's',
+};
+
 /** A limit in short form. */
 export function limit(key: LimitKey, at: number, options: Partial<Omit<Limit, 'key' | 'at'>> = {}): Limit {
   return {
     key,
     at,
-    unit: options.unit ?? (key === 'alias' ? 'dBFS' : key === 'image' ? 'dBc' : 'dB'),
+    unit: options.unit ?? usualUnits[key] ?? 'dB',
     ref: options.ref ?? null,
     margin: options.margin ?? null,
     withUnwanted: options.withUnwanted ?? false,
+    sum: options.sum ?? false,
   };
 }
 
@@ -116,7 +158,13 @@ export function generate(parts: ChannelParts): Channel {
   return complete('generate', rectangleShare(1), parts);
 }
 
-function complete(direction: 'capture' | 'generate', pulse: Pulse, parts: ChannelParts): Channel {
+/** A relay channel: flat-top with a zero-order hold unless a gate is given; its stages are the input's and then the output's. */
+export function relay(parts: ChannelParts & { gate?: Gate }): Channel {
+  const stages = [...(parts.inputStages ?? []), ...(parts.outputStages ?? [])];
+  return complete('relay', parts.gate === undefined ? rectangleShare(1) : { shape: 'instant' }, { stages, ...parts });
+}
+
+function complete(direction: Channel['direction'], pulse: Pulse, parts: ChannelParts): Channel {
   const first = parts.wanted[0] ?? wanted(0, 0);
   const top = parts.wanted.reduce((best, one) => (one.highHz > best.highHz ? one : best), first);
   return {
@@ -132,11 +180,17 @@ function complete(direction: 'capture' | 'generate', pulse: Pulse, parts: Channe
     impedanceOhm: null,
     rateChoices: null,
     pulse,
+    gate: null,
+    slots: null,
     stages: [],
+    inputStages: direction === 'capture' ? (parts.stages ?? []) : [],
+    outputStages: direction === 'generate' ? (parts.stages ?? []) : [],
     testTone: { frequencyHz: top.highHz, levelDb: top.levelDb },
     jitterSeconds: 0,
     bits: null,
     limits: [],
+    levelLimit: null,
+    masks: [],
     ...parts,
   };
 }

@@ -16,6 +16,8 @@ const channelLines = [
   '"rate": 51.2 kHz',
   '# only a comment',
   'guard:',
+  'gate: { track: 40 % }',
+  'input-filter:\n→- measured: a.csv\n→  beyond: -40 dB/decade',
   'rate-choices: [48 kHz,\n→96 kHz]',
 ];
 
@@ -35,6 +37,9 @@ export const legalSpec: fc.Arbitrary<string> = fc
         'clocks: {board: {frequency: 1 MHz}}\n',
         'clocks: {\n  board: { frequency: 1 MHz },\n}\n',
         'filters:\n  guard:\n  - { bandwidth: 4 kHz }\n  -\n    bandwidth: 5 kHz # end\n',
+        'use: [ shared/common.bandkeep.yaml ]\n',
+        'sources:\n  pump: { tone: 310 kHz, level: -24 dBFS }\n  hash:\n    spectrum: hash.csv # a table\n',
+        'masks:\n  studio:\n  - { band: 0 Hz .. 5 MHz, within: ± 0.1 dB }\n',
         'filters:\n- a\n- b: c\n',
         'filters:\n    guard:\n        - bandwidth: 4 kHz\n\n        # between\n        - rc: {r: 1 kΩ, c: 2n2}\n',
       ),

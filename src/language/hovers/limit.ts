@@ -30,6 +30,9 @@ const formulas: Readonly<Record<LimitFigure['limit'], string>> = {
   flatness: 'Largest |20·log10(G(f)/G(reference))| in the wanted band, proved',
   snr: 'Test tone over the sum of the noise powers in the wanted band',
   headroom: 'Full scale over the sum of all peak amplitudes',
+  delay: '−dφ/dω at `reference`, summed in closed form over poles and zeros, and the pulse',
+  'delay-spread': 'Largest minus smallest group delay in the wanted band, proved',
+  crosstalk: '−20·log10(e)·2π·B·guard of a first-order link of corner B',
 };
 
 function headlineOf(limit: LimitFigure): string {
@@ -68,6 +71,9 @@ function contributions(limit: LimitFigure, figures: Figures): Row[] {
       return strongest(noiseParts(figures.noise));
     case 'flatness':
     case 'headroom':
+    case 'delay':
+    case 'delay-spread':
+    case 'crosstalk':
       return [];
   }
 }

@@ -7,11 +7,18 @@ import type { Answer } from './answer';
 /** How much of a definition is shown. */
 const longestDefinition = 400;
 
+const spaceWords: Readonly<Record<DefinedName['space'], string>> = {
+  clocks: 'clock',
+  filters: 'filter',
+  sources: 'source',
+  masks: 'mask',
+};
+
 /** A name that is defined in this file. */
 export function nameHover(document: SpecDocument, defined: DefinedName): Answer {
   const { reading } = document;
   const { start, end } = spanOf(reading, defined.place);
-  const kind = defined.space === 'clocks' ? 'clock' : 'filter';
+  const kind = spaceWords[defined.space];
   const users = defined.users.map((user) => `\`${user}\``);
   return {
     headline: `${kind} \`${defined.name}\`, used by ${formatCount(users.length, 'channel')}`,

@@ -41,6 +41,8 @@ function standsAt(source: Source): string {
       return bandWords(source.lowHz, source.highHz);
     case 'anything':
       return 'everywhere outside the wanted bands';
+    case 'spectrum':
+      return `under the table \`${source.path}\``;
   }
 }
 

@@ -57,16 +57,15 @@ function offersIn(reading: Reading, place: CursorPlace): readonly Offer[] {
   return keyOffers(map, otherKeys(place.map), wordsOf(place.map), place.channel && directionOf(reading, place));
 }
 
-/** Names of a space, in the order of the file; none of a space that does not exist yet. */
+/** Names of a space, in the order of the file. */
 function namesOf(reading: Reading, space: NameSpace): readonly string[] {
-  const { lists } = insideOf(reading);
-  return space === 'sources' ? [] : lists[space];
+  return insideOf(reading).lists[space];
 }
 
 const wordsOf = (map: MapNode) => map.pairs.flatMap(({ value }) => (value?.form === 'scalar' ? [value.text] : []));
 
 function directionOf(reading: Reading, { channel, path }: CursorPlace): Direction | null {
   const own = channel?.pairs.find(({ key }) => key === 'direction')?.value;
-  if (own?.form === 'scalar' && (own.text === 'capture' || own.text === 'generate')) return own.text;
+  if (own?.form === 'scalar' && (own.text === 'capture' || own.text === 'generate' || own.text === 'relay')) return own.text;
   return reading.entries.find(({ name }) => name === path[1])?.direction ?? null;
 }

@@ -42,7 +42,8 @@ export function keyOffers(
     !present.includes(name) &&
     (direction === null || (key.only?.includes(direction) ?? true)) &&
     !(decided && map.decidedBy?.includes(name) === true) &&
-    (key.with?.some((other) => company.has(other)) ?? true);
+    (key.with?.some((other) => company.has(other)) ?? true) &&
+    !(key.notWith?.some((other) => company.has(other)) ?? false);
   return Object.entries(map.fields)
     .filter(fits)
     .map(([name, key]) => ({ label: name, kind: 'key', about: aboutKey(key), text: name, key, required: key.required === true }));

@@ -27,6 +27,7 @@ export const unitBounds: Readonly<Record<Unit, Bounds>> = {
   'V/√Hz': { low: 1e-18, high: 1e3 },
   'dBFS/√Hz': decibels,
   'dBm/Hz': decibels,
+  'dB/decade': { low: -1000, high: 1000 },
   LSB: { low: 1e-6, high: 1e9 },
   Ω: { low: 1e-6, high: 1e12 },
   F: { low: 1e-18, high: 1e3 },
@@ -55,6 +56,27 @@ export const dividers: readonly [number, number] = [1, 1_000_000_000];
 
 /** The ripple of a filter family in dB. */
 export const ripples: UnitBounds = { dB: { low: 1e-4, high: 20 } };
+
+/** The least loss of a stop band in dB. */
+export const attenuations: UnitBounds = { dB: { low: 0.1, high: 300 } };
+
+/** The Q of a section. */
+export const qualities: readonly [number, number] = [1e-3, 1e6];
+
+/** The gain of a stage. */
+export const gains: UnitBounds = { '%': { low: 1e-6, high: 10 }, ppm: { low: 1e-6, high: 10 } };
+
+/** Roots of a filter that is given by them: real and imaginary part. */
+export const rootHz: readonly [number, number] = [1e-9, 1e15];
+
+/** The most roots that one stage may list, conjugates counted. */
+export const mostRoots = 40;
+
+/** The highest harmonic of a source. */
+export const harmonicNumbers: readonly [number, number] = [2, 1000];
+
+/** Time slots on one link. */
+export const slotCounts: readonly [number, number] = [1, 10_000];
 
 /** The share by which a corner may be off. */
 export const cornerShares: UnitBounds = { '%': { low: 0, high: 0.9 }, ppm: { low: 0, high: 0.9 } };

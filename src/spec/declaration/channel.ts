@@ -1,9 +1,9 @@
 /** Declares a channel: one sampled path with what it carries, what it meets and what it is judged by. */
 import { either, endlessRange, fields, later, listOf, nameOf, quantity, range, text, whole, within, word } from '../shapes';
 import type { Direction, TypeOf } from '../shape';
-import { frequencyOrZero, fullScales, timeOrZero, wordLengths } from './bounds';
+import { frequencyOrZero, fullScales, slotCounts, timeOrZero, wordLengths } from './bounds';
 import { limits } from './limits';
-import { aperture, hold } from './pulse';
+import { aperture, gate, hold } from './pulse';
 import { rate, rateChoices } from './rate';
 import { unwanted } from './source';
 import { filter } from './stage';
@@ -27,12 +27,23 @@ const testTone = fields('a test tone', {
   level: { shape: quantity('level'), about: 'Its level.', fallback: 'the wanted level' },
 });
 
+const slots = fields('the time slots', {
+  count: { shape: whole(...slotCounts), about: 'How many slots share one period.', required: true },
+  guard: {
+    shape: within(quantity('time'), timeOrZero),
+    about: 'From the end of one pulse to the start of the next.',
+    fallback: 'the rest of the slot',
+  },
+  link: { shape: quantity('frequency'), about: 'The corner of the first-order link that the slots share.', required: true },
+});
+
 const signalKeys = {
   direction: {
-    shape: word(
-      { capture: 'Analogue to digital.', generate: 'Digital to analogue.' },
-      { relay: 'Sampled and rebuilt, never digitised.' },
-    ),
+    shape: word({
+      capture: 'Analogue to digital.',
+      generate: 'Digital to analogue.',
+      relay: 'Sampled and rebuilt, never digitised.',
+    }),
     about: 'Which way the signal goes.',
     required: true,
   },
@@ -88,7 +99,20 @@ const samplingKeys = {
     fallback: 'instant',
     only: capture,
   },
-  hold: { shape: hold, about: 'The pulse that each sample leaves as.', fallback: 'zero-order', only: leaving },
+  hold: {
+    shape: hold,
+    about: 'The pulse that each sample leaves as.',
+    fallback: 'zero-order; in relay only where there is no `gate`',
+    only: leaving,
+  },
+  gate: {
+    shape: gate,
+    about: 'Natural sampling: the pulse during which the input passes, which scales each copy as a whole; or { `track` }.',
+    only: relay,
+  },
+  'input-filter': { shape: filter, about: 'The analogue path before the sampler.', only: relay },
+  'output-filter': { shape: filter, about: 'The analogue path behind the sampler.', only: relay },
+  slots: { shape: slots, about: 'Time slots that share a link: { `count`, `guard`, `link` }.', only: relay },
   filter: { shape: filter, about: 'The analogue path: a name from `filters`, a stage, or a list of stages.', only: converting },
   'test-tone': {
     shape: testTone,
@@ -110,16 +134,12 @@ const samplingKeys = {
 } as const;
 
 const laterKeys = {
-  gate: later('The pulse of a natural gate, or how long it tracks.', relay),
-  'input-filter': later('The analogue path before the sampler.', relay),
-  'output-filter': later('The analogue path behind the sampler.', relay),
   converter: later("The converter's own noise, distortion and interleaving.", converting),
   acquire: later('The network that the sampling capacitor is charged through.', capture),
   differential: later('Two sampling capacitors, so twice kT/C.', capture),
   decimate: later('Digital filters behind the converter that lower the rate.', capture),
   interpolate: later('Digital filters before the converter that raise the rate.', generate),
   correct: later("A digital filter against the hold's droop.", generate),
-  slots: later('Time slots that share a link.', relay),
   temperature: later('The temperature or range of temperatures.'),
   'worst-case': later('How tolerances are combined.'),
 } as const;

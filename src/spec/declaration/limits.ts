@@ -1,8 +1,9 @@
 /** Declares `limits`: what a channel is judged by. */
 import type { Kind } from '../../units/quantity';
-import { either, fields, later, quantity, text, within, word } from '../shapes';
+import { either, endlessRange, fields, later, quantity, text, within, word } from '../shapes';
 import type { Direction, TypeOf, UnitBounds } from '../shape';
-import { distances, margins } from './bounds';
+import { distances, margins, timeOrZero } from './bounds';
+import { mask } from './mask';
 
 const long = {
   ref: { shape: text, about: "The requirement's own number." },
@@ -26,7 +27,7 @@ const alias = either(
     {
       at: { shape: aliasValue, about: 'The limit itself.' },
       ...long,
-      sum: later('The limit of all landings together, as powers.'),
+      sum: { shape: aliasValue, about: 'The limit of all landings of all sources together, as powers.' },
     },
     { decidedBy: ['at', 'sum'] },
   ),
@@ -44,6 +45,24 @@ const snr = either(
     },
   }),
 );
+
+const timeLong = {
+  ...long,
+  margin: { ...long.margin, shape: within(quantity('time'), timeOrZero), fallback: 'a tenth of the limit' },
+} as const;
+
+const time = either(
+  quantity('time'),
+  fields('a limit', { at: { shape: quantity('time'), about: 'The limit itself.', required: true }, ...timeLong }),
+);
+
+const levelRange = endlessRange('level');
+const level = either(
+  levelRange,
+  fields('a limit', { at: { shape: levelRange, about: 'The range itself.', required: true }, ...long }),
+);
+
+const masked = either(mask, fields('a limit', { at: { shape: mask, about: 'The mask itself.', required: true }, ...long }));
 
 const capture: readonly Direction[] = ['capture', 'relay'];
 const output: readonly Direction[] = ['generate', 'relay'];
@@ -70,18 +89,25 @@ export const limits = fields('the limits', {
     shape: limit({}, 'decibel'),
     about: 'At least: full scale over the sum of all peaks at the sampler, or of the words to be converted.',
   },
-  delay: later('At most: the group delay at `reference`.'),
-  'delay-spread': later('At most: the largest minus the smallest group delay in the wanted band.'),
-  level: later('The range that the wanted output must stay in.'),
-  response: later('A mask for the analogue path.'),
-  through: later('A mask for the end-to-end gain.'),
-  output: later('A mask for everything that leaves outside the wanted band.', output),
+  delay: { shape: time, about: 'At most: the group delay at `reference`.' },
+  'delay-spread': { shape: time, about: 'At most: the largest minus the smallest group delay in the wanted band.' },
+  level: { shape: level, about: 'The range that the wanted output must stay in over its whole band: `-3 .. -1 dBFS`.' },
+  response: {
+    shape: masked,
+    about: 'A mask for the analogue path, relative to its gain at `reference`: a list of segments, or the name of a mask.',
+  },
+  through: { shape: masked, about: 'A mask for the end-to-end gain, relative to its value at `reference`.' },
+  output: { shape: masked, about: 'A mask in dBFS for everything that leaves outside the wanted band.', only: output },
   sinad: later('At least: signal over noise and distortion.', converted),
   enob: later('At least: the effective number of bits.', converted),
   noise: later('At most: all noise in the wanted band.'),
   spur: later('At most: distortion and interleave products in the protected ranges.', converted),
   settling: later('At most: what is left when the acquisition ends.', ['capture']),
-  crosstalk: later('At most: what one time slot leaves in the next.', ['relay']),
+  crosstalk: {
+    shape: limit({}, 'decibel'),
+    about: 'At most: what one time slot leaves in the next, such as `-60 dB`.',
+    only: ['relay'],
+  },
 });
 
 /** Limits as they were written. */

@@ -2,13 +2,13 @@
 import { channel } from '../declaration/channel';
 import { orList } from '../../units/fault';
 import { keyOf } from '../decode-fields';
-import type { Fields, Shape } from '../shape';
+import type { Direction, Fields, Shape } from '../shape';
 import type { Path } from '../place';
 import type { Merged } from './like';
 import type { Report } from './report';
 
 /** Adds a fault for each key (of the channel and of its limits) that a channel of this direction does not take. */
-export function checkDirections(direction: 'capture' | 'generate', merged: Merged, report: Report): void {
+export function checkDirections(direction: Direction, merged: Merged, report: Report): void {
   const fields = fieldsOf(channel);
   for (const name of Object.keys(merged.model)) checkKey(direction, fields, [], name, report);
   const { limits } = merged.model;
@@ -31,7 +31,7 @@ function fieldsOf(shape: Shape<unknown>): Fields | null {
   return shape.map !== undefined && 'fields' in shape.map ? shape.map : null;
 }
 
-function checkKey(direction: 'capture' | 'generate', fields: Fields | null, above: Path, name: string, report: Report): void {
+function checkKey(direction: Direction, fields: Fields | null, above: Path, name: string, report: Report): void {
   const only = fields === null ? undefined : keyOf(fields, name)?.only;
   if (only === undefined || only.includes(direction)) return;
   const owners = orList(only.map((owner) => `\`${owner}\``));

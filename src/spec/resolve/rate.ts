@@ -52,7 +52,8 @@ function clockOf(named: Named | null | undefined, path: Path, lookup: Lookup, re
   report.use('clocks', named.refersTo);
   const model = lookup.clock(named.refersTo);
   if (model === undefined) return report.unknownName(path, { space: 'clocks', name: named.refersTo }, lookup);
-  return model === null ? report.leansOnFault() : { name: named.refersTo, model };
+  if (model === null) return report.leansOnFaultOf({ space: 'clocks', name: named.refersTo }, path, lookup);
+  return { name: named.refersTo, model };
 }
 
 /** A missing factor is 1; a faulty one makes the share unknown. */

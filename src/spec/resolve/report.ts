@@ -4,7 +4,9 @@ import { nearest } from '../nearest';
 import type { Path } from '../place';
 import type { ProblemCode } from '../reading';
 import { scalarText } from '../scalar-text';
-import type { Lookup, ResolveProblem, Use } from './resolution';
+import type { SpecTable, TableUse } from '../tables/spec-table';
+import { markOf } from '../tables/spec-table';
+import type { DefinedSpace, Lookup, NameUse, ResolveProblem, Use } from './resolution';
 
 /** A growing list of faults and uses. */
 export class Report {
@@ -31,13 +33,29 @@ export class Report {
     return null;
   }
 
+  /** The same of something that may stand in another file, where nobody looks for it: then this channel's text says so. */
+  leansOnFaultOf({ space, name }: { readonly space: DefinedSpace; readonly name: string }, path: Path, lookup: Lookup): null {
+    const file = lookup.fileOf(space, name);
+    if (file === null) return this.leansOnFault();
+    return this.fault(path, 'file-not-read', `\`${name}\` of \`${file}\` is not whole: cure the faults of that file first`);
+  }
+
+  /** A table that the channel leans on; null where it could not be read. */
+  table(use: TableUse, path: Path, lookup: Lookup): SpecTable | null {
+    this.use('tables', markOf(use));
+    const found = lookup.table(use);
+    if (found !== null) return found;
+    if (use.file === null) return this.leansOnFault();
+    return this.fault(path, 'file-not-read', `\`${use.path}\`, which \`${use.file}\` names, could not be read`);
+  }
+
   /** Notes a name that was looked up. */
   use(space: Use['space'], name: string): void {
     this.used.set(`${space} ${name}`, { space, name });
   }
 
   /** Adds a fault for a name that does not exist, with the nearest one that does. */
-  unknownName(path: Path, use: Use, lookup: Lookup): null {
+  unknownName(path: Path, use: NameUse, lookup: Lookup): null {
     const known = [...lookup.names(use.space)];
     const meant = nearest(use.name, known);
     const what = `there is no \`${use.name}\` among the \`${use.space}\` of this file`;

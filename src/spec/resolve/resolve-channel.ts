@@ -7,14 +7,15 @@ import { mergeLike } from './like';
 import type { Merged } from './like';
 import { fullScaleVpp } from './levels';
 import type { Scale } from './levels';
-import { resolveLimits } from './limits';
+import { resolveLevelLimit, resolveLimits } from './limits';
+import { resolveMasks } from './masks';
 import { oneOrMany } from './one-or-many';
-import { resolvePulse } from './pulse';
 import { resolveRate, resolveRateChoices } from './rate';
+import { resolveSampling, resolveSlots } from './relay';
 import { Report } from './report';
 import type { Lookup, Resolution, ResolveProblem } from './resolution';
 import { bandBetween, resolveSources } from './sources';
-import { resolveStages } from './stages';
+import { resolvePaths } from './paths';
 import { resolveReference, resolveTestTone, resolveWanted } from './wanted';
 
 /**
@@ -41,23 +42,25 @@ export function resolveChannel(name: string, own: Decoded<ChannelModel>, lookup:
 
 function partsOf(
   name: string,
-  direction: 'capture' | 'generate',
+  direction: Channel['direction'],
   model: ChannelModel,
   lookup: Lookup,
   report: Report,
 ): Channel | null {
   const scale = scaleOf(model, report);
   const wanted = model.wanted ? resolveWanted(model.wanted, scale, report) : null;
-  const unwanted = given(model.unwanted, [], (stated) => resolveSources(stated, scale, report));
   const rate = model.rate ? resolveRate(model.rate, lookup, report) : null;
   const rateChoices = given(model['rate-choices'], null, (stated) => resolveRateChoices(stated, lookup, report));
-  const stages = given(model.filter, [], (stated) => resolveStages(stated, lookup, report));
-  const stated = direction === 'capture' ? model.aperture : model.hold;
-  const pulse = stated === null ? null : resolvePulse(direction, stated, rate?.hz ?? null, report);
-  const limits = given(model.limits, [], resolveLimits);
+  const paths = resolvePaths(direction, model, lookup, report);
+  const unwanted = given(model.unwanted, [], (stated) => resolveSources(stated, { scale, ...paths, lookup, report }));
+  const sampling = resolveSampling(direction, model, rate?.hz ?? null, report);
+  const slots = given(model.slots, undefined, (stated) => resolveSlots(stated, sampling, rate?.hz ?? null, report));
+  const judged = judgedParts(model, scale, lookup, report);
   const referenceHz = resolveReference(model.reference, wanted ?? [], report);
   const testTone = resolveTestTone(model['test-tone'], wanted ?? [], scale, report);
-  if (!wanted || !unwanted || !rate || !stages || !pulse || !limits || referenceHz === null || testTone === null) return null;
+  const { inputStages, outputStages } = paths;
+  if (!wanted || !unwanted || !rate || !inputStages || !outputStages || !sampling || slots === null || !judged) return null;
+  if (referenceHz === null || testTone === null) return null;
   return {
     name,
     direction,
@@ -67,13 +70,31 @@ function partsOf(
     unwanted,
     rate,
     rateChoices,
-    stages,
-    pulse,
-    limits,
+    stages: [...inputStages, ...outputStages],
+    inputStages,
+    outputStages,
+    ...sampling,
+    slots: slots ?? null,
+    ...judged,
     referenceHz,
     testTone,
     protect: protectedBands(model, (rate.hz / 2) * (1 + rate.tolerance.high)),
   };
+}
+
+/** Limits, the level's range and masks; null where one of them is faulty. */
+function judgedParts(
+  model: ChannelModel,
+  scale: Scale,
+  lookup: Lookup,
+  report: Report,
+): Pick<Channel, 'limits' | 'levelLimit' | 'masks'> | null {
+  if (model.limits === undefined) return { limits: [], levelLimit: null, masks: [] };
+  if (model.limits === null) return null;
+  const limits = resolveLimits(model.limits);
+  const levelLimit = given(model.limits.level, undefined, (stated) => resolveLevelLimit(stated, scale, report));
+  const masks = resolveMasks(model.limits, lookup, report);
+  return limits === null || levelLimit === null || masks === null ? null : { limits, levelLimit: levelLimit ?? null, masks };
 }
 
 function scaleOf(model: ChannelModel, report: Report): Scale {

@@ -1,30 +1,28 @@
-/** Resolves `unwanted` to tones, bands and `anything`, each with a name that messages can use. */
-import type { Band, Source } from '../channel';
+/** Resolves `unwanted` to tones, bands, spectra and `anything`, each with a name that messages can use. */
+import type { AnythingSource, Band, BandSource, Source, SpectrumSource, ToneSource } from '../channel';
 import type { ChannelModel } from '../declaration/channel';
 import type { SourceModel } from '../declaration/source';
 import type { Path } from '../place';
+import type { Named } from '../shape';
 import { formatFrequency } from '../../units/format';
 import type { Quantity } from '../../units/quantity';
+import { resolveEntrance, resolveHarmonics } from './entrance';
 import { levelDb } from './levels';
-import type { Scale } from './levels';
 import { oneOrMany } from './one-or-many';
 import { reportRepeatedNames } from './repeated-names';
-import type { Report } from './report';
+import type { SourceContext } from './source-context';
 import { settledTolerance } from './tolerance';
 
 /** The sources in their order, or null where one of them is faulty. */
-export function resolveSources(
-  stated: NonNullable<ChannelModel['unwanted']>,
-  scale: Scale,
-  report: Report,
-): readonly Source[] | null {
-  const models = oneOrMany<SourceModel | 'anything' | null>(stated);
+export function resolveSources(stated: NonNullable<ChannelModel['unwanted']>, context: SourceContext): readonly Source[] | null {
+  const models = oneOrMany<SourceModel | 'anything' | Named | null>(stated);
+  const written = models.map((model, index) => writtenOf(model, ['unwanted', index], context));
   reportRepeatedNames(
-    models.map((model) => (model === 'anything' ? null : model)),
+    written.map((one) => one && { name: one.name }),
     'unwanted',
-    report,
+    context.report,
   );
-  const sources = models.map((model, index) => (model === null ? null : sourceOf(model, ['unwanted', index], scale, report)));
+  const sources = written.map((one) => (one === null ? null : sourceOf(one, context)));
   const whole = sources.flatMap((source) => source ?? []);
   return whole.length === sources.length ? whole : null;
 }
@@ -35,23 +33,94 @@ export const bandBetween = (range: { readonly low: Quantity; readonly high: Quan
   highHz: range.high.value,
 });
 
-function sourceOf(model: SourceModel | 'anything', path: Path, scale: Scale, report: Report): Source | null {
-  if (model === 'anything') return { kind: 'anything', name: 'anything', ref: null, levelDb: 0 };
-  const ref = model.ref ?? null;
-  if (model.anything) {
-    const level = levelDb(model.anything, scale, [...path, 'anything'], report);
-    return level === null ? null : { kind: 'anything', name: model.name ?? 'anything', ref, levelDb: level };
-  }
-  const level = model.level ? levelDb(model.level, scale, [...path, 'level'], report) : null;
-  if (level === null) return null;
-  if (model.tone) {
-    const { value, tolerance } = model.tone;
-    const name = model.name ?? `tone at ${formatFrequency(value)}`;
-    return { kind: 'tone', name, ref, frequencyHz: value, tolerance: settledTolerance(tolerance), levelDb: level };
-  }
+/** A source with its name and where it is written. */
+interface Written {
+  readonly model: SourceModel;
+  readonly name: string | null;
+  readonly path: Path;
+  readonly file: string | null;
+}
+
+/** Full scale, where `anything` has no level of its own. */
+const anythingModel: SourceModel = { anything: { value: 0, unit: 'dBFS' } };
+
+function writtenOf(
+  model: SourceModel | 'anything' | Named | null,
+  path: Path,
+  { lookup, report }: SourceContext,
+): Written | null {
+  if (model === null) return null;
+  if (model === 'anything') return { model: anythingModel, name: null, path, file: null };
+  if (!('refersTo' in model)) return { model, name: model.name ?? null, path, file: null };
+  const name = model.refersTo;
+  report.use('sources', name);
+  const found = lookup.source(name);
+  if (found === undefined) return report.unknownName(path, { space: 'sources', name }, lookup);
+  if (found === null) return report.leansOnFaultOf({ space: 'sources', name }, path, lookup);
+  return { model: found, name: found.name ?? name, path, file: lookup.fileOf('sources', name) };
+}
+
+function sourceOf(written: Written, context: SourceContext): Source | null {
+  const { model, path } = written;
+  const enters = resolveEntrance(model.enters, [...path, 'enters'], context);
+  if (enters === null) return null;
+  const common = { ref: model.ref ?? null, enters };
+  if (model.anything) return anythingOf(written, common, context);
+  if (model.spectrum) return spectrumOf(written, model.spectrum, common, context);
+  const level = model.level ? levelDb(model.level, context.scale, [...path, 'level'], context.report) : null;
+  const harmonics = resolveHarmonics(model.harmonics);
+  if (level === null || harmonics === undefined) return null;
+  const found = { ...common, levelDb: level, harmonics };
+  return toneOf(written, found) ?? bandOf(written, found);
+}
+
+type Common = Pick<Source, 'ref' | 'enters'>;
+type Leveled = Common & Pick<ToneSource, 'levelDb' | 'harmonics'>;
+
+function anythingOf({ model, name, path }: Written, common: Common, { scale, report }: SourceContext): AnythingSource | null {
+  const level = model.anything ? levelDb(model.anything, scale, [...path, 'anything'], report) : null;
+  return level === null ? null : { kind: 'anything', name: name ?? 'anything', ...common, levelDb: level };
+}
+
+function toneOf({ model, name }: Written, found: Leveled): ToneSource | null {
+  if (!model.tone) return null;
+  const { value, tolerance } = model.tone;
+  return {
+    kind: 'tone',
+    name: name ?? `tone at ${formatFrequency(value)}`,
+    ...found,
+    frequencyHz: value,
+    tolerance: settledTolerance(tolerance),
+  };
+}
+
+function bandOf({ model, name }: Written, found: Leveled): BandSource | null {
   if (!model.band) return null;
   const band = bandBetween(model.band);
-  return { kind: 'band', name: model.name ?? bandName(band), ref, ...band, levelDb: level };
+  return { kind: 'band', name: name ?? bandName(band), ...found, ...band };
+}
+
+function spectrumOf(
+  { model, name, path, file }: Written,
+  tablePath: string,
+  common: Common,
+  { scale, lookup, report }: SourceContext,
+): SpectrumSource | null {
+  const at = [...path, 'spectrum'];
+  const found = report.table({ role: 'spectrum', file, path: tablePath }, at, lookup);
+  if (found?.kind !== 'spectrum' || model.lines === null) return null;
+  const levels: number[] = [];
+  for (const value of found.levels) {
+    const level = levelDb({ value, unit: found.unit }, scale, at, report);
+    if (level === null) return null;
+    levels.push(level);
+  }
+  const points = found.frequenciesHz.map((frequencyHz, index) => ({ frequencyHz, levelDb: levels[index] ?? -Infinity }));
+  const lines = model.lines === 'true';
+  if (!lines && points.length < 2)
+    return report.fault(at, 'file-not-read', `\`${tablePath}\` has one row: an envelope needs at least two`);
+  const highest = levels.reduce((most, level) => Math.max(most, level), -Infinity);
+  return { kind: 'spectrum', name: name ?? tablePath, ...common, path: tablePath, points, lines, levelDb: highest };
 }
 
 function bandName({ lowHz, highHz }: Band): string {

@@ -1,25 +1,41 @@
 /** Resolves the stages of a channel's path, by name or in place. */
-import type { Stage, StageForm } from '../channel';
-import type { StageModel, StagesModel } from '../declaration/stage';
-import type { Named } from '../shape';
+import type { Channel, Stage } from '../channel';
+import type { FilterModel, StageModel, StagesModel } from '../declaration/stage';
+import type { Path } from '../place';
 import { oneOrMany } from './one-or-many';
 import type { Lookup } from './resolution';
 import type { Report } from './report';
-import { cornerToleranceOfRc, exact, settledTolerance } from './tolerance';
+import { stageForm } from './stage-form';
+import type { FormContext } from './stage-form';
+import { partsOf, stageGain, stageTolerances } from './stage-values';
+
+/** The keys under which a channel has stages. */
+export type FilterKey = 'filter' | 'input-filter' | 'output-filter';
+
+/** What messages call stages that stand in a channel itself. */
+const ownNames: Readonly<Record<FilterKey, string | null>> = {
+  filter: null,
+  'input-filter': 'input filter',
+  'output-filter': 'output filter',
+};
 
 /** The stages in series, or null where a part of them is faulty. */
-export function resolveStages(stated: Named | StagesModel, lookup: Lookup, report: Report): readonly Stage[] | null {
-  if (!('refersTo' in stated)) return allStages(stated, null);
+export function resolveStages(stated: FilterModel, key: FilterKey, lookup: Lookup, report: Report): readonly Stage[] | null {
+  if (!('refersTo' in stated)) return allStages(stated, ownNames[key], { lookup, report, file: null, path: [key] });
   const name = stated.refersTo;
   report.use('filters', name);
   const named = lookup.filter(name);
-  if (named === undefined) return report.unknownName(['filter'], { space: 'filters', name }, lookup);
-  return named === null ? report.leansOnFault() : allStages(named, name);
+  if (named === undefined) return report.unknownName([key], { space: 'filters', name }, lookup);
+  if (named === null) return report.leansOnFaultOf({ space: 'filters', name }, [key], lookup);
+  return allStages(named, name, { lookup, report, file: lookup.fileOf('filters', name), path: [key] });
 }
 
-function allStages(stated: StagesModel, filter: string | null): readonly Stage[] | null {
+function allStages(stated: StagesModel, filter: string | null, context: FormContext): readonly Stage[] | null {
   const models = oneOrMany<StageModel | null>(stated);
-  const stages = models.map((model, index) => (model === null ? null : stageOf(model, labelOf(filter, index, models.length))));
+  const stages = models.map((model, index) => {
+    const own = { ...context, path: [...context.path, index] };
+    return model === null ? null : stageOf(model, labelOf(filter, index, models.length), own);
+  });
   const whole = stages.flatMap((stage) => stage ?? []);
   return whole.length === stages.length ? whole : null;
 }
@@ -30,27 +46,16 @@ function labelOf(filter: string | null, index: number, count: number): string {
   return count === 1 ? filter : `${filter}, ${stage}`;
 }
 
-function stageOf(model: StageModel, label: string): Stage | null {
-  const form = formOf(model);
+function stageOf(model: StageModel, label: string, context: FormContext): Stage | null {
+  const form = stageForm(model, context);
   if (form === null) return null;
   const name = model.name ?? null;
-  return { name, label: name ?? label, form, cornerTolerance: cornerToleranceOf(model), gainTolerance: exact };
+  const gain = form.kind === 'family' ? stageGain(model) : 1;
+  return { name, label: name ?? label, form, gain, parts: partsOf(model), ...stageTolerances(model) };
 }
 
-function formOf(model: StageModel): StageForm | null {
-  if (model.rc?.r && model.rc.c) return { kind: 'rc', ohm: model.rc.r.value, farad: model.rc.c.value };
-  if (model.bandwidth) return { kind: 'bandwidth', cornerHz: model.bandwidth.value };
-  if (!model.family || !model.order || !model.corner) return null;
-  const common = { order: model.order, cornerHz: model.corner.value };
-  if (model.family === 'butterworth') return { kind: 'butterworth', ...common };
-  if (!model.ripple) return null;
-  return { kind: 'chebyshev', ...common, rippleDb: model.ripple.value, cornerAt: model['corner-at'] ?? 'half-power' };
-}
-
-function cornerToleranceOf(model: StageModel) {
-  if (model.rc?.r && model.rc.c) {
-    return cornerToleranceOfRc(settledTolerance(model.rc.r.tolerance), settledTolerance(model.rc.c.tolerance));
-  }
-  const share = model.tolerance?.corner?.value ?? 0;
-  return { low: 0 - share, high: share };
+/** Where a stage of a channel stands, counted as in `stages`. */
+export function stagePath({ direction, inputStages }: Pick<Channel, 'direction' | 'inputStages'>, index: number): Path {
+  if (direction !== 'relay') return ['filter', index];
+  return index < inputStages.length ? ['input-filter', index] : ['output-filter', index - inputStages.length];
 }

@@ -35,8 +35,8 @@ channels:
 
 describe('completion', () => {
   it('offers the keys of a file that do not stand yet', () => {
-    assert.deepEqual(labelsAt(`${head}¦`), ['title', 'notes']);
-    assert.deepEqual(labelsAt('¦'), ['bandkeep', 'title', 'notes', 'clocks', 'filters', 'channels']);
+    assert.deepEqual(labelsAt(`${head}¦`), ['title', 'notes', 'use', 'sources', 'masks']);
+    assert.deepEqual(labelsAt('¦'), ['bandkeep', 'title', 'notes', 'use', 'clocks', 'sources', 'filters', 'masks', 'channels']);
   });
 
   it('offers the keys of a channel that fit its direction and do not stand yet', () => {
@@ -55,7 +55,7 @@ describe('completion', () => {
     assert.equal(chosen(`${head}    levels-at:¦\n`, 'sampler'), `${head}    levels-at: sampler\n`);
     assert.deepEqual(labelsAt(`${head}    filter: pick¦\n`), ['pick-up guard']);
     assert.equal(chosen(`${head}    filter: pick-up gu¦\n`, 'pick-up guard'), `${head}    filter: pick-up guard\n`);
-    assert.deepEqual(labelsAt(`${head}    aperture: ¦`), ['instant', 'zero-order']);
+    assert.deepEqual(labelsAt(`${head}    aperture: ¦`), ['instant', 'zero-order', 'linear']);
   });
 
   it('offers other channels for `like`, not the channel itself', () => {
@@ -74,14 +74,41 @@ describe('completion', () => {
 
   it('offers what goes with what stands already', () => {
     const stage = (keys: string) => labelsAt(`${head}    filter: { ${keys}, ¦ }\n`);
-    assert.deepEqual(stage('family: butterworth'), ['name', 'order', 'corner', 'corner-at', 'tolerance']);
-    assert.deepEqual(stage('family: chebyshev, order: 3'), ['name', 'corner', 'ripple', 'corner-at', 'tolerance']);
+    assert.deepEqual(stage('family: butterworth'), ['name', 'kind', 'order', 'corner', 'corner-at', 'gain', 'tolerance']);
+    assert.deepEqual(stage('family: bessel, kind: bandpass, order: 3'), ['name', 'corners', 'corner-at', 'gain', 'tolerance']);
+    assert.deepEqual(stage('family: chebyshev, order: 3'), [
+      'name',
+      'kind',
+      'corner',
+      'ripple',
+      'corner-at',
+      'gain',
+      'tolerance',
+    ]);
     assert.deepEqual(stage('bandwidth: 3 kHz'), ['name', 'tolerance']);
-    assert.deepEqual(labelsAt(`${head}    filter: { name: a, ¦ }\n`), ['family', 'rc', 'bandwidth']);
+    assert.deepEqual(labelsAt(`${head}    filter: { name: a, ¦ }\n`), [
+      'family',
+      'second-order',
+      'rc',
+      'cr',
+      'rlc',
+      'bandwidth',
+      'poles',
+      'measured',
+    ]);
   });
 
   it('offers keys and words behind a dash', () => {
-    assert.deepEqual(labelsAt(`${head}    unwanted:\n      - ¦\n`), ['name', 'tone', 'band', 'anything', 'ref', 'anything']);
+    assert.deepEqual(labelsAt(`${head}    unwanted:\n      - ¦\n`), [
+      'name',
+      'tone',
+      'band',
+      'anything',
+      'spectrum',
+      'enters',
+      'ref',
+      'anything',
+    ]);
     assert.deepEqual(labelsAt(`${head}    unwanted:\n      - any¦\n`).includes('anything'), true);
     assert.equal(
       chosen(`${head}    unwanted:\n      - tone: 3 kHz\n        ¦\n`, 'level'),
@@ -90,12 +117,28 @@ describe('completion', () => {
   });
 
   it('offers the keys of a map on a line of its own', () => {
-    assert.deepEqual(labelsAt(`${head}    limits:\n      ¦\n`), ['alias', 'flatness', 'snr', 'headroom']);
+    assert.deepEqual(labelsAt(`${head}    limits:\n      ¦\n`), [
+      'alias',
+      'flatness',
+      'snr',
+      'headroom',
+      'delay',
+      'delay-spread',
+      'level',
+      'response',
+      'through',
+    ]);
     assert.deepEqual(labelsAt(`${head.replace('capture', 'generate')}    limits:\n      ¦\n`), [
       'image',
       'flatness',
       'snr',
       'headroom',
+      'delay',
+      'delay-spread',
+      'level',
+      'response',
+      'through',
+      'output',
     ]);
     assert.deepEqual(labelsAt('clocks:\n  board:\n    ¦\n'), ['frequency', 'jitter']);
   });

@@ -29,6 +29,8 @@ const now = (map: Fields) =>
     .map(([name]) => name)
     .sort();
 
+const companions = (key: Key) => [...(key.with ?? []), ...(key.notWith ?? []), ...(key.requiredWith ?? [])];
+
 const keys = (map: Fields) => Object.keys(map.fields).sort();
 
 // The tables of the language's own description, as words.
@@ -37,7 +39,7 @@ const table = (words: string) => words.trim().split(/\s+/).sort();
 describe('the declaration', () => {
   it('holds every key at the top of a file', () => {
     assert.deepEqual(keys(fieldsOf(declaration)), table('bandkeep title notes use clocks sources filters masks channels'));
-    assert.deepEqual(now(fieldsOf(declaration)), table('bandkeep title notes clocks filters channels'));
+    assert.deepEqual(now(fieldsOf(declaration)), table('bandkeep title notes use clocks sources filters masks channels'));
   });
 
   it('holds every key of a channel', () => {
@@ -46,14 +48,17 @@ describe('the declaration', () => {
       temperature worst-case limits ref`;
     assert.deepEqual(keys(fieldsOf(channel)), table(all));
     const computed = `direction like wanted guard levels-at reference unwanted protect full-scale impedance rate rate-choices aperture
-      hold filter test-tone jitter bits limits ref`;
+      hold gate filter input-filter output-filter slots test-tone jitter bits limits ref`;
     assert.deepEqual(now(fieldsOf(channel)), table(computed));
   });
 
   it('holds every limit', () => {
     const all = `alias image flatness delay delay-spread level response through output snr sinad enob noise spur headroom settling crosstalk`;
     assert.deepEqual(keys(fieldsOf(limits)), table(all));
-    assert.deepEqual(now(fieldsOf(limits)), table('alias image flatness snr headroom'));
+    assert.deepEqual(
+      now(fieldsOf(limits)),
+      table('alias image flatness delay delay-spread level response through output snr headroom crosstalk'),
+    );
   });
 
   it('holds every key of a source and of a stage', () => {
@@ -64,6 +69,9 @@ describe('the declaration', () => {
     const all = `name family order corner ripple corner-at rc bandwidth tolerance second-order cr rlc sallen-key multiple-feedback ladder
       poles zeros measured kind corners attenuation gain gain-at source load below beyond amplifier noise flicker build`;
     assert.deepEqual(keys(fieldsOf(stage)), table(all));
+    const later = (map: Fields) => keys(map).filter((name) => map.fields[name]?.later === true);
+    assert.deepEqual(later(fieldsOf(source)), table('noise power'));
+    assert.deepEqual(later(fieldsOf(stage)), table('sallen-key multiple-feedback ladder amplifier noise flicker build'));
   });
 
   it('says of every key and word what it means, in a sentence', () => {
@@ -79,7 +87,7 @@ describe('the declaration', () => {
     for (const map of maps(declaration)) {
       const words = Object.values(map.fields).flatMap((key: Key) => Object.keys(key.shape.scalar?.words ?? {}));
       const known = new Set([...Object.keys(map.fields), ...words]);
-      const named = [...(map.decidedBy ?? []), ...Object.values(map.fields).flatMap((key) => key.with ?? [])];
+      const named = [...(map.decidedBy ?? []), ...Object.values(map.fields).flatMap(companions)];
       for (const name of named) assert.ok(known.has(name), `${map.called}: ${name}`);
       if (map.completedBy !== undefined) assert.ok(known.has(map.completedBy));
     }

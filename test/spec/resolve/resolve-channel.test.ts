@@ -30,7 +30,13 @@ describe('resolving a channel', () => {
       rate: { hz: 51200, tolerance: { low: 0, high: 0 }, clock: null },
       rateChoices: null,
       pulse: { shape: 'instant' },
+      gate: null,
+      slots: null,
       stages: [],
+      inputStages: [],
+      outputStages: [],
+      levelLimit: null,
+      masks: [],
       testTone: { frequencyHz: 10000, levelDb: 0 },
       jitterSeconds: 0,
       bits: null,
@@ -103,7 +109,7 @@ describe('resolving a channel', () => {
       sources.map(({ name }) => name),
       ['tone at 310 kHz', 'band from 40 kHz to 3 MHz', 'band from 40 kHz up', 'anything'],
     );
-    assert.deepEqual(sources[3], { kind: 'anything', name: 'anything', ref: null, levelDb: 0 });
+    assert.deepEqual(sources[3], { kind: 'anything', name: 'anything', ref: null, enters: 'input', levelDb: 0 });
   });
 
   it('brings limits in short and long form to one form', () => {
@@ -115,9 +121,9 @@ describe('resolving a channel', () => {
       'x',
     );
     assert.deepEqual(limits, [
-      { key: 'alias', at: -60, unit: 'dBc', ref: null, margin: null, withUnwanted: false },
-      { key: 'flatness', at: 0.8, unit: 'dB', ref: 'R-7', margin: 0.1, withUnwanted: false },
-      { key: 'snr', at: 84, unit: 'dB', ref: null, margin: null, withUnwanted: true },
+      { key: 'alias', at: -60, unit: 'dBc', ref: null, margin: null, withUnwanted: false, sum: false },
+      { key: 'flatness', at: 0.8, unit: 'dB', ref: 'R-7', margin: 0.1, withUnwanted: false, sum: false },
+      { key: 'snr', at: 84, unit: 'dB', ref: null, margin: null, withUnwanted: true, sum: false },
     ]);
   });
 
