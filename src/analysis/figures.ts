@@ -1,5 +1,5 @@
 /** Everything that is computed of one channel, in SI units, levels in dB; the JSON result is this, with places added. Infinity is allowed where a value is unbounded. */
-import type { LimitKey } from '../spec/channel';
+import type { LimitKey, MaskLimit } from '../spec/channel';
 
 /** Where an extreme is reached. */
 export interface Where {
@@ -12,12 +12,16 @@ export interface Where {
 /** Tolerance values at a worst case by label, e.g. { "pick-up guard, stage 2, corner": 0.04 }; relative deviations. */
 export type WorstAt = Readonly<Record<string, number>>;
 
+/** Every limit that is judged: the single values, the level's range and the masks. */
+export type JudgedKey = LimitKey | 'level' | MaskLimit['key'];
+
 /** One limit, judged. */
 export interface LimitFigure {
-  readonly limit: LimitKey;
+  readonly limit: JudgedKey;
   readonly ref: string | null;
   readonly unit: 'dBFS' | 'dBc' | 'dB' | 's';
-  readonly sense: 'at-most' | 'at-least';
+  /** `inside` for a range and for masks: `at` is then the bound that `value` comes nearest to, or passes furthest. */
+  readonly sense: 'at-most' | 'at-least' | 'inside';
   readonly at: number;
   /** Worst case over all tolerances; null where it was not judged. */
   readonly value: number | null;
@@ -75,6 +79,23 @@ export interface ImageFigure {
   readonly relative: number;
   readonly limit: number | null;
   readonly margin: number | null;
+  readonly gap: number;
+  readonly worstAt: WorstAt | null;
+}
+
+/** The worst point of one segment of a mask; in dB against the gain at `reference`, or in dBFS for `output`. */
+export interface MaskFigure {
+  readonly limit: MaskLimit['key'];
+  /** Index into the mask's segments. */
+  readonly segment: number;
+  /** Which of the segment's bounds is nearest. */
+  readonly side: 'lower' | 'upper';
+  readonly frequency: number;
+  readonly value: number;
+  readonly nominal: number;
+  readonly bound: number;
+  /** Positive: inside the mask. */
+  readonly margin: number;
   readonly gap: number;
   readonly worstAt: WorstAt | null;
 }
@@ -142,6 +163,12 @@ export interface Figures {
   readonly enob: number | null;
   readonly enobFullScale: number | null;
   readonly headroom: number | null;
+  /** One for each segment of each mask, in the channel's order. */
+  readonly masks: readonly MaskFigure[];
+  /** dB from one time slot into the next at the worst instant; null without slots. */
+  readonly crosstalk: number | null;
+  /** |c_k|/c_0 for k = 0 … 8; null without a gate. */
+  readonly copyWeights: readonly number[] | null;
   readonly faults: readonly SamplingFault[];
   readonly overlaps: readonly Overlap[];
   /** Points and bounds evaluated by the searches, for tests. */

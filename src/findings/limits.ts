@@ -1,21 +1,21 @@
 /** How checks look at limits: the figure of one, its place in the spec, whether its nominal value would pass. */
-import type { Figures, LimitFigure } from '../analysis/figures';
-import type { Channel, LimitKey } from '../spec/channel';
+import type { Figures, LimitFigure, JudgedKey } from '../analysis/figures';
+import type { Channel } from '../spec/channel';
 import type { Place } from '../spec/place';
 
 /** The figure of a limit that was asked for and judged, or null. */
-function judgedLimit(figures: Figures, key: LimitKey): LimitFigure | null {
+function judgedLimit(figures: Figures, key: JudgedKey): LimitFigure | null {
   return figures.limits.find((figure) => figure.limit === key && figure.judged) ?? null;
 }
 
 /** The figure of a limit that was judged and is broken, or null. */
-export function brokenLimit(figures: Figures, key: LimitKey): LimitFigure | null {
+export function brokenLimit(figures: Figures, key: JudgedKey): LimitFigure | null {
   const figure = judgedLimit(figures, key);
   return figure === null || figure.passes ? null : figure;
 }
 
 /** Where a limit's quantity stands, in short form and in long form. */
-export function limitPlace(channel: Channel, key: LimitKey): Place {
+export function limitPlace(channel: Channel, key: JudgedKey): Place {
   return { channel: channel.name, path: ['limits', key, 'at'] };
 }
 
@@ -32,7 +32,7 @@ export function thinBelow(channel: Channel, figure: LimitFigure): number {
   return inDecibels.has(figure.limit) ? 1 : Math.abs(figure.at) / 10;
 }
 
-const inDecibels: ReadonlySet<LimitKey> = new Set<LimitKey>(['alias', 'image', 'snr', 'headroom']);
+const inDecibels: ReadonlySet<JudgedKey> = new Set<JudgedKey>(['alias', 'image', 'output', 'snr', 'headroom', 'crosstalk']);
 
 /** Whether a margin is on the wrong side of its limit by more than rounding. */
 export function breaks(margin: number | null): boolean {

@@ -69,6 +69,10 @@ function missing(channel: Channel, figure: LimitFigure, folded: boolean): string
     case 'headroom':
     case 'delay':
     case 'delay-spread':
+    case 'level':
+    case 'response':
+    case 'through':
+    case 'output':
       return folded ? foldsFirst : 'the channel has nothing that could break it';
   }
 }

@@ -33,6 +33,10 @@ const formulas: Readonly<Record<LimitFigure['limit'], string>> = {
   delay: '−dφ/dω at `reference`, summed in closed form over poles and zeros, and the pulse',
   'delay-spread': 'Largest minus smallest group delay in the wanted band, proved',
   crosstalk: '−20·log10(e)·2π·B·guard of a first-order link of corner B',
+  level: 'Largest and smallest level of the wanted output over its band, proved',
+  response: 'Proved extreme of the analogue path over each segment, against the gain at `reference`',
+  through: 'Proved extreme of the end-to-end gain over each segment, against that at `reference`',
+  output: 'Proved maximum of everything that leaves outside the wanted band, over each segment',
 };
 
 function headlineOf(limit: LimitFigure): string {
@@ -74,6 +78,10 @@ function contributions(limit: LimitFigure, figures: Figures): Row[] {
     case 'delay':
     case 'delay-spread':
     case 'crosstalk':
+    case 'level':
+    case 'response':
+    case 'through':
+    case 'output':
       return [];
   }
 }

@@ -1,6 +1,6 @@
 /** The nearest other rates that a channel may run at and passes with. */
-import { analyse } from '../../analysis';
-import type { Channel, LimitKey, Rate, RateChoices } from '../../spec';
+import { analyse, type JudgedKey } from '../../analysis';
+import type { Channel, Rate, RateChoices } from '../../spec';
 
 /** How many rates are named. */
 const wantedRates = 3;
@@ -12,7 +12,7 @@ export interface PassingRates {
   /** The nearest that pass every limit, in rising order. */
   readonly ratesHz: readonly number[];
   /** The limits that fail at every rate that was tried. */
-  readonly inTheWay: readonly LimitKey[];
+  readonly inTheWay: readonly JudgedKey[];
 }
 
 /** The other allowed rates; null where the channel does not list its rates. */
@@ -64,7 +64,7 @@ function rateOf(present: Rate, choice: Choice): Rate {
 }
 
 /** What keeps a rate from passing: limits, or the folding of the wanted band itself. */
-function failingAt(channel: Channel, rate: Rate): readonly (LimitKey | 'wanted-folds')[] {
+function failingAt(channel: Channel, rate: Rate): readonly (JudgedKey | 'wanted-folds')[] {
   const figures = analyse({ ...channel, rate });
   const limits = figures.limits.filter(({ passes }) => !passes).map(({ limit }) => limit);
   return figures.faults.some(({ kind }) => kind === 'wanted-folds') ? [...limits, 'wanted-folds'] : limits;

@@ -4,13 +4,13 @@ import { formatDb, formatFrequency } from '../../units/format';
 /** What a limit's margin depends on for its wording. */
 interface Margin {
   readonly limit: string;
-  readonly sense: 'at-most' | 'at-least';
+  readonly sense: 'at-most' | 'at-least' | 'inside';
   readonly margin: number;
 }
 
 /** "4.8 dB over the limit", "2 dB short of the limit", "0.8 dB inside the limit". */
 export function marginWords({ limit, sense, margin }: Margin): string {
-  const beyond = sense === 'at-most' ? 'over' : 'short of';
+  const beyond = { 'at-most': 'over', 'at-least': 'short of', inside: 'outside' }[sense];
   return `${formatDb(Math.abs(margin), 'dB', decimalsOf(limit))} ${margin < 0 ? beyond : 'inside'} the limit`;
 }
 
