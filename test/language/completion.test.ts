@@ -32,7 +32,7 @@ describe('completion', () => {
   });
 
   it('offers the words of a key', () => {
-    assert.deepEqual(labels(passingSpec.replace('direction: capture', 'direction: ¦')), ['capture', 'generate']);
+    assert.deepEqual(labels(passingSpec.replace('direction: capture', 'direction: ¦')), ['capture', 'generate', 'relay']);
   });
 
   it('offers the names that are defined', () => {
@@ -53,7 +53,7 @@ describe('completion', () => {
 
   it('writes a key with a choice of its words, where the editor can', () => {
     const marked = passingSpec.replace('    direction: capture\n', '    ¦\n');
-    assert.match(taken(marked, 'direction'), /^ {4}direction: \$\{1\|capture,generate\|\}\$0$/m);
+    assert.match(taken(marked, 'direction'), /^ {4}direction: \$\{1\|capture,generate,relay\|\}\$0$/m);
     assert.match(taken(marked, 'direction', plainAbilities), /^ {4}direction: $/m);
     const item = offered(marked).find(({ label }) => label === 'direction');
     assert.equal(item?.insertTextFormat, InsertTextFormat.Snippet);
