@@ -3,7 +3,7 @@ import type { Response } from '../signal/response';
 import { largestOverBands } from '../signal/search';
 
 /** ln of the amplitude ratio at half power; a hair below it, so that a ripple which just touches half power does not count. */
-const halfPowerLog = -0.5 * Math.LN2 - 4e-9;
+export const halfPowerLog = -0.5 * Math.LN2 - 4e-9;
 
 /** How often the search for a bracket may double before the response counts as never falling. */
 const doublings = 120;
