@@ -2,12 +2,13 @@
 import { largestOverBands } from '../signal/search';
 import type { Channel, Source } from '../spec/channel';
 import type { Enclosure } from '../signal/response';
+import { bandAxis, onAxis } from './axis';
 import { decibelsPerNeper, toDb } from './decibels';
 import type { ChannelPath } from './channel-path';
 import type { WorstAt } from './figures';
 import { sourceRange } from './source-range';
 import { partsVary } from './tolerances';
-import { bandAxis, nominalPath, onAxis, worstPath } from './worst-path';
+import { nominalPath, worstPath } from './worst-path';
 import type { WorstPath } from './worst-path';
 
 /** Full scale over the sum of all peak amplitudes, dB; negative where they clip. */

@@ -3,14 +3,15 @@ import { alongCopy, tiedRatio } from '../signal/copy-axis';
 import type { Enclosure, Response } from '../signal/response';
 import { inverse, product } from '../signal/response-algebra';
 import { largestOverBands, largestOverFolds } from '../signal/search';
+import { axisFactors } from './axis';
 import { withPulse } from './channel-path';
 import type { ChannelPath } from './channel-path';
 import { axisOf, leavesAt } from './copies';
 import type { Copy, CopyRun, WantedCopy } from './copies';
-import { wholePulse } from './pulse';
+import { wholePulse } from './whole-pulse';
 import { cornerDeviations, factorsOf, partsVary } from './tolerances';
 import type { WorstAt } from './figures';
-import { axisFactors, nominalPath, worstPath } from './worst-path';
+import { nominalPath, worstPath } from './worst-path';
 import type { WorstPath } from './worst-path';
 
 /** How images are measured: their own level, or against the same tone's wanted output. */

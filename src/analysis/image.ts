@@ -1,6 +1,7 @@
 /** What a generate channel lets out besides the wanted band: the strongest point of every copy, and the strongest of all to infinity. */
 import type { Enclosure } from '../signal/response';
 import type { Channel, Limit, WantedBand } from '../spec/channel';
+import { onAxis } from './axis';
 import { gainWithCornersDb } from './capture-view';
 import { channelPath } from './channel-path';
 import type { ChannelPath } from './channel-path';
@@ -12,7 +13,6 @@ import { strongestOfCopy, strongestOfRun } from './image-search';
 import type { ImagePoint, Measure } from './image-search';
 import { followsRate } from './pulse';
 import { deviation, joinWorst, partsVary, rateLabel, rateRange, varies } from './tolerances';
-import { onAxis } from './worst-path';
 
 /** The images of a channel. */
 export interface Images {

@@ -16,8 +16,11 @@ export function pulseShape(pulse: Pulse, rateHz: number): PulseShape | null {
     case 'split':
       return { shape: pulse.shape, widthSeconds: seconds(pulse.width) };
     case 'raised-cosine':
-    case 'trapezoid':
-      return { shape: pulse.shape, widthSeconds: seconds(pulse.width), edgeSeconds: seconds(pulse.edge) };
+    case 'trapezoid': {
+      const width = seconds(pulse.width);
+      // Where a width in periods shrinks with the clock, edges that just fitted still just fit.
+      return { shape: pulse.shape, widthSeconds: width, edgeSeconds: Math.min(seconds(pulse.edge), width / 2) };
+    }
     case 'exponential':
       return { shape: 'exponential', widthSeconds: seconds(pulse.width), decaySeconds: seconds(pulse.decay) };
   }

@@ -1,59 +1,90 @@
-/** The pulse of an aperture or a hold as a response: its width, its gain and its nulls. */
-import { frequencyWeight } from '../signal/frequency-weight';
-import { rectangleResponse } from '../signal/pulses/rectangle';
-import { constantResponse, inverse, product } from '../signal/response-algebra';
-import type { Response } from '../signal/response';
-import type { Channel, Pulse } from '../spec/channel';
+/** The pulse of an aperture or a hold as a response: its length, its gain, its delay and its nulls. */
+import { pulseArea } from '../signal/pulses/pulse-area';
+import { pulseDelay, pulseDelayRange } from '../signal/pulses/pulse-delay';
+import { pulsePhase } from '../signal/pulses/pulse-phase';
+import { pulseResponse as shapeResponse } from '../signal/pulses/pulse-response';
+import { constantResponse, product } from '../signal/response-algebra';
+import type { Enclosure, Response } from '../signal/response';
+import type { Channel, Pulse, PulseWidth } from '../spec/channel';
+import { shapeNulls } from './pulse-nulls';
+import { pulseShape, widthSeconds } from './pulse-shape';
+
+/** A channel as far as its pulse goes. */
+export type PulseOwner = Pick<Channel, 'direction' | 'pulse'>;
 
 /** How long the pulse lasts at a rate, in seconds; 0 for `instant`. */
 export function pulseSeconds(pulse: Pulse, rateHz: number): number {
   if (pulse.shape === 'instant') return 0;
-  if (pulse.shape === 'linear') return 2 / rateHz;
-  return 'seconds' in pulse.width ? pulse.width.seconds : pulse.width.share / rateHz;
-}
-
-/** Whether the width is a share of the period, so that the pulse follows the rate. */
-export function followsRate(pulse: Pulse): boolean {
-  if (pulse.shape === 'instant') return false;
-  return pulse.shape === 'linear' || 'share' in pulse.width;
-}
-
-/** The pulse's response at a rate: an aperture has gain 1 at 0 Hz, a hold of height 1 its area over the period. */
-export function pulseResponse(channel: Pick<Channel, 'direction' | 'pulse'>, rateHz: number): Response {
-  const width = pulseSeconds(channel.pulse, rateHz);
-  if (width === 0) return constantResponse(0);
-  const shape = rectangleResponse(width);
-  const area = channel.direction === 'capture' ? 0 : Math.log(width * rateHz);
-  return Math.abs(area) < 1e-12 ? shape : product([constantResponse(area), shape]);
-}
-
-/** A pulse that lasts m whole periods, at F = k·rate ± x, k ≥ 1: |sin(πwF)|/(πwF) = |sin(πwx)|/(πwF), a part in F and a part in x. */
-export interface WholePulse {
-  /** area/T over πwF: no nulls, only falling. */
-  readonly envelope: Response;
-  /** |sin(πwx)|. */
-  readonly ripple: Response;
+  return pulse.shape === 'linear' ? 2 / rateHz : widthSeconds(pulse.width, rateHz);
 }
 
 /**
- * The two parts of a pulse whose nulls stand on every multiple of the rate, so that a search over folds need not meet each null; null
- * for any other pulse.
+ * What the pulse does when the rate moves: `follows` it, all its lengths being shares of the period, `stays` as it is, all of them being
+ * times, or is `mixed`, such as a hold of one period whose edges take 3 ns.
  */
-export function wholePulse(channel: Pick<Channel, 'direction' | 'pulse'>, rateHz: number): WholePulse | null {
-  const width = pulseSeconds(channel.pulse, rateHz);
-  const periods = width * rateHz;
-  const whole = Math.round(periods);
-  if (whole < 1 || Math.abs(periods - whole) > 1e-12 * whole) return null;
-  const turns = Math.log(Math.PI * width);
-  const area = channel.direction === 'capture' ? 0 : Math.log(periods);
-  return {
-    envelope: product([constantResponse(area - turns), inverse(frequencyWeight())]),
-    ripple: product([constantResponse(turns), frequencyWeight(), rectangleResponse(width)]),
-  };
+export function pulseMoves(pulse: Pulse): 'follows' | 'stays' | 'mixed' {
+  if (pulse.shape === 'linear') return 'follows';
+  const shares = lengthsOf(pulse).map((length) => 'share' in length);
+  if (!shares.includes(true)) return 'stays';
+  return shares.includes(false) ? 'mixed' : 'follows';
 }
 
-/** The first frequencies in Hz at which nothing passes the pulse; empty for `instant`. */
+/** Whether every length of the pulse is a share of the period, so that the pulse follows the rate. */
+export function followsRate(pulse: Pulse): boolean {
+  return pulseMoves(pulse) === 'follows';
+}
+
+/** The pulse's response at a rate: an aperture has gain 1 at 0 Hz, a hold of height 1 its area over the period. */
+export function pulseResponse(channel: PulseOwner, rateHz: number): Response {
+  const shape = pulseShape(channel.pulse, rateHz);
+  if (shape === null) return constantResponse(0);
+  const response = shapeResponse(shape);
+  const area = pulseAreaLog(channel, rateHz);
+  return Math.abs(area) < 1e-12 ? response : product([constantResponse(area), response]);
+}
+
+/** ln of what a pulse of height 1 is weighed by before its unit-area spectrum: area over period for a hold, 0 for an aperture. */
+export function pulseAreaLog(channel: PulseOwner, rateHz: number): number {
+  const shape = pulseShape(channel.pulse, rateHz);
+  return shape === null || channel.direction === 'capture' ? 0 : Math.log(pulseArea(shape) * rateHz);
+}
+
+/** How much the pulse delays a frequency, in seconds: half its length for all but `exponential`. */
+export function pulseDelaySeconds(pulse: Pulse, rateHz: number, frequencyHz: number): number {
+  const shape = pulseShape(pulse, rateHz);
+  return shape === null ? 0 : pulseDelay(shape, frequencyHz);
+}
+
+/** An enclosure of that delay over an interval. */
+export function pulseDelayEnclosure(pulse: Pulse, rateHz: number, { low, high }: Enclosure): Enclosure {
+  const shape = pulseShape(pulse, rateHz);
+  return shape === null ? { low: 0, high: 0 } : pulseDelayRange(shape, low, high);
+}
+
+/** The pulse's phase in radians without the half turns at its nulls: −2πf times its delay, where that is the same everywhere. */
+export function pulsePhaseRad(pulse: Pulse, rateHz: number, frequencyHz: number): number {
+  const shape = pulseShape(pulse, rateHz);
+  if (shape === null) return 0;
+  if (shape.shape === 'exponential') return pulsePhase(shape, frequencyHz);
+  return -2 * Math.PI * frequencyHz * pulseDelay(shape, frequencyHz);
+}
+
+/** The first frequencies above 0 Hz at which nothing passes the pulse; empty where there are none, as for `instant` and `exponential`. */
 export function pulseNulls(pulse: Pulse, rateHz: number, count: number): readonly number[] {
-  const width = pulseSeconds(pulse, rateHz);
-  return width === 0 ? [] : Array.from({ length: count }, (_, index) => (index + 1) / width);
+  const shape = pulseShape(pulse, rateHz);
+  return shape === null ? [] : shapeNulls(shape, count);
+}
+
+function lengthsOf(pulse: Exclude<Pulse, { readonly shape: 'linear' }>): readonly PulseWidth[] {
+  switch (pulse.shape) {
+    case 'instant':
+      return [];
+    case 'raised-cosine':
+    case 'trapezoid':
+      return [pulse.width, pulse.edge];
+    case 'exponential':
+      return [pulse.width, pulse.decay];
+    default:
+      return [pulse.width];
+  }
 }

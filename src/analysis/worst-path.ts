@@ -1,29 +1,15 @@
 /** A path at the worst of its tolerances: every stage stretched and scaled for itself, so that each frequency sees its own worst case. */
-import type { Enclosure, Response } from '../signal/response';
+import type { Response } from '../signal/response';
 import { constantResponse } from '../signal/response-algebra';
-import { stretched, stretchedRatio } from '../signal/stretched';
-import type { Sense, StretchedResponse } from '../signal/stretched';
+import type { Sense } from '../signal/stretched';
 import type { Channel } from '../spec/channel';
+import { axisFactors } from './axis';
 import { inSeries, relativeTo } from './channel-path';
 import type { ChannelPath, StagePath } from './channel-path';
 import type { WorstAt } from './figures';
-import { followsRate } from './pulse';
-import { cornerLabel, deviation, factorsOf, gainLabel, partsVary, rateRange, varies } from './tolerances';
-
-/**
- * What frequencies are measured in while the rate may deviate. `hertz`: as they are; a pulse that follows the rate is then
- * stretched. `periods`: as multiples of the rate, written in Hz at the nominal rate; the stages are then stretched. It is only for pulses
- * that follow the rate.
- */
-export type Axis = 'hertz' | 'periods';
-
-/** Which worst case is asked for. */
-export interface WorstQuestion {
-  readonly sense: Sense;
-  /** The frequency that the gain is measured from, with the same parts; null for the gain itself, whose tolerance then counts. */
-  readonly referenceHz: number | null;
-  readonly axis: Axis;
-}
+import { stretchedFrom, type WorstQuestion } from './stretched-from';
+import { cornerLabel, deviation, factorsOf, gainLabel, partsVary, varies } from './tolerances';
+import { worstPulse } from './worst-pulse';
 
 /** A path at its worst. */
 export interface WorstPath {
@@ -60,25 +46,6 @@ export function nominalPath(path: ChannelPath, referenceHz: number | null): Wors
   };
 }
 
-/** The factors by which the rate's tolerance moves a response that the axis does not follow. */
-export function axisFactors(channel: Channel): Record<Axis, Enclosure> {
-  const { low, high } = rateRange(channel.rate);
-  const nominal = channel.rate.hz;
-  return { hertz: { low: low / nominal, high: high / nominal }, periods: { low: nominal / high, high: nominal / low } };
-}
-
-/** The axis on which what may stand anywhere in a band is searched: that of the pulse, where the pulse follows a rate that varies. */
-export function bandAxis(channel: Channel): Axis {
-  return varies(channel.rate.tolerance) && followsRate(channel.pulse) ? 'periods' : 'hertz';
-}
-
-/** A range of frequencies on an axis, at every rate that is allowed. */
-export function onAxis(channel: Channel, axis: Axis, range: Enclosure): Enclosure {
-  if (axis === 'hertz') return range;
-  const { low, high } = axisFactors(channel).periods;
-  return { low: range.low * low, high: range.high * high };
-}
-
 interface WorstStage {
   readonly path: StagePath;
   readonly responses: readonly Response[];
@@ -100,28 +67,6 @@ function worstStage(path: StagePath, channel: Channel, question: WorstQuestion):
     // What the rate moves is no deviation of the corner.
     cornerAt: (frequencyHz) => Math.min(Math.max(moved.factorAt(frequencyHz), own.low), own.high),
   };
-}
-
-/** A pulse that follows the rate is the same at every rate in periods; one of fixed width is only ever looked at in hertz. */
-function worstPulse({ channel, pulse }: ChannelPath, question: WorstQuestion): readonly Response[] {
-  if (channel.pulse.shape === 'instant') return [];
-  const moves = followsRate(channel.pulse) && question.axis === 'hertz';
-  const factors = moves ? axisFactors(channel).hertz : { low: 1, high: 1 };
-  return [stretchedFrom(pulse, factors, question).response];
-}
-
-function stretchedFrom(
-  response: Response,
-  factors: Enclosure,
-  question: WorstQuestion,
-): { readonly response: Response; factorAt(frequencyHz: number): number } {
-  const { referenceHz, sense } = question;
-  if (factors.low === factors.high) {
-    return { response: referenceHz === null ? response : relativeTo(response, referenceHz), factorAt: () => 1 };
-  }
-  const moved: StretchedResponse =
-    referenceHz === null ? stretched(response, factors, sense) : stretchedRatio(response, referenceHz, factors, sense);
-  return { response: moved, factorAt: (frequencyHz) => moved.factorAt(frequencyHz) };
 }
 
 function describe(stages: readonly WorstStage[], frequencyHz: number, gainSense: Sense | null): WorstAt | null {

@@ -1,5 +1,5 @@
 /** Phase and group delay of the whole path, drawn when the reader asks for them. */
-import { pathDelay, pathPhaseRad, pulseSeconds } from '../analysis';
+import { pathDelay, pathPhaseRad, pulsePhaseRad } from '../analysis';
 import type { Item, LevelUnit, Plot, Points } from '../protocol/picture';
 import { formatDb, formatFrequency, formatTime } from '../units/format';
 import { item } from './items';
@@ -8,11 +8,11 @@ import { sampleCurve } from './sample-curve';
 import type { Subject } from './subject';
 import { sentences } from './words';
 
-/** Phase in degrees; half the pulse's width counts as a delay, as in the figures. */
+/** Phase in degrees, the pulse's included as far as it is a delay. */
 export function phasePlot(subject: Subject): Plot {
   const { channel, path } = subject;
-  const half = pulseSeconds(channel.pulse, channel.rate.hz) / 2;
-  const degrees = (f: number): number => ((pathPhaseRad(path, f) - 2 * Math.PI * f * half) * 180) / Math.PI;
+  const pulse = (f: number): number => pulsePhaseRad(channel.pulse, channel.rate.hz, f);
+  const degrees = (f: number): number => ((pathPhaseRad(path, f) + pulse(f)) * 180) / Math.PI;
   const words = `Phase, ${formatDb(degrees(channel.referenceHz), 'degrees')} at ${formatFrequency(channel.referenceHz)}`;
   return timingPlot(subject, { id: 'phase', title: 'Phase', unit: 'deg', curve: degrees, words });
 }

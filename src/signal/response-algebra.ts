@@ -43,6 +43,30 @@ export function constantResponse(logGain: number): Response {
   };
 }
 
+/**
+ * The largest of several gains at each frequency.
+ *
+ * @param responses at least one.
+ * @returns a slope that holds all of theirs, null where any has none.
+ * Source: elementary.
+ * @example largestOf([constantResponse(-1), constantResponse(0.25)]).logGain(100) // 0.25
+ */
+export function largestOf(responses: readonly Response[]): Response {
+  const most = (values: readonly number[]): number => values.reduce((a, b) => Math.max(a, b), -Infinity);
+  return {
+    logGain: (frequencyHz) => most(responses.map((one) => one.logGain(frequencyHz))),
+    bounds: (lowHz, highHz) => {
+      const all = responses.map((one) => one.bounds(lowHz, highHz));
+      return { low: most(all.map(({ low }) => low)), high: most(all.map(({ high }) => high)) };
+    },
+    slope: (lowHz, highHz) => {
+      const all = responses.flatMap((one) => one.slope(lowHz, highHz) ?? []);
+      if (all.length < responses.length) return null;
+      return { low: -most(all.map(({ low }) => -low)), high: most(all.map(({ high }) => high)) };
+    },
+  };
+}
+
 class Product implements Response {
   constructor(private readonly parts: readonly Response[]) {}
 

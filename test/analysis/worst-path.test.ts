@@ -1,7 +1,7 @@
 /** A path at the worst of its tolerances, against each stage at its own ends. */
 import assert from 'node:assert/strict';
 import { channelPath, worstPath } from '../../src/analysis';
-import { onAxis } from '../../src/analysis/worst-path';
+import { onAxis } from '../../src/analysis/axis';
 import type { Channel } from '../../src/spec/channel';
 import { butterworthForm, capture, plusMinus, rate, rectangleShare, stage, wanted } from '../support/channel-builder';
 import { assertWithin } from '../support/tolerance';

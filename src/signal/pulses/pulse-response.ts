@@ -56,12 +56,14 @@ export function pulseFactors(shape: PulseShape): readonly PulseFactor[] {
   }
 }
 
-/** An edge of no length smooths nothing. */
-function edgeOf(kind: 'rectangle' | 'half-sine', widthSeconds: number): readonly PulseFactor[] {
-  return widthSeconds === 0 ? [] : [{ kind, widthSeconds }];
-}
-
-function factorResponse(factor: PulseFactor): Response {
+/**
+ * The magnitude of one factor's spectrum.
+ *
+ * @param factor lengths above 0 s.
+ * Source: as for pulseResponse.
+ * @example Math.exp(factorResponse({ kind: 'rectangle', widthSeconds: 1 }).logGain(0.5)) // 0.636619772
+ */
+export function factorResponse(factor: PulseFactor): Response {
   switch (factor.kind) {
     case 'rectangle':
       return rectangleResponse(factor.widthSeconds);
@@ -72,4 +74,9 @@ function factorResponse(factor: PulseFactor): Response {
     case 'exponential':
       return exponentialResponse(factor.widthSeconds, factor.decaySeconds);
   }
+}
+
+/** An edge of no length smooths nothing. */
+function edgeOf(kind: 'rectangle' | 'half-sine', widthSeconds: number): readonly PulseFactor[] {
+  return widthSeconds === 0 ? [] : [{ kind, widthSeconds }];
 }

@@ -1,0 +1,74 @@
+/** A pulse at the worst that the rate's tolerance makes of it. */
+import { factorResponse, pulseFactors, type PulseFactor } from '../signal/pulses/pulse-response';
+import type { Enclosure, Response } from '../signal/response';
+import { constantResponse, inverse, largestOf } from '../signal/response-algebra';
+import { axisFactors } from './axis';
+import { relativeTo } from './channel-path';
+import type { ChannelPath } from './channel-path';
+import { pulseAreaLog, pulseMoves, pulseResponse } from './pulse';
+import { pulseShape } from './pulse-shape';
+import { stretchedFrom, type WorstQuestion } from './stretched-from';
+import { rateRange, varies } from './tolerances';
+
+/**
+ * The pulse's worst responses, in series; none for `instant`.
+ *
+ * One that follows the rate is the same at every rate in periods, and is stretched in hertz. One whose lengths are times stays as it is; as
+ * a hold it gains as the rate rises, since its area is then more of a period. One with lengths of both kinds is looked at in hertz only:
+ * the parts that it is the convolution of are stretched each by itself, which is a proved bound, and its area is taken at its worst. Only an
+ * exponential pulse of both kinds is no such product; it is taken at the worst of nominal and either end of the rate.
+ */
+export function worstPulse(path: ChannelPath, question: WorstQuestion): readonly Response[] {
+  const { channel, pulse } = path;
+  if (channel.pulse.shape === 'instant') return [];
+  const moves = pulseMoves(channel.pulse);
+  const still = moves === 'follows' ? question.axis === 'periods' : moves === 'stays';
+  if (still || !varies(channel.rate.tolerance)) return [...areaShift(path, question), fixed(pulse, question)];
+  if (moves === 'follows') return [stretchedFrom(pulse, axisFactors(channel).hertz, question).response];
+  return channel.pulse.shape === 'exponential' ? [worstOfRates(path, question)] : worstFactors(path, question);
+}
+
+function fixed(response: Response, { referenceHz }: WorstQuestion): Response {
+  return referenceHz === null ? response : relativeTo(response, referenceHz);
+}
+
+/** What the area over the period gains at its worst; nothing against a reference, where it cancels. */
+function areaShift({ channel, rateHz }: ChannelPath, { referenceHz, sense, axis }: WorstQuestion): readonly Response[] {
+  if (referenceHz !== null || axis === 'periods') return [];
+  const ends = rateEnds(channel.rate).map((rate) => pulseAreaLog(channel, rate));
+  const worst = sense === 'largest' ? Math.max(...ends) : Math.min(...ends);
+  const shift = worst - pulseAreaLog(channel, rateHz);
+  return shift === 0 ? [] : [constantResponse(shift)];
+}
+
+/** Every part of the pulse over all its lengths; the area is monotone in the rate, so its worst is at an end. */
+function worstFactors(path: ChannelPath, question: WorstQuestion): readonly Response[] {
+  const { channel, rateHz } = path;
+  const ends = rateEnds(channel.rate).map((rate) => factorsAt(path, rate));
+  const area = question.referenceHz === null ? pulseAreaLog(channel, rateHz) : 0;
+  const parts = factorsAt(path, rateHz).map((factor, index) => {
+    const lengths = ends.map((factors) => factors[index]?.widthSeconds ?? factor.widthSeconds);
+    const range: Enclosure = {
+      low: factor.widthSeconds / Math.max(factor.widthSeconds, ...lengths),
+      high: factor.widthSeconds / Math.min(factor.widthSeconds, ...lengths),
+    };
+    return stretchedFrom(factorResponse(factor), range, question).response;
+  });
+  return [...areaShift(path, question), ...(area === 0 ? [] : [constantResponse(area)]), ...parts];
+}
+
+function factorsAt({ channel }: ChannelPath, rateHz: number): readonly PulseFactor[] {
+  const shape = pulseShape(channel.pulse, rateHz);
+  return shape === null ? [] : pulseFactors(shape);
+}
+
+function worstOfRates({ channel, rateHz }: ChannelPath, question: WorstQuestion): Response {
+  const rates = [rateHz, ...rateEnds(channel.rate)];
+  const responses = rates.map((rate) => fixed(pulseResponse(channel, rate), question));
+  return question.sense === 'largest' ? largestOf(responses) : inverse(largestOf(responses.map(inverse)));
+}
+
+function rateEnds(rate: ChannelPath['channel']['rate']): readonly number[] {
+  const { low, high } = rateRange(rate);
+  return [low, high];
+}
