@@ -12,7 +12,8 @@ import { protectedAt } from './landing-point';
 import { judgeLimits, limitOf } from './limits';
 import { noiseOf } from './noise';
 import { overlapsOf } from './source-range';
-import { rateWindow, samplingFaults, wantedFigures } from './wanted';
+import { windowAround } from './rate-windows';
+import { samplingFaults, wantedFigures } from './wanted';
 
 /** Analyses a channel; pure, so the same channel always gives the same figures. */
 export function analyse(channel: Channel): Figures {
@@ -37,7 +38,7 @@ export function analyse(channel: Channel): Figures {
     zone: shared?.zone ?? null,
     inverted: shared?.inverted ?? null,
     reference: channel.referenceHz,
-    rateWindow: rateWindow(channel),
+    rateWindow: windowAround(channel),
     wanted,
     protected: protectedAt(channel, rate),
     limits: judgeLimits(channel, { aliases, images, flatness, noise, headroom }),

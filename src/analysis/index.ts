@@ -18,6 +18,7 @@ export type {
 export {
   channelPath,
   gainDb,
+  inSeries,
   lossDb,
   pathDelay,
   pathPhaseRad,
@@ -25,10 +26,22 @@ export {
   type ChannelPath,
   type StagePath,
 } from './channel-path';
-export { worstPath, type Axis, type WorstPath, type WorstQuestion } from './worst-path';
+export { rateWindowsOf, type RateTable, type RateWindow } from './rate-windows';
+export { keepsWhole } from './wanted';
+export type { Axis } from './axis';
+export type { WorstQuestion } from './stretched-from';
+export { worstPath, type WorstPath } from './worst-path';
 export { halfPowerHz } from './half-power';
+export { halfPowerPoints } from './half-power-points';
 export { noiseBandwidthHz } from './noise-bandwidth';
-export { pulseNulls, pulseSeconds } from './pulse';
+export { noiseWidth, type NoiseWidth } from './noise-width';
+export { gateFigures, stretchedGate, type GateFigures } from './gate-figures';
+export { shapeNulls } from './pulse-nulls';
+export { pulseShape, widthSeconds } from './pulse-shape';
+export { pulseDelay } from '../signal/pulses/pulse-delay';
+export { trackAndHoldDelay, type TrackAndHold } from '../signal/pulses/track-and-hold';
+export { trackAndHoldCopy } from '../signal/pulses/track-and-hold-copy';
+export { pulseNulls, pulsePhaseRad, pulseSeconds } from './pulse';
 export { jitterNoiseDb, quantisationSnrDb } from '../signal/noise';
 export { foldFrequency, type Landing } from '../signal/folding';
 export type { Enclosure, Response } from '../signal/response';

@@ -1,7 +1,7 @@
-/** What sampling does to the wanted bands: their zones, where they appear, whether they fold, and the rates that keep them whole. */
+/** What sampling does to the wanted bands: their zones, where they appear, and whether they fold. */
 import { foldFrequency, zoneOf } from '../signal/folding';
 import type { Enclosure } from '../signal/response';
-import type { Channel, WantedBand } from '../spec/channel';
+import type { Band, Channel } from '../spec/channel';
 import type { SamplingFault, WantedFigure } from './figures';
 import { rateRange } from './tolerances';
 
@@ -28,7 +28,7 @@ export function wantedFigures(channel: Channel): readonly WantedFigure[] {
 }
 
 /** Where a band appears between 0 and half the rate; a band that folds reaches the edge it folds at. */
-export function appearance(band: { readonly lowHz: number; readonly highHz: number }, rateHz: number): Enclosure {
+export function appearance(band: Band, rateHz: number): Enclosure {
   const low = foldFrequency(band.lowHz, rateHz).landsHz;
   const high = foldFrequency(band.highHz, rateHz).landsHz;
   const edges = foldedEdges(band.lowHz, band.highHz, rateHz / 2);
@@ -57,32 +57,22 @@ export function samplingFaults(channel: Channel): readonly SamplingFault[] {
           : [],
       ),
   );
-  return [...own, ...(channel.direction === 'capture' ? pairs : [])];
+  return [...own, ...pairs];
 }
 
-/** The rates that keep every wanted band whole in the zone where it is now; null where no rate does. */
-export function rateWindow(channel: Channel): { readonly low: number; readonly high: number } | null {
-  const windows = channel.wanted.map((band) => {
-    const zone = zoneOf(band.lowHz, channel.rate.hz);
-    const wide = guarded(channel, band);
-    return { low: (2 * wide.highHz) / zone, high: zone === 1 ? Infinity : (2 * wide.lowHz) / (zone - 1) };
-  });
-  const low = Math.max(...windows.map((window) => window.low));
-  const high = Math.min(...windows.map((window) => window.high));
-  return windows.length > 0 && low <= high * (1 + slack) ? { low, high } : null;
+/** Whether each wanted band stays whole and clear of the others at another rate, which is as exact as the present one. */
+export function keepsWhole(channel: Channel, rateHz: number): boolean {
+  const faults = samplingFaults({ ...channel, rate: { ...channel.rate, hz: rateHz } });
+  return faults.every(({ kind }) => kind !== 'wanted-folds');
 }
 
 /** A wanted band with its guard on both sides. */
-function guarded(channel: Channel, band: WantedBand): { readonly lowHz: number; readonly highHz: number } {
+export function guarded(channel: Channel, band: Band): Band {
   return { lowHz: Math.max(0, band.lowHz - channel.guardHz), highHz: band.highHz + channel.guardHz };
 }
 
 /** The first multiple of half the rate, k ≥ 1, that some allowed rate puts inside the band or on its edge. */
-function foldFault(
-  band: { readonly lowHz: number; readonly highHz: number },
-  index: number,
-  channel: Channel,
-): readonly SamplingFault[] {
+function foldFault(band: Band, index: number, channel: Channel): readonly SamplingFault[] {
   const rates = rateRange(channel.rate);
   const fault = (kind: SamplingFault['kind'], multiple: number): readonly SamplingFault[] => [
     { kind, index, onto: null, edgeHz: (multiple * channel.rate.hz) / 2 },
@@ -95,10 +85,8 @@ function foldFault(
   return upper <= band.highHz * (1 + slack) ? fault('wanted-touches', above) : [];
 }
 
-type PlainBand = Parameters<typeof appearance>[0];
-
 /** Whether two bands overlap as they appear at either end of the clock's tolerance, or change places between the ends. */
-function meetAfterFolding(channel: Channel, one: PlainBand, other: PlainBand): boolean {
+function meetAfterFolding(channel: Channel, one: Band, other: Band): boolean {
   const rates = rateRange(channel.rate);
   const orders = [rates.low, channel.rate.hz, rates.high].map((rateHz) =>
     orderOf(appearance(one, rateHz), appearance(other, rateHz), slack * rateHz),

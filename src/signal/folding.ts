@@ -66,10 +66,37 @@ export function zoneOf(lowHz: number, rateHz: number): number {
  * @example rateWindows(20, 25).map((window) => window.lowHz).join(' ') // '50 25 16.666666666666668 12.5 10'
  */
 export function rateWindows(lowHz: number, highHz: number, most = 1000): readonly RateWindow[] {
+  const count = Math.min(zoneCount(lowHz, highHz), most);
+  return Array.from({ length: count }, (_, index) => rateWindow(lowHz, highHz, index + 1));
+}
+
+/**
+ * How many zones some rate keeps a band whole in: floor(high/(high − low)).
+ *
+ * @param lowHz lower edge with its guard, ≥ 0.
+ * @param highHz upper edge with its guard, > low.
+ * Source: as `rateWindows`.
+ * @example zoneCount(1.0, 1.1) // 11
+ */
+export function zoneCount(lowHz: number, highHz: number): number {
   if (!(lowHz >= 0 && lowHz < highHz && highHz < Infinity))
     throw new RangeError(`A band must run upwards from 0 Hz, not ${lowHz} .. ${highHz}.`);
-  const count = Math.min(slackFloor(highHz / (highHz - lowHz)), most);
-  return Array.from({ length: count }, (_, index) => rateWindow(lowHz, highHz, index + 1));
+  return slackFloor(highHz / (highHz - lowHz));
+}
+
+/**
+ * The rates that keep a band whole in one zone: 2·high/n ≤ rate ≤ 2·low/(n − 1).
+ *
+ * @param lowHz lower edge with its guard, ≥ 0.
+ * @param highHz upper edge with its guard, > low.
+ * @param zone n, 1 … `zoneCount`; beyond it the window is empty, and is given as the single rate 2·high/n.
+ * Source: as `rateWindows`.
+ * @example rateWindow(65, 75, 4).lowHz // 37.5
+ */
+export function rateWindow(lowHz: number, highHz: number, zone: number): RateWindow {
+  const low = (2 * highHz) / zone;
+  const high = zone === 1 ? Infinity : (2 * lowHz) / (zone - 1);
+  return { zone, lowHz: low, highHz: Math.max(low, high), inverted: zone % 2 === 0 };
 }
 
 /**
@@ -92,12 +119,6 @@ export function landingFrequencies(lowHz: number, highHz: number, rateHz: number
     );
   }
   return found;
-}
-
-function rateWindow(lowHz: number, highHz: number, zone: number): RateWindow {
-  const low = (2 * highHz) / zone;
-  const high = zone === 1 ? Infinity : (2 * lowHz) / (zone - 1);
-  return { zone, lowHz: low, highHz: Math.max(low, high), inverted: zone % 2 === 0 };
 }
 
 function slackFloor(value: number): number {
