@@ -28,8 +28,8 @@ export type Code = ProblemCode | JudgedCode;
 /** How a finding counts: an error fails the check, a warning only under --strict, a hint never. */
 export type Severity = 'error' | 'warning' | 'hint';
 
-/** The kinds of change that may cure a finding. */
-export type RemedyKind = 'rate' | 'order' | 'corner';
+/** The kinds of change that may cure a finding, the cheapest first; `guard` is that of time slots. */
+export type RemedyKind = 'rate' | 'pulse' | 'guard' | 'corner' | 'part' | 'order' | 'family';
 
 /** The numbers of a finding; null where a figure does not apply. */
 export interface FindingFigures {

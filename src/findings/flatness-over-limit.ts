@@ -40,7 +40,7 @@ export const flatnessOverLimit: FindingKind = {
   severity: 'error',
   group: 'the wanted band',
   help,
-  remedies: ['rate', 'corner', 'order'],
+  remedies: ['rate', 'pulse', 'corner', 'part', 'order', 'family'],
   check: (subject) => {
     const limit = brokenLimit(subject.figures, 'flatness');
     return limit === null ? [] : [over(subject, limit)];

@@ -37,7 +37,7 @@ export const headroomShort: FindingKind = {
   severity: 'error',
   group: 'sampling',
   help,
-  remedies: ['corner', 'order'],
+  remedies: ['corner', 'part', 'order', 'family'],
   check: (subject) => {
     const limit = brokenLimit(subject.figures, 'headroom');
     return limit === null ? [] : [short(subject, limit)];

@@ -38,7 +38,7 @@ export const imageOverLimit: FindingKind = {
   severity: 'error',
   group: 'copies',
   help,
-  remedies: ['rate', 'corner', 'order'],
+  remedies: ['rate', 'pulse', 'corner', 'part', 'order', 'family'],
   check: (subject) => {
     const limit = brokenLimit(subject.figures, 'image');
     if (limit === null) return [];

@@ -7,5 +7,6 @@ export { explain, pageName } from './page';
 export { thinBelow } from './limits';
 export { same as sameRate } from './rate-choices';
 export { spanOfFinding } from './span';
+export { windowWords, zoneWords } from './window-words';
 export { decimalsFor, limitWords } from './wording';
 export { createJudgeStore, type JudgeStore, type Store } from './store';

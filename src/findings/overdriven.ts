@@ -34,7 +34,7 @@ export const overdriven: FindingKind = {
   severity: 'warning',
   group: 'sampling',
   help,
-  remedies: ['corner', 'order'],
+  remedies: ['corner', 'part', 'order', 'family'],
   check: ({ channel, figures }) => {
     const { headroom } = figures;
     const asked = figures.limits.some((figure) => figure.limit === 'headroom');

@@ -39,7 +39,7 @@ export const snrShort: FindingKind = {
   severity: 'error',
   group: 'the wanted band',
   help,
-  remedies: ['rate', 'corner'],
+  remedies: ['rate', 'corner', 'part'],
   check: (subject) => {
     const limit = brokenLimit(subject.figures, 'snr');
     return limit === null ? [] : [short(subject, limit)];

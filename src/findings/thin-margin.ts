@@ -37,7 +37,7 @@ export const thinMargin: FindingKind = {
   severity: 'warning',
   group: 'advice',
   help,
-  remedies: ['rate', 'corner', 'order'],
+  remedies: ['rate', 'pulse', 'corner', 'part', 'order', 'family'],
   check: (subject) =>
     subject.figures.limits
       .filter((figure) => figure.judged && figure.passes && (figure.margin ?? Infinity) < thinBelow(subject.channel, figure))

@@ -1,11 +1,13 @@
 /** `wanted-folds`: sampling lays a wanted band over itself or over another wanted band. */
 import type { Figures, SamplingFault } from '../analysis/figures';
+import { rateWindowsOf } from '../analysis/rate-windows';
 import type { Channel } from '../spec/channel';
 import { formatCount, formatFrequency } from '../units/format';
 import { findingIn } from './build';
 import type { Finding } from './finding';
 import { bandWords } from './frequency-words';
 import type { FindingKind, Help, Subject } from './kind';
+import { windowWords } from './window-words';
 
 const help: Help = {
   summary: 'Sampling lays a wanted band over itself, or over another wanted band.',
@@ -68,18 +70,41 @@ function folds({ channel, figures }: Subject, fault: SamplingFault): Finding {
     fault.edgeHz === null
       ? `${band} folds onto itself`
       : `${band} crosses ${edgeWords(figures, fault.edgeHz)}, and folds onto itself`;
-  const other =
-    fault.onto === null
-      ? null
-      : `${band} comes out on top of ${wantedWords(channel, fault.onto)}, at ${formatFrequency(figures.outputRate)}`;
+  const other = fault.onto === null ? null : `${band} ${meetsWords(channel, figures, fault.onto)}`;
   return findingIn(channel, {
     code: 'wanted-folds',
     severity: 'error',
-    message: `${other ?? self}. Choose another rate.`,
+    message: `${other ?? self}. ${cureWords(channel)}`,
     path: ['wanted', fault.index, 'band'],
     related: [{ path: ['rate'], message: 'the rate' }, ...onto(fault)],
     figures: { frequency: fault.edgeHz },
   });
+}
+
+/** What two bands do to each other: in generate the same words would have to make both. */
+function meetsWords(channel: Channel, { outputRate }: Figures, onto: number): string {
+  const other = wantedWords(channel, onto);
+  const at = `at ${formatFrequency(outputRate)}`;
+  return channel.direction === 'generate'
+    ? `is made by the same words as ${other}, ${at}`
+    : `comes out on top of ${other}, ${at}`;
+}
+
+/** How many zones around the present one are looked at for rates to name. */
+const zonesLookedAt = 24;
+
+/** The windows of rates next to the present one, below and above. */
+function cureWords(channel: Channel): string {
+  const { windows, leftOff } = rateWindowsOf(channel, zonesLookedAt);
+  const rate = channel.rate.hz;
+  const below = windows.filter(({ high }) => high < rate).at(-1);
+  const above = windows.find(({ low }) => low > rate);
+  const near = [below, above].filter((window) => window !== undefined).map(windowWords);
+  const whole = channel.wanted.length === 1 ? 'it whole' : 'all bands whole and apart';
+  if (near.length > 0) return `Rates of ${near.join(' and of ')} keep ${whole}.`;
+  return leftOff > 0
+    ? 'Choose another rate.'
+    : `No rate keeps ${whole}: even before they are sampled the bands lie on each other.`;
 }
 
 function onto(fault: SamplingFault): readonly { path: (string | number)[]; message: string }[] {

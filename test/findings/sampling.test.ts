@@ -11,7 +11,8 @@ describe('wanted-folds and wanted-touches', () => {
   it('names the multiple of half the rate that the band crosses', () => {
     const faults = [{ kind: 'wanted-folds', index: 0, onto: null, edgeHz: 1.4e6 }] as const;
     assert.deepEqual(messages('wanted-folds', echo, figures({ ...at, faults })), [
-      'The wanted band 1.2 MHz .. 1.6 MHz crosses 1.4 MHz, the rate of 1.4 MHz, and folds onto itself. Choose another rate.',
+      'The wanted band 1.2 MHz .. 1.6 MHz crosses 1.4 MHz, the rate of 1.4 MHz, and folds onto itself. ' +
+        'Rates of 1.067 MHz to 1.2 MHz (zone 3, not inverted) and of 1.6 MHz to 2.4 MHz (zone 2, inverted) keep it whole.',
     ]);
   });
 
@@ -33,6 +34,22 @@ describe('wanted-folds and wanted-touches', () => {
       /^The wanted band `far`, .* comes out on top of the wanted band `near`, 100 kHz \.\. 200 kHz/,
     );
     assert.ok(finding?.related.some(({ place }) => place.path.join('.') === 'wanted.0.band'));
+    assert.match(finding.message, /Rates of .* \(zones 1 and \d\) .* keep all bands whole and apart\.$/);
+  });
+
+  it('says of two bands that leave in the same words what they are made of', () => {
+    const two = { ...echo, direction: 'generate' as const, wanted: [wanted(100e3, 200e3), wanted(1.2e6, 1.3e6)] };
+    const faults = [{ kind: 'wanted-folds', index: 1, onto: 0, edgeHz: null }] as const;
+    assert.match(
+      messages('wanted-folds', two, figures({ ...at, faults }))[0] ?? '',
+      /is made by the same words as the wanted band/,
+    );
+  });
+
+  it('says where no rate can help', () => {
+    const two = { ...echo, wanted: [wanted(100e3, 200e3), wanted(150e3, 250e3)] };
+    const faults = [{ kind: 'wanted-folds', index: 1, onto: 0, edgeHz: null }] as const;
+    assert.match(messages('wanted-folds', two, figures({ ...at, faults }))[0] ?? '', /No rate keeps all bands whole and apart:/);
   });
 
   it('warns where the band only touches the edge, and says one thing at a time', () => {
