@@ -1,20 +1,19 @@
-/** Every family, orders 1 to 20, against arithmetic of 50 digits and more (test/reference/make-filter-vectors.py). */
+/** What every family promises of its corner, its stop edge and its turning points; roots and gains are among the values from outside. */
 import assert from 'node:assert/strict';
 import { designFilter, type CornerAt, type FilterFamily } from '../../../src/signal/families/design-filter';
 import { filterResponse, type Filter } from '../../../src/signal/filter';
 import { readFilterVectors, type StoredFilter } from '../../reference/filter-vectors';
-import { assertGainAndDelay, assertRoots } from '../../support/stored-filters';
 import { assertClose, assertWithin, filterRelative } from '../../support/tolerance';
 
 const vectors = readFilterVectors();
 const toDb = (logGain: number): number => (20 / Math.LN10) * logGain;
 
-const groups: readonly (readonly [FilterFamily, CornerAt, readonly StoredFilter[], number])[] = [
-  ['inverse-chebyshev', 'stopband', vectors.inverseChebyshev, 4],
-  ['elliptic', 'ripple', vectors.elliptic, 8],
-  ['bessel', 'half-power', vectors.bessel, 1],
-  ['legendre', 'half-power', vectors.legendre, 1],
-  ['gaussian', 'half-power', vectors.gaussian, 1],
+const groups: readonly (readonly [FilterFamily, CornerAt, readonly StoredFilter[]])[] = [
+  ['inverse-chebyshev', 'stopband', vectors.inverseChebyshev],
+  ['elliptic', 'ripple', vectors.elliptic],
+  ['bessel', 'half-power', vectors.bessel],
+  ['legendre', 'half-power', vectors.legendre],
+  ['gaussian', 'half-power', vectors.gaussian],
 ];
 
 function design(family: FilterFamily, stored: StoredFilter, corners: number, cornerAt: CornerAt): Filter {
@@ -43,22 +42,7 @@ function nameOf(family: FilterFamily, { order, ripple, attenuation }: StoredFilt
 }
 
 describe('every filter family', () => {
-  for (const [family, cornerAt, stored, sets] of groups) {
-    it(`${family} has the poles, zeros, gain and delay of 50-digit arithmetic for orders 1 to 20`, () => {
-      assert.equal(stored.length, sets * 20);
-      assert.deepEqual(
-        [...new Set(stored.map(({ order }) => order))],
-        Array.from({ length: 20 }, (_, index) => index + 1),
-      );
-      for (const one of stored) {
-        const filter = design(family, one, 1, cornerAt);
-        const name = nameOf(family, one);
-        assertRoots(filter.poles, one.poles, `pole of ${name}`);
-        assertRoots(filter.zeros, one.zeros, `zero of ${name}`);
-        assertGainAndDelay(filter, one, { grid: vectors.grid, edgeHz: 1, perSecond: 2 * Math.PI }, name);
-      }
-    });
-
+  for (const [family, cornerAt, stored] of groups) {
     it(`${family} is 10·log10(2) dB down at its corner unless the corner names something else`, () => {
       for (const one of stored) {
         const response = filterResponse(design(family, one, 14e3, 'half-power'));
@@ -77,18 +61,6 @@ describe('every filter family', () => {
       }
     });
   }
-
-  it('keeps an elliptic filter beside a brick wall, where the edges are 2e−11 and less apart', () => {
-    assert.equal(vectors.tight.length, 6);
-    assert.ok(vectors.tight.some(({ stopEdgeLessOne }) => stopEdgeLessOne! < 2e-11));
-    for (const one of vectors.tight) {
-      const filter = design('elliptic', one, 1, 'ripple');
-      const name = nameOf('elliptic', one);
-      assertRoots(filter.poles, one.poles, `pole of ${name}`);
-      assertRoots(filter.zeros, one.zeros, `zero of ${name}`);
-      assertGainAndDelay(filter, one, { grid: vectors.tightGrid, edgeHz: 1, perSecond: 2 * Math.PI }, name);
-    }
-  });
 
   it('puts the stop edge of an elliptic filter where its attenuation is first reached', () => {
     for (const one of vectors.elliptic) {

@@ -24,7 +24,7 @@ describe('pulseDelay and pulsePhase', () => {
     });
   }
 
-  // checks.md 11: τ − w/(e^{w/τ} − 1).
+  // Closed form at 0 Hz: τ − w/(e^{w/τ} − 1).
   it('is 0.19321634 of the width at 0 Hz for a decay of 0.2 of it', () => {
     assertClose(pulseDelay({ shape: 'exponential', widthSeconds: 1, decaySeconds: 0.2 }, 0), 0.2 - 1 / Math.expm1(5), 1e-14);
     assertWithin(pulseDelay({ shape: 'exponential', widthSeconds: 1, decaySeconds: 0.2 }, 0), 0.19321634, 1e-8);

@@ -44,7 +44,7 @@ describe('track and hold', () => {
     });
   }
 
-  // checks.md 11: e²·T/2.
+  // Closed form at 0 Hz: e²·T/2.
   it('delays the wanted path by 0.405, 0.245, 0.125 and 0.005 of the period at 0 Hz', () => {
     for (const [d, delay] of [
       [0.1, 0.405],

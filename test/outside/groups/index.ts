@@ -1,0 +1,27 @@
+/** The groups of outside values, in the order of the printed table. */
+import type { OutsideGroup } from '../group';
+import { bandwidths, passive } from './bandwidths';
+import { folds, windows } from './folding';
+import { delays, holdValues, narrowGates, pulses, trains } from './holds';
+import { orders } from './orders';
+import { prototypes } from './prototypes';
+import { kinds, responses } from './responses';
+import { brickWalls, toOrderTwenty } from './to-order-twenty';
+
+export const groups: readonly OutsideGroup[] = [
+  pulses,
+  holdValues,
+  trains,
+  narrowGates,
+  delays,
+  folds,
+  windows,
+  toOrderTwenty,
+  brickWalls,
+  prototypes,
+  responses,
+  kinds,
+  bandwidths,
+  passive,
+  orders,
+];
