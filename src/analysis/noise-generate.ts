@@ -1,16 +1,18 @@
 /** Noise of a generate channel in the wanted band as it leaves: quantisation shaped by hold and filter, and jitter of the hold's edges, which only the filter shapes. */
-import { foldFrequency } from '../signal/folding';
+import { frequencyWeight } from '../signal/frequency-weight';
 import { integratePower, quantisationSnrDb } from '../signal/noise';
 import type { Response } from '../signal/response';
+import { product } from '../signal/response-algebra';
 import type { Channel } from '../spec/channel';
 import { channelPath } from './channel-path';
 import type { ChannelPath } from './channel-path';
-import { atCorners } from './corners';
+import { atCorners, deviationsAt } from './corners';
+import type { Corners } from './corners';
 import { powerDb, powerOf } from './decibels';
+import { edgePower } from './hold-edges';
 import type { DirectionNoise } from './noise-parts';
-import { pulseSeconds } from './pulse';
 import { jitterSeconds, noiseBands } from './test-tone';
-import { cornerDeviations, deviation, joinWorst, partsVary, rateLabel, rateRange, varies } from './tolerances';
+import { deviation, joinWorst, partsVary, rateLabel, rateRange, varies } from './tolerances';
 import { worstCorners } from './worst-corners';
 import { worstPath } from './worst-path';
 
@@ -46,22 +48,19 @@ function powersOf(path: ChannelPath): Powers {
     noiseBands(channel).reduce((sum, band) => sum + integratePower(response, band.low, band.high).value, 0) / (rateHz / 2);
   return {
     quantisation: channel.bits === null ? null : over(path.total) / powerOf(quantisationSnrDb(channel.bits)),
-    // The edges' noise passes the filter only, while the tone also has the hold's gain.
-    jitter: sigma === 0 ? null : over(path.analogue) * edgePower(path) * (rateHz * sigma) ** 2,
+    jitter: sigma === 0 ? null : jitterPower(path, sigma, over),
   };
 }
 
-/**
- * Σ⟨s²⟩ over the edges of one period, over the tone's power before the hold: each edge steps by a sample (two a period), but where
- * the pulse lasts m whole periods an edge ends one pulse and begins another: 4·sin²(πmf/fs).
- */
-function edgePower(path: ChannelPath): number {
-  const { channel, rateHz } = path;
-  const periods = pulseSeconds(channel.pulse, rateHz) * rateHz;
-  const whole = Math.round(periods);
-  if (whole < 1 || Math.abs(periods - whole) > 1e-9 * whole) return 2;
-  const { landsHz } = foldFrequency(channel.testTone.frequencyHz, rateHz);
-  return 4 * Math.sin((Math.PI * whole * landsHz) / rateHz) ** 2;
+/** The edges' noise passes the filter only, while the tone also has the hold's gain; a hold without edges moves as a whole. */
+function jitterPower(
+  { channel, rateHz, analogue, total }: ChannelPath,
+  sigma: number,
+  over: (response: Response) => number,
+): number {
+  const edges = edgePower(channel.pulse, rateHz, channel.testTone.frequencyHz);
+  if (edges === null) return over(product([frequencyWeight(), total])) * (2 * Math.PI * sigma) ** 2;
+  return over(analogue) * edges * (rateHz * sigma) ** 2;
 }
 
 /** Each power over the test tone's own as it leaves by the same path. */
@@ -84,7 +83,7 @@ function worstShares(
   const weakest = worstPath(path, question).cornersAt(channel.testTone.frequencyHz);
   const found = [...new Set([rate.hz, low, high])].map((rateHz) => {
     const moved = channelPath(channel, rateHz);
-    const sharesWith = (corners: readonly number[]): readonly number[] => {
+    const sharesWith = (corners: Corners): readonly number[] => {
       const there = atCorners(moved, corners);
       return sharesOf(there, powersOf(there));
     };
@@ -93,7 +92,7 @@ function worstShares(
   });
   const worst = found.reduce((best, one) => (sum(one.shares) > sum(best.shares) ? one : best));
   const clock = varies(rate.tolerance) ? { [rateLabel(rate)]: deviation(worst.rateHz / rate.hz, rate.tolerance) } : null;
-  return { shares: worst.shares, worstAt: joinWorst(cornerDeviations(channel.stages, worst.corners), clock) };
+  return { shares: worst.shares, worstAt: joinWorst(deviationsAt(path, worst.corners), clock) };
 }
 
 function sum(powers: readonly number[]): number {

@@ -16,6 +16,7 @@ import {
   tone,
   wanted,
 } from '../support/channel-builder';
+import { plainHold } from '../support/plain-pulse';
 import { assertWithin } from '../support/tolerance';
 
 const db = (power: number): number => 10 * Math.log10(power);
@@ -159,6 +160,28 @@ describe('noise of a generate channel', () => {
     assertWithin(jittered(1, 0.2, rectangleShare(0.5)) ?? NaN, 50.82575, 1e-4);
     assertWithin(jittered(1, 0.2, rectangleShare(0.25)) ?? NaN, 44.91275, 1e-4);
     assertWithin(jittered(2, 0.8, rectangleShare(0.5)) ?? NaN, 48.54903, 1e-4);
+  });
+
+  it('from jitter of a split hold counts its middle edge, and adds the steps of two pulses that share one', () => {
+    // Simulated edge by edge: 49.86147 dB for a full-width split and a tone of 0.3 times the rate that is wanted in zone 2.
+    const full: Pulse = { shape: 'split', width: { share: 1 } };
+    assertWithin(jittered(2, 0.7, full) ?? NaN, 49.86147, 1e-4);
+    // 6X² where no edge is shared, against the tone's own copy of sin²(πz)/(πz), z = f·w/2.
+    const narrow: Pulse = { shape: 'split', width: { share: 0.6 } };
+    const gain = 0.6 * (Math.sin(Math.PI * 0.7 * 0.3) ** 2 / (Math.PI * 0.7 * 0.3));
+    assertWithin(jittered(2, 0.7, narrow) ?? NaN, db(gain ** 2 / (6 * 1e-6)), 1e-4);
+  });
+
+  it('from jitter of a hold without steps is that of the whole pulse moving', () => {
+    // Simulated: 55.43749 dB for a raised cosine of one period, a tone of 0.2 times the rate and noise over 0 .. half the rate.
+    assertWithin(jittered(1, 0.2, { shape: 'raised-cosine', width: { share: 1 }, edge: { share: 0.5 } }) ?? NaN, 55.43749, 1e-4);
+  });
+
+  it('from jitter of an exponential hold counts the step at its start and what is left of it at its end', () => {
+    const decayed = Math.exp(-2);
+    const pulse: Pulse = { shape: 'exponential', width: { share: 0.5 }, decay: { share: 0.25 } };
+    const gain = plainHold(pulse, 1, 0.2);
+    assertWithin(jittered(1, 0.2, pulse) ?? NaN, db(gain ** 2 / ((1 + decayed ** 2) * 1e-6)), 1e-4);
   });
 
   it('from quantisation is shaped by the hold at the output frequency', () => {
