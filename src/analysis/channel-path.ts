@@ -1,25 +1,22 @@
 /** A channel's path as responses: the aperture or hold, each stage and the whole, to be evaluated at any frequency by analysis, pictures and hovers. */
-import { filterResponse, groupDelay, phaseRad } from '../signal/filter';
-import type { Filter } from '../signal/filter';
 import { constantResponse, product } from '../signal/response-algebra';
 import type { Response } from '../signal/response';
-import type { Channel, Stage } from '../spec/channel';
+import type { Channel } from '../spec/channel';
 import { toDb } from './decibels';
-import { pulseResponse, pulseSeconds } from './pulse';
-import { stageFilter } from './stage-filter';
+import { stageDelay, stagePath, stagePhaseRad } from './stage-path';
+import type { StagePath } from './stage-path';
+import { hasPulse, wantedDelaySeconds, wantedPulse } from './wanted-pulse';
 
-/** One stage with its filter and its response at nominal values. */
-export interface StagePath {
-  readonly stage: Stage;
-  readonly filter: Filter;
-  readonly response: Response;
-}
+export type { StagePath } from './stage-path';
 
 /** The whole path of a channel at nominal values and one rate. */
 export interface ChannelPath {
   readonly channel: Channel;
   readonly rateHz: number;
-  /** The aperture at the input frequency, or the hold at the output frequency with its area over the period. */
+  /**
+   * The aperture at the input frequency, the hold at the output frequency with its area over the period, or what a relay's gate makes of
+   * the wanted path.
+   */
   readonly pulse: Response;
   readonly stages: readonly StagePath[];
   /** All stages in series, without the pulse. */
@@ -31,9 +28,9 @@ export interface ChannelPath {
 /** The path of a channel, at its own rate unless another is given. */
 export function channelPath(channel: Channel, rateHz = channel.rate.hz): ChannelPath {
   const stages = channel.stages.map(stagePath);
-  const pulse = pulseResponse(channel, rateHz);
+  const pulse = wantedPulse(channel, rateHz);
   const analogue = inSeries(stages.map((stage) => stage.response));
-  const total = inSeries([...(channel.pulse.shape === 'instant' ? [] : [pulse]), ...stages.map((stage) => stage.response)]);
+  const total = inSeries([...(hasPulse(channel) ? [pulse] : []), ...stages.map((stage) => stage.response)]);
   return { channel, rateHz, pulse, stages, analogue, total };
 }
 
@@ -66,18 +63,17 @@ export function lossDb(response: Response, frequencyHz: number, referenceHz: num
   return gainDb(response, referenceHz) - gainDb(response, frequencyHz);
 }
 
-/** The stages' phase in radians at a frequency, unwrapped by pole and zero; the pulse's own delay is left out. */
-export function pathPhaseRad(path: ChannelPath, frequencyHz: number): number {
-  return path.stages.reduce((sum, stage) => sum + phaseRad(stage.filter, frequencyHz), 0);
+/** The stages' phase in radians at a frequency, unwrapped by pole and zero; the pulse's own is left out. Null where a table has none. */
+export function pathPhaseRad(path: ChannelPath, frequencyHz: number): number | null {
+  return sumOrNull(path.stages.map((stage) => stagePhaseRad(stage, frequencyHz)));
 }
 
-/** Group delay of stages and pulse in seconds: a rectangle delays by half its width. */
-export function pathDelay(path: ChannelPath, frequencyHz: number): number {
-  const half = pulseSeconds(path.channel.pulse, path.rateHz) / 2;
-  return path.stages.reduce((sum, stage) => sum + groupDelay(stage.filter, frequencyHz), half);
+/** Group delay of stages and pulse in seconds; null where a measured stage has no phase. */
+export function pathDelay(path: ChannelPath, frequencyHz: number): number | null {
+  const stages = sumOrNull(path.stages.map((stage) => stageDelay(stage, frequencyHz)));
+  return stages === null ? null : stages + wantedDelaySeconds(path.channel, path.rateHz, frequencyHz);
 }
 
-function stagePath(stage: Stage): StagePath {
-  const filter = stageFilter(stage.form);
-  return { stage, filter, response: filterResponse(filter) };
+function sumOrNull(values: readonly (number | null)[]): number | null {
+  return values.reduce((sum, value) => (sum === null || value === null ? null : sum + value), 0);
 }

@@ -1,65 +1,100 @@
-/** A path at given corners of its tolerances: which combinations are looked at, and the path with its stages stretched to one of them. */
-import { filterResponse } from '../signal/filter';
-import type { Filter } from '../signal/filter';
+/** A path with what of it may deviate set to given values: which combinations are looked at, and the path at one of them. */
 import { inSeries } from './channel-path';
-import type { ChannelPath, StagePath } from './channel-path';
-import { factorsOf, varies } from './tolerances';
+import type { ChannelPath } from './channel-path';
+import type { WorstAt } from './figures';
+import { stretchedStage } from './stage-path';
+import type { StagePath } from './stage-path';
+import { cornerLabel, deviation, factorsOf, joinWorst, varies } from './tolerances';
+import { hasPulse } from './wanted-pulse';
 
-/** One factor for the corner of each stage, in order. */
-export type Corners = readonly number[];
+/** A stage with parts or Qs of it off. */
+export interface StageVariant {
+  /** With its corner as it is. */
+  readonly path: StagePath;
+  /** The factor on its corner. */
+  readonly factor: number;
+  /** What is off besides the corner, and how far, by label. */
+  readonly deviations: WorstAt;
+}
 
-/** More stages than this that vary by themselves are moved together. */
-const separateStages = 6;
+/** What one stage is set to: a factor on its corner, or a variant of it. */
+export type StageSetting = number | StageVariant;
 
-/** Every combination of corners at either end, nominal first. */
+/** A setting for each stage, in order. */
+export type Corners = readonly StageSetting[];
+
+/** More combinations than this are not gone through: then the stages are moved together, and each by itself. */
+const mostSets = 64;
+
+/** Every combination of settings at either end, nominal first. */
 export function cornerSets(path: ChannelPath): readonly Corners[] {
-  const nominal = path.stages.map(() => 1);
-  const varying = path.stages.filter(({ stage }) => varies(stage.cornerTolerance)).length;
-  if (varying === 0) return [nominal];
-  const ends = path.stages.map(({ stage }) => factorsOf(stage.cornerTolerance));
-  if (varying > separateStages) return [nominal, ends.map((end) => end.low), ends.map((end) => end.high)];
+  const nominal: Corners = path.stages.map(() => 1);
+  const ends = path.stages.map(endsOf);
+  if (ends.every((settings) => settings.length === 1)) return [nominal];
+  if (ends.reduce((count, settings) => count * settings.length, 1) > mostSets) return [nominal, ...fewSets(nominal, ends)];
   const combined = ends.reduce<readonly Corners[]>(
-    (sets, end) =>
-      sets.flatMap((set) =>
-        end.low === end.high
-          ? [[...set, 1]]
-          : [
-              [...set, end.low],
-              [...set, end.high],
-            ],
-      ),
+    (sets, settings) => sets.flatMap((set) => settings.map((setting): Corners => [...set, setting])),
     [[]],
   );
   return [nominal, ...combined];
 }
 
-/** The path with its stages' corners moved. */
+/** All stages at their first settings, at their second ones and so on, then each stage at each of its own with the others nominal. */
+function fewSets(nominal: Corners, ends: readonly (readonly StageSetting[])[]): readonly Corners[] {
+  const most = Math.max(...ends.map((settings) => settings.length));
+  const together = Array.from({ length: most }, (_, index): Corners =>
+    ends.map((settings) => settings[index % settings.length] ?? 1),
+  );
+  const alone = ends.flatMap((settings, stage) =>
+    settings.length === 1
+      ? []
+      : settings.map((setting): Corners => nominal.map((one, index) => (index === stage ? setting : one))),
+  );
+  return [...together, ...alone];
+}
+
+/** The ends of what one stage may be. */
+function endsOf({ stage }: StagePath): readonly StageSetting[] {
+  if (!varies(stage.cornerTolerance)) return [1];
+  const { low, high } = factorsOf(stage.cornerTolerance);
+  return [low, high];
+}
+
+/** The path with its stages set. */
 export function atCorners(path: ChannelPath, corners: Corners): ChannelPath {
-  if (corners.every((factor) => factor === 1)) return path;
-  const stages = path.stages.map((stage, index) => stretchedStage(stage, corners[index] ?? 1));
+  if (corners.every((setting) => setting === 1)) return path;
+  const stages = path.stages.map((stage, index) => atSetting(stage, corners[index] ?? 1));
   const responses = stages.map((stage) => stage.response);
-  const pulses = path.channel.pulse.shape === 'instant' ? [] : [path.pulse];
-  return {
-    channel: path.channel,
-    rateHz: path.rateHz,
-    pulse: path.pulse,
-    stages,
-    analogue: inSeries(responses),
-    total: inSeries([...pulses, ...responses]),
-  };
+  const pulses = hasPulse(path.channel) ? [path.pulse] : [];
+  return { ...path, stages, analogue: inSeries(responses), total: inSeries([...pulses, ...responses]) };
 }
 
-function stretchedStage(path: StagePath, factor: number): StagePath {
-  if (factor === 1) return path;
-  const filter = stretchedFilter(path.filter, factor);
-  return { stage: path.stage, filter, response: filterResponse(filter) };
+/** A stage at a setting. */
+export function atSetting(stage: StagePath, setting: StageSetting): StagePath {
+  return typeof setting === 'number' ? stretchedStage(stage, setting) : stretchedStage(setting.path, setting.factor);
 }
 
-function stretchedFilter({ poles, zeros, gainAt, turnsHz }: Filter, factor: number): Filter {
-  return {
-    poles: poles.map(({ re, im }) => ({ re: re * factor, im: im * factor })),
-    zeros: zeros.map(({ re, im }) => ({ re: re * factor, im: im * factor })),
-    gainAt: { frequencyHz: gainAt.frequencyHz * factor, gain: gainAt.gain },
-    turnsHz: turnsHz?.map((turn) => turn * factor) ?? null,
-  };
+/** ln of a stage's gain at a setting. */
+export function gainAtSetting(stage: StagePath, setting: StageSetting, frequencyHz: number): number {
+  return typeof setting === 'number'
+    ? stage.response.logGain(frequencyHz / setting)
+    : setting.path.response.logGain(frequencyHz / setting.factor);
+}
+
+/** The factor on a stage's corner at a setting. */
+export function factorOf(setting: StageSetting): number {
+  return typeof setting === 'number' ? setting : setting.factor;
+}
+
+/** What deviates at given settings and how far, by label; null where nothing can. */
+export function deviationsAt(path: ChannelPath, corners: Corners): WorstAt | null {
+  return joinWorst(
+    ...path.stages.map(({ stage }, index) => {
+      const setting = corners[index] ?? 1;
+      const corner = varies(stage.cornerTolerance)
+        ? { [cornerLabel(stage)]: deviation(factorOf(setting), stage.cornerTolerance) }
+        : null;
+      return joinWorst(corner, typeof setting === 'number' ? null : setting.deviations);
+    }),
+  );
 }

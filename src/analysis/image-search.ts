@@ -8,8 +8,10 @@ import { withPulse } from './channel-path';
 import type { ChannelPath } from './channel-path';
 import { axisOf, leavesAt } from './copies';
 import type { Copy, CopyRun, WantedCopy } from './copies';
+import { deviationsAt } from './corners';
+import type { Corners } from './corners';
 import { wholePulse } from './whole-pulse';
-import { cornerDeviations, factorsOf, partsVary } from './tolerances';
+import { factorsOf, partsVary } from './tolerances';
 import type { WorstAt } from './figures';
 import { nominalPath, worstPath } from './worst-path';
 import type { WorstPath } from './worst-path';
@@ -34,8 +36,8 @@ export interface ImagePoint {
   readonly frequencyHz: number;
   readonly gapDb: number;
   readonly evaluations: number;
-  /** The corner factor of each stage there. */
-  readonly corners: readonly number[];
+  /** What each stage is set to there. */
+  readonly corners: Corners;
   /** ln of the stages' gain tolerances in `logGain`. */
   readonly gainLog: number;
   readonly worstAt: WorstAt | null;
@@ -149,7 +151,7 @@ function strongestTied(question: ImageQuestion, copy: Copy): ImagePoint | null {
     evaluations: found.evaluations,
     corners,
     gainLog: 0,
-    worstAt: cornerDeviations(path.channel.stages, corners),
+    worstAt: deviationsAt(path, corners),
   };
 }
 

@@ -1,46 +1,34 @@
-/** The poles of one stage, from the form in which the spec gives it. */
+/** The poles and zeros of one stage, from the form in which the spec gives it. */
 import { designFilter } from '../signal/families/design-filter';
+import { seriesCapacitor, seriesResonance } from '../signal/families/passive-sections';
+import { polesAndZeros } from '../signal/families/poles-and-zeros';
 import { realPole } from '../signal/families/real-pole';
+import { secondOrder } from '../signal/families/second-order';
 import type { Filter } from '../signal/filter';
-import type { FamilyForm, StageForm } from '../spec/channel';
+import type { FamilyForm, MeasuredForm, StageForm } from '../spec/channel';
 
-/** The filter that a stage is. */
-export function stageFilter(form: StageForm): Filter {
+/** The filter of a form at nominal values; a `gain` other than 1 stands in a family stage only. */
+export function stageFilter(form: Exclude<StageForm, MeasuredForm>, gain: number): Filter {
   switch (form.kind) {
     case 'family':
-      return familyFilter(form);
+      return familyFilter(form, gain);
+    case 'second-order':
+      return secondOrder(form.sectionKind, form.frequencyHz, form.q);
     case 'rc':
       return realPole(1 / (2 * Math.PI * form.ohm * form.farad));
+    case 'cr':
+      return seriesCapacitor(form.ohm, form.farad);
+    case 'rlc':
+      return seriesResonance(form.ohm, form.henry, form.farad);
     case 'bandwidth':
       return realPole(form.cornerHz);
-    case 'second-order':
-    case 'cr':
-    case 'rlc':
     case 'roots':
-    case 'measured':
-      throw notComputed(form.kind);
+      return polesAndZeros(form);
   }
 }
 
-function familyFilter({
-  family,
-  filterKind,
-  order,
-  cornerHz,
-  upperCornerHz,
-  cornerAt,
-  rippleDb,
-  attenuationDb,
-}: FamilyForm): Filter {
+function familyFilter(form: FamilyForm, gain: number): Filter {
+  const { family, filterKind, order, cornerHz, upperCornerHz, cornerAt, rippleDb, attenuationDb } = form;
   const corners = upperCornerHz === null ? cornerHz : { low: cornerHz, high: upperCornerHz };
-  return designFilter({ family, kind: filterKind, order, corners, cornerAt, rippleDb, attenuationDb, gain: 1 });
-}
-
-const notComputed = (form: string) => new RangeError(`a stage that is not computed yet: ${form}`);
-
-/** A frequency above which the stage's gain only falls: its corner. */
-export function stageCornerHz(form: StageForm): number {
-  if (form.kind === 'rc') return 1 / (2 * Math.PI * form.ohm * form.farad);
-  if (form.kind === 'family' || form.kind === 'bandwidth') return form.cornerHz;
-  throw notComputed(form.kind);
+  return designFilter({ family, kind: filterKind, order, corners, cornerAt, rippleDb, attenuationDb, gain });
 }

@@ -61,14 +61,6 @@ export function deviation(factor: number, tolerance: Tolerance): number {
   return near(0) ? 0 : Number(relative.toPrecision(6));
 }
 
-/** The deviations of stages' corners at given factors, by label. */
-export function cornerDeviations(stages: readonly Stage[], corners: readonly number[]): WorstAt {
-  const entries = stages.flatMap((stage, index) =>
-    varies(stage.cornerTolerance) ? [[cornerLabel(stage), deviation(corners[index] ?? 1, stage.cornerTolerance)] as const] : [],
-  );
-  return Object.fromEntries(entries);
-}
-
 /** Several parts of one worst case joined; null where nothing deviates. */
 export function joinWorst(...parts: readonly (WorstAt | null)[]): WorstAt | null {
   const joined: WorstAt = Object.assign({}, ...parts) as WorstAt;

@@ -1,10 +1,10 @@
-/** The corners at which a figure that is no single gain, such as a noise sum over a tone, is worst: every end, and inside for stages with ripple. */
+/** The corners at which a figure that is no single gain, such as a noise sum over a tone, is worst: every end, and what lies between. */
 import type { ChannelPath } from './channel-path';
 import { cornerSets } from './corners';
-import type { Corners } from './corners';
+import type { Corners, StageSetting } from './corners';
 import { factorsOf, varies } from './tolerances';
 
-/** How many points between the ends of a rippled stage's corner are looked at before the best is refined. */
+/** How many points between the ends of a corner are looked at before the best is refined. */
 const insidePoints = 7;
 
 /** Steps of the refinement; each narrows the bracket to 0.618 of itself. */
@@ -12,7 +12,10 @@ const goldenSteps = 14;
 
 const golden = (Math.sqrt(5) - 1) / 2;
 
-/** The corners with the largest measure among all ends, further sets and, stage by stage, what lies between. */
+/**
+ * The corners with the largest measure among all ends, further sets and, stage by stage, what lies between the ends: a ripple, a notch or
+ * the flank of a band-pass may be worst there. Parts and Qs are taken at their ends.
+ */
 export function worstCorners(path: ChannelPath, further: readonly Corners[], measure: (corners: Corners) => number): Corners {
   let worst: Corners = [];
   let most = -Infinity;
@@ -23,13 +26,18 @@ export function worstCorners(path: ChannelPath, further: readonly Corners[], mea
   };
   for (const corners of [...cornerSets(path), ...further]) note(corners);
   path.stages.forEach(({ stage }, index) => {
-    if (stage.form.kind !== 'family' || stage.form.rippleDb === null || !varies(stage.cornerTolerance)) return;
+    if (!varies(stage.cornerTolerance)) return;
     const { low, high } = factorsOf(stage.cornerTolerance);
     const others = worst;
-    const at = (factor: number): number => note(others.map((known, position) => (position === index ? factor : known)));
+    const at = (factor: number): number =>
+      note(others.map((known, position) => (position === index ? withFactor(known, factor) : known)));
     refine(at, low, high);
   });
   return worst;
+}
+
+function withFactor(setting: StageSetting, factor: number): StageSetting {
+  return typeof setting === 'number' ? factor : { ...setting, factor };
 }
 
 /** Evenly spaced points, then a golden section about the best of them. */

@@ -6,6 +6,7 @@ import type { Channel } from '../spec/channel';
 import { axisFactors } from './axis';
 import { inSeries, relativeTo } from './channel-path';
 import type { ChannelPath, StagePath } from './channel-path';
+import type { Corners } from './corners';
 import type { WorstAt } from './figures';
 import { stretchedFrom, type WorstQuestion } from './stretched-from';
 import { cornerLabel, deviation, factorsOf, gainLabel, partsVary, varies } from './tolerances';
@@ -16,8 +17,8 @@ export interface WorstPath {
   readonly response: Response;
   /** ln of what the stages' gain tolerances add to it; 0 where gains are measured from a reference. */
   readonly gainLog: number;
-  /** The corner factor of each stage, in order, at which the worst is reached at a frequency. */
-  cornersAt(frequencyHz: number): readonly number[];
+  /** What each stage is set to, in order, where the worst is reached at a frequency. */
+  cornersAt(frequencyHz: number): Corners;
   /** What deviates, and how far, where the worst is reached at a frequency; null where nothing can. The rate is the caller's. */
   worstAt(frequencyHz: number): WorstAt | null;
 }

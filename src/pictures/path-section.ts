@@ -1,12 +1,12 @@
 /** The analogue path: its magnitude stage by stage over all that matters, and the wanted band close up. */
-import { halfPowerHz } from '../analysis';
+import { halfPowerHz, pathDelay } from '../analysis';
 import { flatnessOf } from '../analysis/flatness';
 import type { Section } from '../protocol/picture';
 import { formatDb, formatFrequency } from '../units/format';
 import { closeUpPlot } from './path-close-up';
 import { delayPlot, phasePlot } from './path-timing';
 import { magnitudePlot } from './path-magnitude';
-import { limitFigure } from './subject';
+import { filterPlace, limitFigure } from './subject';
 import type { Subject } from './subject';
 import { standingOf } from './words';
 
@@ -15,12 +15,13 @@ export function pathSection(subject: Subject): Section {
   const limit = limitFigure(subject, 'flatness');
   const closeUp = subject.channel.wanted.length === 0 ? [] : [closeUpPlot(subject)];
   const plain = subject.channel.stages.length === 0 && subject.channel.pulse.shape === 'instant';
-  const timing = plain ? [] : [phasePlot(subject), delayPlot(subject)];
+  const timed = !plain && pathDelay(subject.path, subject.channel.referenceHz) !== null;
+  const timing = timed ? [phasePlot(subject), delayPlot(subject)] : [];
   return {
     id: 'path',
     title: 'Analogue path',
     answer: { text: answerText(subject), standing: standingOf(subject.channel, limit) },
-    place: subject.placeOf(limit === null ? ['filter'] : ['limits', 'flatness']),
+    place: limit === null ? filterPlace(subject) : subject.placeOf(['limits', 'flatness']),
     plots: [...closeUp, magnitudePlot(subject), ...timing],
   };
 }

@@ -1,10 +1,11 @@
-/** Phase and group delay of the whole path, drawn when the reader asks for them. */
+/** Phase and group delay of the whole path, drawn when the reader asks for them; only for a path whose stages all have a phase. */
 import { pathDelay, pathPhaseRad, pulsePhaseRad } from '../analysis';
 import type { Item, LevelUnit, Plot, Points } from '../protocol/picture';
 import { formatDb, formatFrequency, formatTime } from '../units/format';
 import { item } from './items';
 import { wholePathAxis } from './path-magnitude';
 import { sampleCurve } from './sample-curve';
+import { filterPlace } from './subject';
 import type { Subject } from './subject';
 import { sentences } from './words';
 
@@ -12,7 +13,7 @@ import { sentences } from './words';
 export function phasePlot(subject: Subject): Plot {
   const { channel, path } = subject;
   const pulse = (f: number): number => pulsePhaseRad(channel.pulse, channel.rate.hz, f);
-  const degrees = (f: number): number => ((pathPhaseRad(path, f) + pulse(f)) * 180) / Math.PI;
+  const degrees = (f: number): number => (((pathPhaseRad(path, f) ?? NaN) + pulse(f)) * 180) / Math.PI;
   const words = `Phase, ${formatDb(degrees(channel.referenceHz), 'degrees')} at ${formatFrequency(channel.referenceHz)}`;
   return timingPlot(subject, { id: 'phase', title: 'Phase', unit: 'deg', curve: degrees, words });
 }
@@ -20,14 +21,15 @@ export function phasePlot(subject: Subject): Plot {
 /** Group delay in the unit that keeps it readable. */
 export function delayPlot(subject: Subject): Plot {
   const { channel, figures, path } = subject;
-  const { unit, seconds } = timeUnit(pathDelay(path, channel.referenceHz));
+  const delay = (f: number): number => pathDelay(path, f) ?? NaN;
+  const { unit, seconds } = timeUnit(delay(channel.referenceHz));
   const spread = figures.delaySpread === null ? '' : `, varying by ${formatTime(figures.delaySpread)} over the wanted band`;
-  const words = `Group delay, ${formatTime(pathDelay(path, channel.referenceHz))} at ${formatFrequency(channel.referenceHz)}${spread}`;
+  const words = `Group delay, ${formatTime(delay(channel.referenceHz))} at ${formatFrequency(channel.referenceHz)}${spread}`;
   return timingPlot(subject, {
     id: 'group-delay',
     title: 'Group delay',
     unit,
-    curve: (f) => pathDelay(path, f) / seconds,
+    curve: (f) => delay(f) / seconds,
     words,
   });
 }
@@ -61,7 +63,7 @@ function timingPlot(subject: Subject, { id, title, unit, curve, words }: Timing)
     words,
     shown: 'on demand',
     panes: [{ id, x, y: { title: unit, unit, low: least - room, high: most + room } }],
-    series: [{ id, name: title.toLowerCase(), role: 'total', place: subject.placeOf(['filter']) }],
+    series: [{ id, name: title.toLowerCase(), role: 'total', place: filterPlace(subject) }],
     items: [curveItem(subject, { id, title, words }, points), ...edgeItems(subject, id)],
     table: {
       caption: `${channel.name}: ${title.toLowerCase()}`,
@@ -82,7 +84,7 @@ function curveItem(subject: Subject, { id, title, words }: Pick<Timing, 'id' | '
     role: 'total',
     name: title.toLowerCase(),
     words: sentences(words),
-    place: subject.placeOf(['filter']),
+    place: filterPlace(subject),
     shapes: [{ kind: 'curve', points, stroke: 'solid', weight: 'bold' }],
   });
 }

@@ -2,90 +2,87 @@
 import {
   channelPath,
   gainDb,
-  halfPowerHz,
-  lossDb,
-  noiseBandwidthHz,
+  halfPowerPoints,
+  inSeries,
+  noiseWidth,
   pathDelay,
   type ChannelPath,
   type Figures,
+  type NoiseWidth,
   type StagePath,
 } from '../../analysis';
+import type { Path } from '../../spec';
 import { formatDb, formatFrequency, formatTime } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
+import { foldRows, headlineWords } from './loss-rows';
+import { formRows } from './stage-form';
 import { indexIn, type Subject } from './subject';
-import { lossWords } from './words';
 
 /** The stage at the subject's path, or the whole filter where the path names none. */
 export function stageHover({ channel, figures, path }: Subject): Answer | null {
   const whole = channelPath(channel);
-  if (whole.stages.length === 0) return null;
-  const stage = path.length > 1 || whole.stages.length === 1 ? whole.stages[indexIn(path)] : undefined;
-  return stage === undefined ? filterAnswer(whole, figures) : stageAnswer(stage, whole, figures);
+  const own = ownStages(whole, path[0]);
+  if (own.length === 0) return null;
+  const stage = path.length > 1 || own.length === 1 ? own[indexIn(path)] : undefined;
+  return stage === undefined ? filterAnswer(own, whole, figures, path) : stageAnswer(stage, whole, figures, path);
 }
 
-type PathResponse = ChannelPath['analogue'];
+/** The stages that stand under one key; a relay channel has two. */
+function ownStages({ stages, channel }: ChannelPath, head: Path[number] | undefined): readonly StagePath[] {
+  const before = channel.inputStages.length;
+  if (head === 'input-filter') return stages.slice(0, before);
+  return head === 'output-filter' ? stages.slice(before) : stages;
+}
 
-function filterAnswer(whole: ChannelPath, figures: Figures): Answer {
+function filterAnswer(own: readonly StagePath[], whole: ChannelPath, figures: Figures, path: Path): Answer {
+  const response = inSeries(own.map((stage) => stage.response));
   return {
-    headline: `${whole.stages.length} stages: ${headlineWords(whole.analogue, figures)}`,
-    rows: [...responseRows(whole.analogue, figures), ['group delay', formatTime(stagesDelay(whole, figures.reference))]],
-    formula: 'Poles and gain in series, nominal values',
+    headline: `${own.length} stages: ${headlineWords(response, figures, path)}`,
+    rows: commonRows(own, whole, figures, path),
+    formula: 'Poles, zeros and gain in series, nominal values',
   };
 }
 
-function stageAnswer({ stage, filter, response }: StagePath, whole: ChannelPath, figures: Figures): Answer {
+function stageAnswer(stage: StagePath, whole: ChannelPath, figures: Figures, path: Path): Answer {
   return {
-    headline: `\`${stage.label}\`: ${headlineWords(response, figures)}`,
-    rows: [
-      ...responseRows(response, figures),
-      ['group delay', formatTime(stagesDelay({ ...whole, stages: [{ stage, filter, response }] }, figures.reference))],
-      ...filter.poles.filter((pole) => pole.im >= 0).map(sectionRow),
-    ],
-    formula: 'Poles and gain, nominal values; half power is 3.01 dB below the passband’s maximum',
+    headline: `\`${stage.stage.label}\`: ${headlineWords(stage.response, figures, path)}`,
+    rows: [...commonRows([stage], whole, figures, path), ...formRows(stage)],
+    formula:
+      stage.stage.form.kind === 'measured'
+        ? 'Straight in dB and unwrapped phase between the rows of the table'
+        : 'Poles, zeros and gain, nominal values; half power is 3.01 dB below the passband’s maximum',
   };
 }
 
-function headlineWords(response: PathResponse, figures: Figures): string {
-  const loss = lossDb(response, figures.halfRate, figures.reference);
-  return `${shortLoss(loss)} loss at half the rate, ${formatFrequency(figures.halfRate)}`;
-}
-
-/** The delay of the stages without that of the pulse. */
-function stagesDelay(path: ChannelPath, frequencyHz: number): number {
-  return pathDelay({ ...path, channel: { ...path.channel, pulse: { shape: 'instant' } } }, frequencyHz);
-}
-
-/** A loss of at least a decibel needs no more than tenths. */
-function shortLoss(loss: number): string {
-  return Math.abs(loss) < 1 ? lossWords(loss) : formatDb(loss);
-}
-
-function responseRows(response: PathResponse, figures: Figures): Row[] {
-  const first = firstFoldHz(figures);
+function commonRows(own: readonly StagePath[], whole: ChannelPath, figures: Figures, path: Path): Row[] {
+  const response = inSeries(own.map((stage) => stage.response));
   return knownRows(
-    ['half power at', formatHz(halfPowerHz(response))],
-    ['noise bandwidth', formatHz(noiseBandwidthHz(response))],
+    ['half power at', halfPowerWords(halfPowerPoints(response))],
+    ['noise bandwidth', widthWords(noiseWidth(own))],
     [`gain at ${formatFrequency(figures.reference)}`, formatDb(gainDb(response, figures.reference), 'dB', 2)],
-    [
-      figures.direction === 'capture' ? 'loss at the first fold' : 'loss at the first image',
-      first === null ? null : `${shortLoss(lossDb(response, first, figures.reference))} at ${formatFrequency(first)}`,
-    ],
+    ...foldRows(response, figures, path),
+    ['group delay', delayWords(own, whole, figures.reference)],
   );
 }
 
-function formatHz(hz: number | null): string | null {
-  return hz === null ? null : formatFrequency(hz);
+function halfPowerWords(points: readonly number[]): string {
+  return points.length === 0 ? 'no frequency' : points.map((hz) => formatFrequency(hz)).join(' and ');
 }
 
-/** The lowest frequency above half the rate that lands on, or leaves as a copy of, the top of the wanted band in zone 1. */
-function firstFoldHz({ rate, wanted }: Figures): number | null {
-  const edges = wanted.filter(({ zone }) => zone === 1).map(({ high }) => rate - high);
-  return edges.length === 0 ? null : Math.min(...edges);
+function widthWords(width: NoiseWidth): string | null {
+  switch (width.kind) {
+    case 'finite':
+      return formatFrequency(width.hz);
+    case 'endless':
+      return 'endless: the gain does not fall to nothing';
+    case 'unknown':
+      return null;
+  }
 }
 
-function sectionRow(pole: { readonly re: number; readonly im: number }, index: number): Row {
-  const frequencyHz = Math.hypot(pole.re, pole.im);
-  const label = `section ${index + 1}`;
-  if (pole.im === 0) return [label, `${formatFrequency(frequencyHz)}, one real pole`];
-  return [label, `f₀ ${formatFrequency(frequencyHz)}, Q ${(frequencyHz / (-2 * pole.re)).toPrecision(4)}`];
+/** The delay of these stages alone, at the reference; null where a table has no phase. */
+function delayWords(own: readonly StagePath[], whole: ChannelPath, referenceHz: number): string | null {
+  const alone = { ...whole.channel, pulse: { shape: 'instant' }, gate: null } as const;
+  const seconds = pathDelay({ ...whole, channel: alone, stages: own }, referenceHz);
+  return seconds === null ? null : formatTime(seconds);
 }

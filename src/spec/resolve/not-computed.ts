@@ -1,5 +1,5 @@
 /** Refuses, at its key, what the text may say and the analysis does not compute yet, so that nothing is passed over in silence. */
-import type { Channel, Source, Stage } from '../channel';
+import type { Channel, Stage } from '../channel';
 import type { Path } from '../place';
 import { Report } from './report';
 import type { Resolution } from './resolution';
@@ -24,41 +24,20 @@ export function withoutNotComputed(resolution: Resolution): Resolution {
 function notComputed(channel: Channel): readonly NotComputed[] {
   return [
     ...(channel.direction === 'relay' ? [{ path: ['direction'], what: '`direction: relay`' }] : []),
-    ...pulseOf(channel),
     ...channel.stages.flatMap((stage, index) => {
       const what = stageWhat(stage);
       return what === null ? [] : [{ path: stagePath(channel, index), what }];
-    }),
-    ...channel.unwanted.flatMap((source, index) => {
-      const what = sourceWhat(source);
-      return what === null ? [] : [{ path: ['unwanted', index], what }];
     }),
     ...limitsOf(channel),
   ];
 }
 
-function pulseOf({ direction, pulse }: Channel): readonly NotComputed[] {
-  if (direction === 'relay' || pulse.shape === 'instant' || pulse.shape === 'rectangle') return [];
-  return [{ path: [direction === 'capture' ? 'aperture' : 'hold'], what: `a pulse of shape \`${pulse.shape}\`` }];
-}
-
-/** Families whose low-pass has no zeros: above its corner the gain only falls. */
-const computedFamilies: readonly string[] = ['butterworth', 'chebyshev', 'bessel', 'legendre', 'gaussian'];
-
-function stageWhat({ form, gain, qTolerance }: Stage): string | null {
+/** Parts of an `rlc` and Qs that may be off vary by themselves. */
+function stageWhat({ form, parts, qTolerance }: Stage): string | null {
   if (qTolerance.low !== 0 || qTolerance.high !== 0) return 'a tolerance of `q`';
-  if (form.kind === 'rc' || form.kind === 'bandwidth') return null;
-  if (form.kind === 'roots') return 'a stage by its `poles`';
-  if (form.kind !== 'family') return `a stage by \`${form.kind}\``;
-  if (form.filterKind !== 'lowpass') return `\`kind: ${form.filterKind}\``;
-  if (!computedFamilies.includes(form.family)) return `\`family: ${form.family}\``;
-  return gain === 1 ? null : 'the `gain` of a stage';
-}
-
-function sourceWhat(source: Source): string | null {
-  if (source.kind === 'spectrum') return 'a `spectrum`';
-  if (source.enters !== 'input') return '`enters`';
-  return source.kind === 'anything' || source.harmonics === null ? null : '`harmonics`';
+  if (form.kind === 'measured') return 'a stage by `measured`';
+  const loose = form.kind === 'rlc' && parts.some(({ tolerance }) => tolerance.low !== 0 || tolerance.high !== 0);
+  return loose ? 'a tolerance of a part of `rlc`' : null;
 }
 
 /** The limits of one value that are judged. */
@@ -70,6 +49,5 @@ function limitsOf({ limits, levelLimit, masks }: Channel): readonly NotComputed[
     ...(levelLimit === null ? [] : ['level']),
     ...masks.map(({ key }) => key),
   ];
-  const sums = limits.flatMap(({ key, sum }) => (sum ? [{ path: ['limits', key, 'sum'], what: '`sum`' }] : []));
-  return [...keys.map((key) => ({ path: ['limits', key], what: `the limit \`${key}\`` })), ...sums];
+  return keys.map((key) => ({ path: ['limits', key], what: `the limit \`${key}\`` }));
 }

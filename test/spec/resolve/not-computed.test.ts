@@ -15,10 +15,8 @@ const messages = (rest: string) => read(spec(rest)).problems.map(({ message }) =
 describe('what is not computed yet', () => {
   for (const [rest, word] of [
     ['    limits: { delay: 1 ms }\n', '`delay`'],
-    ['    filter: { family: butterworth, order: 2, corner: 2 kHz, kind: highpass }\n', '`kind: highpass`'],
-    ['    filter: { second-order: { frequency: 2 kHz, q: 1 } }\n', '`second-order`'],
-    ['    aperture: { shape: triangle, width: 50 % }\n', '`triangle`'],
-    ['    unwanted: { tone: 9 kHz, level: -20 dBFS, enters: sampler }\n', '`enters`'],
+    ['    filter: { second-order: { frequency: 2 kHz, q: 1 }, tolerance: { q: 5 % } }\n', '`q`'],
+    ['    filter: { rlc: { r: 50 Ω, l: 1 mH ± 5 %, c: 10 nF } }\n', '`rlc`'],
   ] as const) {
     it(`is refused, not passed over: ${word}`, () => {
       const found = messages(rest);
@@ -29,5 +27,10 @@ describe('what is not computed yet', () => {
 
   it('leaves whole what is computed', () => {
     assert.deepEqual(messages('    filter: { family: bessel, order: 4, corner: 2 kHz }\n'), []);
+    assert.deepEqual(
+      messages('    filter: { family: elliptic, order: 4, corner: 2 kHz, ripple: 1 dB, attenuation: 40 dB, gain: 6 dB }\n'),
+      [],
+    );
+    assert.deepEqual(messages('    filter: { poles: [-1200 Hz], zeros: [-5 kHz], gain: 2 V/V }\n'), []);
   });
 });
