@@ -1,22 +1,24 @@
 /** The strongest landing of each unwanted source in a protected range, nominally and at the worst of all tolerances. */
-import type { Enclosure } from '../signal/response';
-import type { Extreme } from '../signal/search';
 import type { Channel, Limit, Source } from '../spec/channel';
-import { captureView, gainWithCornersDb, sourceWithin } from './capture-view';
+import { arrivalsOf, mayMove, nominalArrivals, standsStill } from './arrivals';
+import { captureView, captureViews, gainWithCornersDb } from './capture-view';
 import type { CaptureView, View } from './capture-view';
 import { sumOfLevels, toDb } from './decibels';
 import type { AliasFigure, WorstAt } from './figures';
 import { landingPoint } from './landing-point';
 import type { LandingPoint } from './landing-point';
-import { strongestLanding } from './strongest-landing';
+import { sourceLandings } from './source-landings';
+import type { Landed, SourceLandings } from './source-landings';
 import { deviation, joinWorst, rateLabel, toneLabel, varies } from './tolerances';
 
 /** The aliases of a channel. */
 export interface Aliases {
   readonly figures: readonly AliasFigure[];
   readonly strongest: AliasFigure | null;
-  /** All of them as powers, dBFS. */
+  /** All of them as powers, dBFS; of harmonics and lines all that land. */
   readonly sumDb: number | null;
+  /** The same sum as the limit counts it, against the wanted tone for one in dBc, and its largest gap. */
+  readonly judgedSum: { readonly valueDb: number; readonly nominalDb: number; readonly gapDb: number } | null;
   /** Nominal value against the wanted tone of the strongest nominal landing, for limits in dBc. */
   readonly nominalRelativeDb: number | null;
   readonly nominalLevelDb: number | null;
@@ -27,147 +29,198 @@ export interface Aliases {
 export function aliasesOf(channel: Channel, limit: Limit | null): Aliases {
   if (channel.direction !== 'capture' || channel.unwanted.length === 0) return noAliases;
   const byRatio = limit?.unit === 'dBc' || channel.levelsAt === 'sampler';
-  const view = captureView(channel, byRatio ? channel.referenceHz : null);
-  const found = channel.unwanted.map((source, index) => aliasOf(view, source, index, limit));
-  const figures = found.map((one) => one.figure);
-  const measure = (figure: AliasFigure): number => (limit?.unit === 'dBc' ? figure.relative : figure.level) ?? -Infinity;
-  const landing = figures.filter((figure) => figure.level !== null);
-  return {
-    figures,
-    strongest: landing.reduce<AliasFigure | null>(
-      (best, one) => (best === null || measure(one) > measure(best) ? one : best),
-      null,
-    ),
-    sumDb: sumOfLevels(landing.map((figure) => figure.level ?? -Infinity)),
-    nominalLevelDb: largest(figures.map((figure) => figure.nominal)),
-    nominalRelativeDb: largest(found.map((one) => one.nominalRelativeDb)),
-    evaluations: found.reduce((sum, one) => sum + one.evaluations, 0),
-  };
+  const viewAt = captureViews(channel, byRatio ? channel.referenceHz : null);
+  const found = channel.unwanted.map((source, index) => aliasOf(viewAt(source.enters), source, index, limit));
+  return aliasesFrom(found, limit);
 }
 
-/** The strongest landing of one source against a tone's own gain, in dB with both levels counted out; null where none lands. */
-export function landingAgainstTone(channel: Channel, source: Source, toneHz: number, at: 'nominal' | 'worst'): Extreme | null {
-  const view = captureView(channel, toneHz);
+/** The landings of one source, added as powers, against a tone's own gain with the tone's level counted out; null where none lands. */
+export function landingsAgainstTone(
+  channel: Channel,
+  source: Source,
+  toneHz: number,
+  at: 'nominal' | 'worst',
+): Pick<SourceLandings, 'sumDb' | 'evaluations'> {
+  const view = captureView(channel, toneHz, source.enters);
   return at === 'nominal'
-    ? search(view.nominal, channel, source).extreme
-    : search(worstFor(view, source), channel, source).extreme;
+    ? sourceLandings(view.nominal, channel, nominalArrivals(source))
+    : sourceLandings(worstFor(view, source), channel, arrivalsOf(source));
 }
 
-const noAliases: Aliases = {
+/** Those of a channel without unwanted sources. */
+export const noAliases: Aliases = {
   figures: [],
   strongest: null,
   sumDb: null,
+  judgedSum: null,
   nominalRelativeDb: null,
   nominalLevelDb: null,
   evaluations: 0,
 };
 
-interface Found {
-  readonly figure: AliasFigure;
-  readonly nominalRelativeDb: number | null;
-  readonly evaluations: number;
-}
-
-/** A search's outcome in levels. */
-interface Levels {
+/** Levels at the sampler and against the wanted tone; as powers where several are added. */
+export interface Levels {
   readonly levelDb: number;
   readonly relativeDb: number;
 }
 
+/** What is known of one source. */
+export interface Found {
+  readonly figure: AliasFigure;
+  readonly nominal: Levels | null;
+  /** All that lands of it, as powers. */
+  readonly sum: Levels | null;
+  readonly nominalSum: Levels | null;
+  readonly gapDb: number;
+  readonly evaluations: number;
+}
+
+/** The aliases of a channel from what is known of each source. */
+export function aliasesFrom(found: readonly Found[], limit: Limit | null): Aliases {
+  const figures = found.map((one) => one.figure);
+  const relative = limit?.unit === 'dBc';
+  const measure = (figure: AliasFigure): number => (relative ? figure.relative : figure.level) ?? -Infinity;
+  const sumOf = (of: (one: Found) => Levels | null, by: keyof Levels): number | null => {
+    const levelsDb = found.flatMap((one) => of(one)?.[by] ?? []);
+    return sumOfLevels(levelsDb);
+  };
+  const counted = relative ? 'relativeDb' : 'levelDb';
+  const valueDb = sumOf((one) => one.sum, counted);
+  const nominalDb = sumOf((one) => one.nominalSum, counted) ?? -Infinity;
+  const gapDb = Math.max(0, ...found.map((one) => one.gapDb));
+  return {
+    figures,
+    strongest: figures
+      .filter((figure) => figure.level !== null)
+      .reduce<AliasFigure | null>((best, one) => (best === null || measure(one) > measure(best) ? one : best), null),
+    sumDb: sumOf((one) => one.sum, 'levelDb'),
+    judgedSum: valueDb === null ? null : { valueDb, nominalDb: Math.min(nominalDb, valueDb), gapDb },
+    nominalLevelDb: largest(figures.map((figure) => figure.nominal)),
+    nominalRelativeDb: largest(found.map((one) => one.nominal?.relativeDb ?? null)),
+    evaluations: found.reduce((sum, one) => sum + one.evaluations, 0),
+  };
+}
+
 function aliasOf(view: CaptureView, source: Source, index: number, limit: Limit | null): Found {
   const { channel } = view;
-  const view1 = worstFor(view, source);
-  const worst = search(view1, channel, source);
-  if (worst.extreme === null) {
-    return { figure: noLanding(source, index, limit), nominalRelativeDb: null, evaluations: 0 };
+  const at = worstFor(view, source);
+  const worst = sourceLandings(at, channel, arrivalsOf(source));
+  const { strongest } = worst;
+  if (strongest === null) {
+    const figure = noLanding(source, index, limit);
+    return { figure, nominal: null, sum: null, nominalSum: null, gapDb: 0, evaluations: worst.evaluations };
   }
-  const nominalSource = fixedSource(source);
-  const same = view1 === view.nominal && nominalSource === source;
-  const nominal = same ? worst.extreme : search(view.nominal, channel, nominalSource).extreme;
-  const levels = levelsOf(view, view1, source, worst.extreme);
-  const nominalLevels = nominal === null ? null : levelsOf(view, view.nominal, source, nominal);
-  const point = landingPoint(channel, view1, worst.extreme.frequencyHz, worst.within);
-  const counted = limit?.unit === 'dBc' ? levels.relativeDb : levels.levelDb;
+  const same = at === view.nominal && !mayMove(source);
+  const plain = same ? worst : sourceLandings(view.nominal, channel, nominalArrivals(source));
+  const levels = levelsOf(view, at, strongest);
+  const sum = raised(levels, worst);
+  const nominal = plain.strongest === null ? null : notAbove(levelsOf(view, view.nominal, plain.strongest), levels);
   return {
-    figure: {
-      source: source.name,
-      index,
-      frequency: point.frequencyHz,
-      lands: point.landing?.landsHz ?? null,
-      fold: point.landing?.fold ?? null,
-      inverted: point.landing?.inverted ?? null,
-      level: levels.levelDb,
-      nominal: nominalLevels === null ? null : Math.min(nominalLevels.levelDb, levels.levelDb),
-      relative: levels.relativeDb,
-      limit: limit?.at ?? null,
-      margin: limit === null ? null : limit.at - counted,
-      gap: worst.extreme.gapDb,
-      worstAt: joinWorst(view1.worst.worstAt(worst.extreme.frequencyHz), ownDeviations(channel, source, point)),
-    },
-    nominalRelativeDb: nominalLevels === null ? null : Math.min(nominalLevels.relativeDb, levels.relativeDb),
-    evaluations: worst.extreme.evaluations + (same ? 0 : (nominal?.evaluations ?? 0)),
+    figure: figureOf(
+      view,
+      { source, index, at, levels, sumDb: sum.levelDb, strongest, nominalDb: nominal?.levelDb ?? null },
+      limit,
+    ),
+    nominal,
+    sum,
+    nominalSum: nominal === null ? null : raised(nominal, plain),
+    gapDb: worst.gapDb,
+    evaluations: worst.evaluations + (same ? 0 : plain.evaluations),
   };
 }
 
 /** A tone that stands still is exact in hertz; what may stand anywhere in a band is not moved by reckoning in periods. */
 function worstFor(view: CaptureView, source: Source): View {
-  const fixedTone = source.kind === 'tone' && !varies(source.tolerance);
-  return fixedTone ? view.worst : view.worstOfBands;
+  return standsStill(source) ? view.worst : view.worstOfBands;
 }
 
-function search(
-  view: View,
-  channel: Channel,
-  source: Source,
-): { readonly extreme: Extreme | null; readonly within: readonly Enclosure[] } {
-  const within = sourceWithin(view, channel, source);
+/** What a source's figure is made of. */
+interface Reached {
+  readonly source: Source;
+  readonly index: number;
+  readonly at: View;
+  readonly levels: Levels;
+  readonly sumDb: number;
+  readonly strongest: Landed;
+  readonly nominalDb: number | null;
+}
+
+function figureOf({ channel }: CaptureView, reached: Reached, limit: Limit | null): AliasFigure {
+  const { source, index, at, levels, sumDb, strongest, nominalDb } = reached;
+  const { extreme, within, arrival } = strongest;
+  const point = landingPoint(channel, at, extreme.frequencyHz, within);
+  // Under a limit for the sum no single source has a margin.
+  const own = limit === null || limit.sum ? null : limit.at;
   return {
-    within,
-    extreme: strongestLanding({ set: view.set, rateHz: view.rateHz, within, response: view.worst.response, split: view.split }),
+    source: source.name,
+    index,
+    harmonic: arrival.harmonic,
+    frequency: point.frequencyHz,
+    lands: point.landing?.landsHz ?? null,
+    fold: point.landing?.fold ?? null,
+    inverted: point.landing?.inverted ?? null,
+    level: levels.levelDb,
+    nominal: nominalDb,
+    sum: sumDb,
+    relative: levels.relativeDb,
+    limit: own,
+    margin: own === null ? null : own - (limit?.unit === 'dBc' ? levels.relativeDb : levels.levelDb),
+    gap: extreme.gapDb,
+    worstAt: joinWorst(at.worst.worstAt(extreme.frequencyHz), ownDeviations(channel, source, arrival.harmonic, point)),
   };
 }
 
-function fixedSource(source: Source): Source {
-  return source.kind === 'tone' && varies(source.tolerance) ? { ...source, tolerance: { low: 0, high: 0 } } : source;
-}
-
 /** Behind the sampler in dBFS and against the weakest wanted tone, with the same parts for both. */
-function levelsOf(view: CaptureView, at: View, source: Source, extreme: Extreme): Levels {
-  const { channel, path } = view;
+function levelsOf({ channel, path, referenceHz }: CaptureView, at: View, { levelDb: reachedDb, extreme }: Landed): Levels {
   const wantedDb = Math.min(...channel.wanted.map((band) => band.levelDb));
-  const gainDb = toDb(extreme.logGain);
-  const referenceDb =
-    channel.levelsAt === 'sampler' ? 0 : gainWithCornersDb(path, channel.referenceHz, at.worst.cornersAt(extreme.frequencyHz));
-  if (view.referenceHz !== null) {
-    const relativeDb = source.levelDb + gainDb - wantedDb;
+  const corners = at.worst.cornersAt(extreme.frequencyHz);
+  const referenceDb = channel.levelsAt === 'sampler' ? 0 : gainWithCornersDb(path, channel.referenceHz, corners) + at.frontDb;
+  if (referenceHz !== null) {
+    const relativeDb = reachedDb - wantedDb;
     return { relativeDb, levelDb: relativeDb + wantedDb + referenceDb };
   }
-  const levelDb = source.levelDb + gainDb;
-  return { levelDb, relativeDb: levelDb - wantedDb - referenceDb - toDb(at.worst.gainLog) };
+  return { levelDb: reachedDb, relativeDb: reachedDb - wantedDb - referenceDb - toDb(at.worst.gainLog) };
 }
 
-function ownDeviations(channel: Channel, source: Source, point: LandingPoint): WorstAt | null {
+/** A nominal value is one of those that the worst was taken from, so it lies above it by rounding only. */
+export function notAbove(nominal: Levels, worst: Levels): Levels {
+  return {
+    levelDb: Math.min(nominal.levelDb, worst.levelDb),
+    relativeDb: Math.min(nominal.relativeDb, worst.relativeDb),
+  };
+}
+
+/** The levels of all that lands of a source, from those of the strongest. */
+function raised({ levelDb, relativeDb }: Levels, { sumDb, strongest }: SourceLandings): Levels {
+  const byDb = sumDb === null || strongest === null || sumDb === strongest.levelDb ? 0 : sumDb - strongest.levelDb;
+  return { levelDb: levelDb + byDb, relativeDb: relativeDb + byDb };
+}
+
+function ownDeviations(channel: Channel, source: Source, harmonic: number, point: LandingPoint): WorstAt | null {
   const { rate } = channel;
   const moved: Record<string, number> = {};
   if (varies(rate.tolerance)) moved[rateLabel(rate)] = deviation(point.rateHz / rate.hz, rate.tolerance);
   if (source.kind === 'tone' && varies(source.tolerance)) {
-    moved[toneLabel(source)] = deviation(point.frequencyHz / source.frequencyHz, source.tolerance);
+    moved[toneLabel(source)] = deviation(point.frequencyHz / (harmonic * source.frequencyHz), source.tolerance);
   }
   return moved;
 }
 
-function noLanding(source: Source, index: number, limit: Limit | null): AliasFigure {
+/** The figure of a source that lands nowhere. */
+export function noLanding(source: Source, index: number, limit: Limit | null): AliasFigure {
   return {
     source: source.name,
     index,
+    harmonic: 1,
     frequency: null,
     lands: null,
     fold: null,
     inverted: null,
     level: null,
     nominal: null,
+    sum: null,
     relative: null,
-    limit: limit?.at ?? null,
+    limit: limit === null || limit.sum ? null : limit.at,
     margin: null,
     gap: null,
     worstAt: null,

@@ -18,9 +18,11 @@ export function powerDb(power: number): number {
   return 10 * Math.log10(power);
 }
 
-/** Levels added as powers; null where there are none. */
+/** Levels added as powers; null where there are none. Measured from the strongest, so that no power is too small to hold. */
 export function sumOfLevels(levelsDb: readonly number[]): number | null {
-  return levelsDb.length === 0 ? null : powerDb(levelsDb.reduce((sum, level) => sum + powerOf(level), 0));
+  if (levelsDb.length === 0) return null;
+  const most = levelsDb.reduce((top, level) => Math.max(top, level), -Infinity);
+  return Number.isFinite(most) ? most + powerDb(levelsDb.reduce((sum, level) => sum + powerOf(level - most), 0)) : most;
 }
 
 /** Parts that exist, added as powers; null where none exists. */

@@ -53,6 +53,8 @@ export interface AliasFigure {
   readonly source: string;
   /** Index into the channel's `unwanted`. */
   readonly index: number;
+  /** Which harmonic lands so: 1 for the source itself, and where nothing lands. */
+  readonly harmonic: number;
   readonly frequency: number | null;
   readonly lands: number | null;
   readonly fold: number | null;
@@ -60,6 +62,8 @@ export interface AliasFigure {
   /** dBFS, worst case; null where none lands. */
   readonly level: number | null;
   readonly nominal: number | null;
+  /** All its harmonics and lines that land, as powers, each at its own worst; dBFS, null where none lands. */
+  readonly sum: number | null;
   /** dB against the wanted tone at `reference` as it comes out. */
   readonly relative: number | null;
   readonly limit: number | null;
@@ -129,6 +133,8 @@ export interface SamplingFault {
 export interface Overlap {
   /** Index into `unwanted`. */
   readonly index: number;
+  /** 1 for the source itself. */
+  readonly harmonic: number;
   readonly lowHz: number;
   readonly highHz: number;
 }

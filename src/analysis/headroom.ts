@@ -1,12 +1,15 @@
 /** How much of full scale is left when every peak falls together: at the sampler in capture, in the words to be converted in generate. */
-import { largestOverBands } from '../signal/search';
-import type { Channel, Source } from '../spec/channel';
-import type { Enclosure } from '../signal/response';
+import type { Enclosure, Response } from '../signal/response';
+import { product } from '../signal/response-algebra';
+import type { Channel } from '../spec/channel';
+import { arrivalsOf, mayMove, nominalArrivals } from './arrivals';
 import { bandAxis, onAxis } from './axis';
+import { captureViews, envelopeOn } from './capture-view';
 import { decibelsPerNeper, toDb } from './decibels';
 import type { ChannelPath } from './channel-path';
 import type { WorstAt } from './figures';
-import { sourceRange } from './source-range';
+import { largestIn } from './largest-in';
+import { levelReference } from './test-tone';
 import { partsVary } from './tolerances';
 import { nominalPath, worstPath } from './worst-path';
 import type { WorstPath } from './worst-path';
@@ -26,11 +29,11 @@ export function headroomOf(channel: Channel, path: ChannelPath): Headroom | null
     const valueDb = headroomDb(channel.wanted.map((band) => band.levelDb));
     return { valueDb, nominalDb: valueDb, worstAt: null, evaluations: 0 };
   }
-  const referenceHz = channel.levelsAt === 'sampler' ? channel.referenceHz : null;
-  const nominal = peaks(channel, nominalPath(path, referenceHz));
+  const referenceHz = levelReference(channel);
+  const nominal = peaks(channel, nominalPath(path, referenceHz), 'nominal');
   const nominalDb = headroomDb(nominal.levelsDb);
-  if (!partsVary(channel) && !tonesVary(channel)) return { ...nominal, valueDb: nominalDb, nominalDb };
-  const worst = peaks(channel, worstPath(path, { sense: 'largest', referenceHz, axis: bandAxis(channel) }), 'anywhere');
+  if (!partsVary(channel) && !channel.unwanted.some(mayMove)) return { ...nominal, valueDb: nominalDb, nominalDb };
+  const worst = peaks(channel, worstPath(path, { sense: 'largest', referenceHz, axis: bandAxis(channel) }), 'worst');
   const valueDb = Math.min(headroomDb(worst.levelsDb), nominalDb);
   return { valueDb, nominalDb, worstAt: worst.worstAt, evaluations: nominal.evaluations + worst.evaluations };
 }
@@ -42,37 +45,53 @@ interface Peaks {
   readonly evaluations: number;
 }
 
-/** The largest level at the sampler of each wanted band and each source; `anything` is left out. */
-function peaks(channel: Channel, path: WorstPath, tones: 'nominal' | 'anywhere' = 'nominal'): Peaks {
-  const arrivals = [
-    ...channel.wanted.map((band) => ({ levelDb: band.levelDb, range: { low: band.lowHz, high: band.highHz } })),
-    ...channel.unwanted.flatMap((source) => arrivalOf(source, tones)),
-  ];
-  const axis = tones === 'nominal' ? 'hertz' : bandAxis(channel);
+/** Something that arrives with what it passes. */
+interface Arriving {
+  readonly levelDb: number;
+  /** On the axis of the path. */
+  readonly range: Enclosure;
+  readonly path: WorstPath;
+  readonly envelope: Response | null;
+}
+
+/** The largest level at the sampler of each wanted band and of each tone of a source; `anything` is left out. */
+function peaks(channel: Channel, path: WorstPath, at: 'nominal' | 'worst'): Peaks {
+  const axis = at === 'nominal' ? 'hertz' : bandAxis(channel);
+  const wanted = channel.wanted.map((band): Arriving => {
+    const range = onAxis(channel, axis, { low: band.lowHz, high: band.highHz });
+    return { levelDb: band.levelDb, range, path, envelope: null };
+  });
   let evaluations = 0;
-  let strongest = { levelDb: -Infinity, frequencyHz: 0 };
-  const levelsDb = arrivals.map(({ levelDb, range }) => {
-    const extreme = largestOverBands(path.response, [onAxis(channel, axis, range)]);
-    evaluations += extreme?.evaluations ?? 0;
-    const arrives = levelDb + toDb(extreme?.logGain ?? -Infinity);
-    if (arrives > strongest.levelDb) strongest = { levelDb: arrives, frequencyHz: extreme?.frequencyHz ?? 0 };
+  let strongest: { readonly levelDb: number; readonly worstAt: () => WorstAt | null } = {
+    levelDb: -Infinity,
+    worstAt: () => null,
+  };
+  const levelsDb = [...wanted, ...sourcesArriving(channel, at)].map(({ levelDb, range, path: passed, envelope }) => {
+    const response = envelope === null ? passed.response : product([passed.response, envelope]);
+    const extreme = largestIn(response, range);
+    evaluations += extreme.evaluations;
+    const arrives = levelDb + toDb(extreme.logGain);
+    if (arrives > strongest.levelDb) strongest = { levelDb: arrives, worstAt: () => passed.worstAt(extreme.frequencyHz) };
     return arrives;
   });
-  return { levelsDb, worstAt: path.worstAt(strongest.frequencyHz), evaluations };
+  return { levelsDb, worstAt: strongest.worstAt(), evaluations };
 }
 
-function arrivalOf(
-  source: Source,
-  tones: 'nominal' | 'anywhere',
-): readonly { readonly levelDb: number; readonly range: Enclosure }[] {
-  if (source.kind === 'anything') return [];
-  const still = source.kind === 'tone' && tones === 'nominal';
-  const range = still ? { low: source.frequencyHz, high: source.frequencyHz } : sourceRange(source);
-  return [{ levelDb: source.levelDb, range }];
-}
-
-function tonesVary(channel: Channel): boolean {
-  return channel.unwanted.some((source) => source.kind === 'tone' && (source.tolerance.low !== 0 || source.tolerance.high !== 0));
+/** Every tone of every source: harmonics and lines each for themselves, a band and an envelope once at their worst frequency. */
+function sourcesArriving(channel: Channel, at: 'nominal' | 'worst'): readonly Arriving[] {
+  const viewAt = captureViews(channel, levelReference(channel));
+  return channel.unwanted.flatMap((source) => {
+    if (source.kind === 'anything') return [];
+    const { nominal, worstOfBands } = viewAt(source.enters);
+    const view = at === 'nominal' ? nominal : worstOfBands;
+    const arrivals = at === 'nominal' ? nominalArrivals(source) : arrivalsOf(source);
+    return arrivals.map((arrival) => ({
+      levelDb: arrival.levelDb,
+      range: onAxis(channel, view.axis, arrival.range),
+      path: view.worst,
+      envelope: envelopeOn(view, channel, arrival),
+    }));
+  });
 }
 
 /** Amplitudes add, since all peaks may fall together. */

@@ -89,6 +89,12 @@ function aliasMeasured(channel: Channel, limit: Limit, aliases: Aliases): Measur
     source: strongest.source,
     ...(strongest.lands === null ? {} : { lands: strongest.lands }),
   };
+  const { judgedSum } = aliases;
+  if (limit.sum && judgedSum !== null) {
+    // The place is the strongest contributor's, and so is what deviates there; every other stands at its own worst.
+    const { valueDb, nominalDb, gapDb } = judgedSum;
+    return { value: valueDb, nominal: nominalDb, gap: gapDb, where, worstAt: strongest.worstAt };
+  }
   return {
     value: (relative ? strongest.relative : strongest.level) ?? -Infinity,
     nominal: (relative ? aliases.nominalRelativeDb : aliases.nominalLevelDb) ?? -Infinity,

@@ -1,33 +1,34 @@
 /** Noise of a capture channel in the wanted band: quantisation and jitter spread evenly over half the rate, and what unwanted sources add. */
 import { frequencyWeight } from '../signal/frequency-weight';
 import { jitterNoiseDb, quantisationSnrDb } from '../signal/noise';
-import type { Enclosure, Response } from '../signal/response';
 import { product } from '../signal/response-algebra';
-import { largestOverBands } from '../signal/search';
 import type { Channel, Source } from '../spec/channel';
-import { landingAgainstTone } from './alias';
+import { landingsAgainstTone } from './alias';
+import { arrivalsOf, nominalArrivals } from './arrivals';
+import type { Arrival } from './arrivals';
+import { onAxis } from './axis';
+import { captureViews, envelopeOn } from './capture-view';
+import type { View } from './capture-view';
 import type { ChannelPath } from './channel-path';
 import { powerDb, powerOf, sumOfLevels, toDb } from './decibels';
 import { widthOf } from './intervals';
+import { jitteredRange } from './jittered-range';
+import { largestIn } from './largest-in';
 import type { DirectionNoise, NoiseParts } from './noise-parts';
-import { pulseSeconds } from './pulse';
-import { sourceRange } from './source-range';
-import { stageCornerHz } from './stage-filter';
 import { jitterSeconds, levelReference, noiseBands, testToneLevelDb } from './test-tone';
 import { partsVary, rateRange } from './tolerances';
-import { bandAxis, nominalPath, onAxis, worstPath } from './worst-path';
+import { worstPath } from './worst-path';
 
 /** The noise of a capture channel. */
 export function captureNoise(channel: Channel, path: ChannelPath, withUnwanted: boolean): DirectionNoise {
   const toneDb = testToneLevelDb(channel, path);
   const nominal = partsAt(channel, channel.rate.hz, toneDb);
-  const plain = nominalPath(path, levelReference(channel)).response;
-  const disturbed = unwantedJitter(channel, path, plain, 'nominal');
+  const disturbed = unwantedJitter(channel, levelReference(channel), 'nominal');
   const shareDb = bandShareDb(channel, channel.rate.hz);
   const jitterUnwanted = disturbed.levelDb === null ? null : disturbed.levelDb + shareDb;
   const worst = worstTone(channel, path, toneDb);
   const slowest = rateRange(channel.rate).low;
-  const extras = withUnwanted ? unwantedShares(channel, path) : none;
+  const extras = withUnwanted ? unwantedShares(channel) : none;
   return {
     nominal,
     jitterUnwanted,
@@ -74,69 +75,69 @@ function sharesAt(channel: Channel, rateHz: number, toneDb: number): readonly nu
 }
 
 /**
- * Jitter on the unwanted sources before it is spread, dBFS. Nominally only tones count, at their own frequency; at worst a tone moves
- * within its tolerance, and the tone that a band stands for is where f·|H(f)| is largest. `anything` stands nowhere in particular.
+ * Jitter on the unwanted sources before it is spread, dBFS, with their levels measured from a frequency or as they are. Nominally only
+ * tones count, at their own frequency; at worst a tone moves within its tolerance, and the tone that a band or an envelope stands for is
+ * where f·|H(f)| is largest. Every harmonic and every line counts. `anything` stands nowhere in particular.
  */
 function unwantedJitter(
   channel: Channel,
-  path: ChannelPath,
-  response: Response,
+  referenceHz: number | null,
   at: 'nominal' | 'worst',
 ): { readonly levelDb: number | null; readonly evaluations: number } {
   const sigma = jitterSeconds(channel);
   if (sigma === 0) return { levelDb: null, evaluations: 0 };
-  const rising = product([frequencyWeight(), response]);
-  const found = channel.unwanted.flatMap((source) =>
-    jitteredRanges(source, path, at).map((range) => {
-      if (range.high === Infinity) return { levelDb: Infinity, evaluations: 0 };
-      const extreme = largestOverBands(rising, [range]);
-      // jitterNoiseDb(1 Hz) is the factor 2πσ that multiplies each frequency.
-      const levelDb = source.levelDb + toDb(extreme?.logGain ?? -Infinity) + jitterNoiseDb(1, sigma);
-      return { levelDb, evaluations: extreme?.evaluations ?? 0 };
-    }),
-  );
+  const viewAt = captureViews(channel, referenceHz);
+  const found = channel.unwanted.flatMap((source) => {
+    const { path, nominal, worstOfBands } = viewAt(source.enters);
+    const view = at === 'nominal' ? nominal : worstOfBands;
+    return jittered(source, at).map((arrival) => jitterOf(channel, path, view, arrival));
+  });
   return {
-    levelDb: sumOfLevels(found.map((one) => one.levelDb)),
+    // jitterNoiseDb(1 Hz) is the factor 2πσ that multiplies each frequency.
+    levelDb: addedTo(jitterNoiseDb(1, sigma), sumOfLevels(found.map((one) => one.levelDb))),
     evaluations: found.reduce((sum, one) => sum + one.evaluations, 0),
   };
 }
 
-function jitteredRanges(source: Source, path: ChannelPath, at: 'nominal' | 'worst'): readonly Enclosure[] {
+const addedTo = (byDb: number, levelDb: number | null): number | null => (levelDb === null ? null : levelDb + byDb);
+
+/** The tones of a source that jitter acts on. */
+function jittered(source: Source, at: 'nominal' | 'worst'): readonly Arrival[] {
   if (source.kind === 'anything') return [];
-  if (at === 'worst') return [onAxis(path.channel, bandAxis(path.channel), jitteredRange(source, path))];
-  return source.kind === 'tone' ? [{ low: source.frequencyHz, high: source.frequencyHz }] : [];
+  return at === 'worst' ? arrivalsOf(source) : nominalArrivals(source).filter(({ stillHz }) => stillHz !== null);
 }
 
-/**
- * The part of a source's range in which f·|H(f)| is largest. Above every corner |H| falls; there f·|sinc(f·w)| comes back to the
- * same height in every lobe, so one whole lobe is enough, and without an aperture f·|H| has come within 1e−12 of its limit.
- */
-function jitteredRange(source: Source, path: ChannelPath): Enclosure {
-  const range = sourceRange(source);
-  const width = pulseSeconds(path.channel.pulse, path.rateHz);
-  const top = Math.max(range.low, ...path.stages.map((stage) => stageCornerHz(stage.stage.form)));
-  if (width > 0) return { low: range.low, high: Math.min(range.high, top + 2 / width) };
-  return path.stages.length === 0 ? range : { low: range.low, high: Math.min(range.high, 1e6 * top) };
+/** A tone's level at the sampler times its frequency in Hz, where that is largest. */
+function jitterOf(
+  channel: Channel,
+  path: ChannelPath,
+  view: View,
+  arrival: Arrival,
+): { readonly levelDb: number; readonly evaluations: number } {
+  const { low, high } = arrival.range;
+  const range = low === high ? arrival.range : jitteredRange(arrival.range, path);
+  if (range.high === Infinity) return { levelDb: Infinity, evaluations: 0 };
+  const envelope = envelopeOn(view, channel, arrival);
+  const rising = product([frequencyWeight(), view.worst.response, ...(envelope === null ? [] : [envelope])]);
+  const extreme = largestIn(rising, onAxis(channel, view.axis, range));
+  return { levelDb: arrival.levelDb + toDb(extreme.logGain), evaluations: extreme.evaluations };
 }
 
 /** Landings and jitter of the unwanted sources over the test tone's own power, each at its own worst. */
-function unwantedShares(
-  channel: Channel,
-  path: ChannelPath,
-): { readonly nominal: readonly number[]; readonly worst: readonly number[]; readonly evaluations: number } {
+function unwantedShares(channel: Channel): {
+  readonly nominal: readonly number[];
+  readonly worst: readonly number[];
+  readonly evaluations: number;
+} {
   const { frequencyHz, levelDb } = channel.testTone;
   let evaluations = 0;
   const sharesOf = (at: 'nominal' | 'worst'): readonly number[] => {
     const landings = channel.unwanted.flatMap((source) => {
-      const extreme = landingAgainstTone(channel, source, frequencyHz, at);
-      evaluations += extreme?.evaluations ?? 0;
-      return extreme === null ? [] : [powerOf(source.levelDb + toDb(extreme.logGain) - levelDb)];
+      const landings = landingsAgainstTone(channel, source, frequencyHz, at);
+      evaluations += landings.evaluations;
+      return landings.sumDb === null ? [] : [powerOf(landings.sumDb - levelDb)];
     });
-    const relative =
-      at === 'nominal'
-        ? nominalPath(path, frequencyHz)
-        : worstPath(path, { sense: 'largest', referenceHz: frequencyHz, axis: bandAxis(channel) });
-    const jitter = unwantedJitter(channel, path, relative.response, at);
+    const jitter = unwantedJitter(channel, frequencyHz, at);
     evaluations += jitter.evaluations;
     const rateHz = at === 'nominal' ? channel.rate.hz : rateRange(channel.rate).low;
     return jitter.levelDb === null ? landings : [...landings, powerOf(jitter.levelDb - levelDb + bandShareDb(channel, rateHz))];

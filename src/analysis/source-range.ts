@@ -1,11 +1,12 @@
 /** Where a source may stand: its whole range, the part outside the wanted bands that can alias, and the part inside that overlaps. */
 import type { Enclosure } from '../signal/response';
 import type { Channel, Source, WantedBand } from '../spec/channel';
+import { arrivalsOf } from './arrivals';
 import type { Overlap } from './figures';
 import { intersection, without } from './intervals';
 import { toneRange } from './tolerances';
 
-/** Every frequency at which a source may stand; `anything` stands everywhere. */
+/** Every frequency at which a source may stand, without its harmonics; `anything` stands everywhere. */
 export function sourceRange(source: Source): Enclosure {
   switch (source.kind) {
     case 'tone':
@@ -29,17 +30,20 @@ export function outsideWanted(channel: Channel, source: Source): readonly Enclos
   return without([sourceRange(source)], wantedRanges(channel));
 }
 
-/** The sources that reach into a wanted band, each once with its widest stretch there. */
+/** The sources that reach into a wanted band, themselves or by a harmonic, each once with its widest stretch there. */
 export function overlapsOf(channel: Channel): readonly Overlap[] {
   return channel.unwanted.flatMap((source, index) => {
     if (source.kind === 'anything') return [];
-    const range = sourceRange(source);
-    const inside = channel.wanted.flatMap((band) => insideOf(range, rangeOf(band)));
-    const widest = inside.reduce<Enclosure | null>(
-      (best, one) => (best === null || one.high - one.low > best.high - best.low ? one : best),
-      null,
-    );
-    return widest === null ? [] : [{ index, lowHz: widest.low, highHz: widest.high }];
+    let widest: Overlap | null = null;
+    for (const { harmonic, range } of arrivalsOf(source)) {
+      for (const band of channel.wanted) {
+        for (const { low, high } of insideOf(range, rangeOf(band))) {
+          const wider: boolean = widest === null || high - low > widest.highHz - widest.lowHz;
+          if (wider) widest = { index, harmonic, lowHz: low, highHz: high };
+        }
+      }
+    }
+    return widest === null ? [] : [widest];
   });
 }
 

@@ -16,7 +16,12 @@ export function brokenLimit(figures: Figures, key: JudgedKey): LimitFigure | nul
 
 /** Where a limit's quantity stands, in short form and in long form. */
 export function limitPlace(channel: Channel, key: JudgedKey): Place {
-  return { channel: channel.name, path: ['limits', key, 'at'] };
+  return { channel: channel.name, path: ['limits', key, countsSum(channel, key) ? 'sum' : 'at'] };
+}
+
+/** Whether a limit holds the sum of what breaks it rather than the strongest. */
+export function countsSum(channel: Channel, key: JudgedKey): boolean {
+  return channel.limits.some((limit) => limit.key === key && limit.sum);
 }
 
 /** Whether the limit would hold at nominal values. */

@@ -1,12 +1,12 @@
 /** `overlaps-wanted`: part of an unwanted source lies inside a wanted band. */
 import { findingIn } from './build';
-import { sourcePath } from './alias-over-limit';
+import { sourcePath, sourceWords } from './alias-over-limit';
 import { bandWords } from './frequency-words';
 import type { FindingKind, Help } from './kind';
 
 const help: Help = {
   summary: 'Part of an unwanted source lies inside a wanted band.',
-  means: `A tone or a band of \`unwanted\` stands, or may stand, at frequencies that the channel wants. That part does not get there by
+  means: `A source of \`unwanted\`, a harmonic of it or a row of its table stands, or may stand, at frequencies that the channel wants. That part does not get there by
 sampling, so it is no alias and counts in no alias limit. Touching an edge is not overlapping.`,
   matters: `No filter and no rate can take it out: it is in the band before anything is done to it. A channel that "passes" says nothing
 about it.`,
@@ -36,7 +36,7 @@ export const overlapsWanted: FindingKind = {
   help,
   remedies: [],
   check: ({ channel, figures }) =>
-    figures.overlaps.map(({ index, lowHz, highHz }) => {
+    figures.overlaps.map(({ index, harmonic, lowHz, highHz }) => {
       const source = channel.unwanted[index];
       const name = source?.name ?? 'a source';
       const where =
@@ -44,7 +44,7 @@ export const overlapsWanted: FindingKind = {
       return findingIn(channel, {
         code: 'overlaps-wanted',
         severity: 'warning',
-        message: `\`${name}\` lies inside the wanted band ${where}. That part is no alias, no filter can remove it, and no limit judges it.`,
+        message: `${sourceWords({ source: name, harmonic })} lies inside the wanted band ${where}. That part is no alias, no filter can remove it, and no limit judges it.`,
         path: sourcePath(channel, index),
         ref: source?.ref ?? null,
         related: [{ path: ['wanted'], message: 'the wanted band' }],

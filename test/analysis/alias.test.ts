@@ -53,7 +53,7 @@ describe('aliases', () => {
   it('leave out the part of a source inside the wanted band, which is reported once', () => {
     const figures = analyse(guarded({ unwanted: [band(8e3, 30e3, -20)] }));
     assert.equal(figures.alias, null);
-    assert.deepEqual(figures.overlaps, [{ index: 0, lowHz: 8e3, highHz: 10e3 }]);
+    assert.deepEqual(figures.overlaps, [{ index: 0, harmonic: 1, lowHz: 8e3, highHz: 10e3 }]);
   });
 
   it('do not come from a source that only touches the wanted band, and that is no overlap', () => {

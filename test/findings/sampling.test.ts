@@ -110,7 +110,7 @@ describe('rate-unavailable', () => {
 describe('overlaps-wanted', () => {
   it('names the stretch and stands on the source', () => {
     const channel = bearing({ unwanted: [band(9e3, 3e6, -55, 'drive hash')] });
-    const [finding] = found('overlaps-wanted', channel, figures({ overlaps: [{ index: 0, lowHz: 9e3, highHz: 10e3 }] }));
+    const [finding] = found('overlaps-wanted', channel, figures({ overlaps: [{ index: 0, harmonic: 1, lowHz: 9e3, highHz: 10e3 }] }));
     assert.match(finding?.message ?? '', /^`drive hash` lies inside the wanted band over 9 kHz \.\. 10 kHz\./);
     assert.deepEqual(finding?.at, { place: { channel: 'bearing-x', path: ['unwanted', 0, 'band'] } });
     assert.deepEqual(found('overlaps-wanted', channel, figures()), []);

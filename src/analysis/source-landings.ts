@@ -1,0 +1,89 @@
+/** Everything of one source that lands in a protected range: the strongest of its tones, and all that land added as powers. */
+import { product } from '../signal/response-algebra';
+import type { Enclosure } from '../signal/response';
+import type { Extreme } from '../signal/search';
+import type { Channel } from '../spec/channel';
+import type { Arrival } from './arrivals';
+import { onAxis } from './axis';
+import { arrivesWithin, envelopeOn } from './capture-view';
+import type { View } from './capture-view';
+import { sumOfLevels, toDb } from './decibels';
+import { strongestLanding } from './strongest-landing';
+
+/** One tone of a source where it lands strongest. */
+export interface Landed {
+  readonly arrival: Arrival;
+  /** Its gain, the source's envelope included. */
+  readonly extreme: Extreme;
+  /** Where it was looked for. */
+  readonly within: readonly Enclosure[];
+  /** The level of the arrival with that gain, dB. */
+  readonly levelDb: number;
+}
+
+/** What of a source lands. */
+export interface SourceLandings {
+  /** Null where nothing lands. */
+  readonly strongest: Landed | null;
+  /** All harmonics and lines that land added as powers, each at its own worst; of a band and of an envelope the one strongest tone. */
+  readonly sumDb: number | null;
+  /** The largest gap of those, dB. */
+  readonly gapDb: number;
+  readonly evaluations: number;
+}
+
+/** A tone is left out of the sum where all that are left together would add less than this to it, in dB of power. */
+const negligibleDb = 100;
+
+/** The landings of a source's tones in a view. */
+export function sourceLandings(view: View, channel: Channel, arrivals: readonly Arrival[]): SourceLandings {
+  let strongest: Landed | null = null;
+  const levelsDb: number[] = [];
+  let gapDb = 0;
+  let evaluations = 0;
+  const reachDb = negligibleDb + 10 * Math.log10(Math.max(1, arrivals.length));
+  for (const { arrival, mostDb } of strongestFirst(view, channel, arrivals)) {
+    // All that follow lie lower still.
+    if (strongest !== null && mostDb < strongest.levelDb - reachDb) break;
+    const landed = landedOf(view, channel, arrival);
+    if (landed === null) continue;
+    levelsDb.push(landed.levelDb);
+    gapDb = Math.max(gapDb, landed.extreme.gapDb);
+    evaluations += landed.extreme.evaluations;
+    if (strongest === null || landed.levelDb > strongest.levelDb) strongest = landed;
+  }
+  return { strongest, sumDb: sumOfLevels(levelsDb), gapDb, evaluations };
+}
+
+/** With what no tone of it can pass, so that the weakest of a thousand harmonics need not be searched. */
+interface Ranked {
+  readonly arrival: Arrival;
+  readonly mostDb: number;
+}
+
+function strongestFirst(view: View, channel: Channel, arrivals: readonly Arrival[]): readonly Ranked[] {
+  const [only] = arrivals;
+  if (arrivals.length === 1 && only !== undefined) return [{ arrival: only, mostDb: Infinity }];
+  const { response } = view.worst;
+  const ranked = arrivals.map((arrival): Ranked => {
+    const { low, high } = onAxis(channel, view.axis, arrival.range);
+    const most = low === high ? response.logGain(low) : response.bounds(low, high).high;
+    return { arrival, mostDb: arrival.levelDb + toDb(most) };
+  });
+  return ranked.sort((a, b) => b.mostDb - a.mostDb);
+}
+
+function landedOf(view: View, channel: Channel, arrival: Arrival): Landed | null {
+  const within = arrivesWithin(view, channel, arrival);
+  const envelope = envelopeOn(view, channel, arrival);
+  const { set, rateHz, split } = view;
+  const whole = view.worst.response;
+  const extreme = strongestLanding({
+    set,
+    rateHz,
+    within,
+    response: envelope === null ? whole : product([whole, envelope]),
+    split: split === null || envelope === null ? split : { ...split, outer: product([split.outer, envelope]) },
+  });
+  return extreme === null ? null : { arrival, extreme, within, levelDb: arrival.levelDb + toDb(extreme.logGain) };
+}
