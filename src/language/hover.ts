@@ -5,15 +5,19 @@ import type { ClientAbilities } from './client-abilities';
 import { writeHover, type Answer } from './hovers/answer';
 import { channelHover } from './hovers/channel';
 import { bitsHover, jitterHover } from './hovers/converter';
+import { gateHover } from './hovers/gate';
 import { keyProse } from './hovers/key-prose';
 import { levelHover } from './hovers/level';
 import { limitHover } from './hovers/limit';
+import { maskHover } from './hovers/mask';
 import { nameHover } from './hovers/name';
 import { pulseHover } from './hovers/pulse';
 import { rateHover } from './hovers/rate';
+import { slotsHover } from './hovers/slots';
 import { sourceHover } from './hovers/source';
 import { stageHover } from './hovers/stage';
 import type { Subject } from './hovers/subject';
+import { pathForUser } from './hovers/user-path';
 import { wantedHover } from './hovers/wanted';
 import type { SpecDocument } from './spec-document';
 import { offsetOf, rangeOf } from './text-range';
@@ -76,8 +80,9 @@ function definition(document: SpecDocument, space: DefinedName['space'], name: s
 function answerForUser(document: SpecDocument, defined: DefinedName, rest: Path): Answer | null {
   const whole = document.judgement.channels.find(({ entry, figures }) => figures !== null && defined.users.includes(entry.name));
   if (whole === undefined) return null;
-  if (defined.space === 'filters') return answerIn(document, whole.entry.name, ['filter', ...rest]);
-  return rest[0] === 'jitter' ? answerIn(document, whole.entry.name, ['jitter']) : null;
+  const channel = whole.entry.channel;
+  const path = channel === null ? null : pathForUser(document.reading, channel, defined, rest);
+  return path === null ? null : answerIn(document, whole.entry.name, path);
 }
 
 function answerIn(document: SpecDocument, name: string, path: Path): Answer | null {
@@ -102,10 +107,16 @@ function answerOf(subject: Subject): Answer | null {
     case 'aperture':
     case 'hold':
       return pulseHover(subject);
+    case 'gate':
+      return gateHover(subject);
     case 'filter':
+    case 'input-filter':
+    case 'output-filter':
       return stageHover(subject);
+    case 'slots':
+      return slotsHover(subject);
     case 'limits':
-      return subject.path.length === 1 ? channelHover(subject) : limitHover(subject);
+      return subject.path.length === 1 ? channelHover(subject) : (maskHover(subject) ?? limitHover(subject));
     case 'bits':
     case 'full-scale':
       return bitsHover(subject);

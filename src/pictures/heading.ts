@@ -3,7 +3,7 @@ import type { LimitFigure } from '../analysis';
 import { limitWords, thinBelow } from '../findings';
 import type { Answer, Heading } from '../protocol/picture';
 import type { Channel, Pulse } from '../spec/channel';
-import { formatCount, formatDb, formatFrequency, formatPercent, formatTime } from '../units/format';
+import { formatAmount, formatCount, formatFrequency, formatPercent, formatTime } from '../units/format';
 import type { Subject } from './subject';
 import { marginWords, sentences } from './words';
 
@@ -38,7 +38,7 @@ function verdictOf(subject: Subject): Answer {
   const tightest = [...judged].sort((a, b) => tightness(channel, a) - tightness(channel, b))[0];
   if (tightest === undefined || tightest.margin === null) return { text: 'no limit judged', standing: 'unjudged' };
   const inHand = Number.isFinite(tightest.margin)
-    ? `passes, ${tightest.limit} ${formatDb(tightest.margin, 'dB', tightest.limit === 'flatness' ? 2 : 1)} in hand`
+    ? `passes, ${tightest.limit} ${amountWords(tightest, tightest.margin, 'dB')} in hand`
     : 'passes';
   return { text: inHand, standing: tightness(channel, tightest) < 1 ? 'thin' : 'passes' };
 }
@@ -64,5 +64,10 @@ function tightness(channel: Channel, figure: LimitFigure): number {
 function limitSentence(figure: LimitFigure): string {
   const name = `${figure.limit} limit of ${limitWords(figure)}`;
   if (!figure.judged || figure.value === null) return `The ${name} is not judged`;
-  return `The ${name}: worst case ${formatDb(figure.value, figure.unit, figure.limit === 'flatness' ? 2 : 1)}, ${marginWords(figure)}`;
+  return `The ${name}: worst case ${amountWords(figure, figure.value, figure.unit)}, ${marginWords(figure)}`;
+}
+
+/** A figure of a limit with the digits that matter to it. */
+function amountWords({ limit, unit }: LimitFigure, value: number, levelUnit: string): string {
+  return formatAmount(value, unit === 's' ? 's' : levelUnit, limit === 'flatness' ? 2 : 1);
 }

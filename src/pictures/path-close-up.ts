@@ -4,12 +4,14 @@ import type { LimitFigure, Response } from '../analysis';
 import { flatnessOf } from '../analysis/flatness';
 import { partsVary } from '../analysis/tolerances';
 import { worstWords } from '../findings/wording';
+import type { MaskLimit } from '../spec/channel';
 import type { FrequencyAxis, Item, LevelAxis, Plot, Points, Shape } from '../protocol/picture';
 import { formatDb, formatFrequency } from '../units/format';
 import { frequencyAxis } from './axes';
 import { flat, item, joinedBothWays, seriesOf } from './items';
+import { boundsWithin, maskItems, masksOf } from './mask-items';
 import { sampleCurve } from './sample-curve';
-import { limitFigure } from './subject';
+import { filterPlace, limitFigure, pulseKey } from './subject';
 import type { Subject } from './subject';
 import { marginWords, sentences, stretchWords } from './words';
 
@@ -29,8 +31,11 @@ export function closeUpPlot(subject: Subject): Plot {
   const x = bandAxis(subject);
   const rough = limit?.at ?? 1;
   const curves = curvesOf(subject, x, rough / 400, -3 * rough - 3);
-  const y = levelAxisOf(curves, limit, subject);
+  const y = maskedAxis(levelAxisOf(curves, limit, subject), subject, x);
   const items = joinedBothWays([
+    ...closeUpMasks(subject).flatMap((mask) =>
+      maskItems(subject, mask, { pane: closeUpPane, x, shiftDb: 0, joins: ['close-up-total'] }),
+    ),
     ...limitItems(subject, limit),
     ...curveItems(subject, curves),
     ...edgeItems(subject),
@@ -40,7 +45,7 @@ export function closeUpPlot(subject: Subject): Plot {
     id: 'close-up',
     title: 'Wanted band, close up',
     words: sentences(
-      `Gain in the wanted band against ${formatFrequency(subject.channel.referenceHz)}, ${subject.channel.direction === 'capture' ? 'aperture' : 'hold'} and filter together`,
+      `Gain in the wanted band against ${formatFrequency(subject.channel.referenceHz)}, ${pulseKey(subject.channel)} and filter together`,
       limit === null ? '' : `The flatness limit of ${formatDb(limit.at, 'dB', 2)} is shaded as forbidden, ${marginWords(limit)}`,
     ),
     shown: 'always',
@@ -92,6 +97,29 @@ function levelAxisOf(curves: Curves, limit: LimitFigure | null, { channel }: Sub
   return { title, unit: 'dB', low: low - room, high: high + room };
 }
 
+/** Those that speak of what is drawn; a `response` mask leaves a pulse out that leans across the band. */
+function closeUpMasks(subject: Subject): readonly MaskLimit[] {
+  const { pulse, gate } = subject.channel;
+  const leans = pulse.shape !== 'instant' || gate?.kind === 'track';
+  return leans ? masksOf(subject, 'through') : masksOf(subject, 'response', 'through');
+}
+
+/** Room for the bounds of masks, as far as a close-up can show them. */
+function maskedAxis(axis: LevelAxis, subject: Subject, x: FrequencyAxis): LevelAxis {
+  const bounds = closeUpMasks(subject)
+    .flatMap((mask) => boundsWithin(mask, x) ?? [])
+    .flatMap(({ low, high }) => [low, high])
+    .filter((bound) => Math.abs(bound) <= farthestBoundDb);
+  return {
+    ...axis,
+    low: Math.min(axis.low, ...bounds.map((bound) => 1.3 * bound)),
+    high: Math.max(axis.high, ...bounds.map((bound) => 1.3 * bound)),
+  };
+}
+
+/** Bounds further from 0 dB than this belong to the stop band. */
+const farthestBoundDb = 6;
+
 function limitItems(subject: Subject, limit: LimitFigure | null): Item[] {
   if (limit === null) return [];
   const text = `flatness limit ± ${formatDb(limit.at, 'dB', 2)}`;
@@ -126,7 +154,7 @@ function limitItems(subject: Subject, limit: LimitFigure | null): Item[] {
 }
 
 function curveItems(subject: Subject, { nominal, largest, smallest }: Curves): Item[] {
-  const place = subject.placeOf(['filter']);
+  const place = filterPlace(subject);
   const common = { pane: closeUpPane, place } as const;
   const total = item({
     ...common,
@@ -188,7 +216,7 @@ function markItems(subject: Subject, limit: LimitFigure | null): Item[] {
       role: over ? 'harm' : 'total',
       name: 'largest departure',
       words: sentences(`Largest departure: ${text}`, limit === null ? '' : marginWords(limit)),
-      place: subject.placeOf(limit === null ? ['filter'] : ['limits', 'flatness']),
+      place: limit === null ? filterPlace(subject) : subject.placeOf(['limits', 'flatness']),
       joins: ['close-up-total', 'close-up-envelope'],
       shapes: [{ kind: 'mark', frequencyHz: flatness.frequencyHz, level, mark: over ? 'over' : 'inside' }],
       label: { text, frequencyHz: flatness.frequencyHz, level, prefer: 'left', priority: 10 },

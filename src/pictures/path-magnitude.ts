@@ -3,10 +3,13 @@ import { gainDb, lossDb, pulseNulls, worstPath } from '../analysis';
 import type { Response } from '../analysis';
 import { partsVary } from '../analysis/tolerances';
 import type { FrequencyAxis, Item, LevelAxis, Plot, Points, Stroke } from '../protocol/picture';
+import { stagePath } from '../spec';
 import { formatFrequency } from '../units/format';
 import { frequencyAxis } from './axes';
 import { item, joinedBothWays, seriesOf } from './items';
+import { axisWith, boundsWithin, farthestOf, maskItems, masksOf } from './mask-items';
 import { sampleCurve } from './sample-curve';
+import { filterPlace, pulseKey } from './subject';
 import type { Subject } from './subject';
 import { levelWords, sentences } from './words';
 
@@ -17,6 +20,8 @@ export const magnitudePane = 'magnitude';
 export function magnitudePlot(subject: Subject): Plot {
   const x = wholePathAxis(subject);
   const y = levelsOf(subject, x);
+  const shifts = shiftsOf(subject);
+  const masks = masksOf(subject, 'response', 'through');
   const draw = (response: Response): Points =>
     sampleCurve((f) => gainDb(response, f), {
       lowHz: x.lowHz,
@@ -26,9 +31,11 @@ export function magnitudePlot(subject: Subject): Plot {
       tolerance: (y.high - y.low) / 3000,
     });
   const items = joinedBothWays([
+    ...masks.flatMap((mask) => maskItems(subject, mask, { pane: magnitudePane, x, shiftDb: shifts[mask.key], joins: ['total'] })),
     ...envelopeItems(subject, draw),
     ...stageItems(subject, draw, x),
     ...pulseItems(subject, draw),
+    ...filtersItem(subject, draw),
     totalItem(subject, draw),
     halfRateItem(subject, y),
   ]);
@@ -51,21 +58,54 @@ export function magnitudePlot(subject: Subject): Plot {
 }
 
 /** The axis of everything that is drawn of the whole path. */
-export function wholePathAxis({ channel }: Subject): FrequencyAxis {
+export function wholePathAxis(subject: Subject): FrequencyAxis {
+  const { channel } = subject;
   const lows = channel.wanted.map((band) => band.lowHz).filter((f) => f > 0);
-  const high = Math.max(10 * channel.rate.hz, ...channel.wanted.map((band) => 4 * band.highHz));
+  const masked = masksOf(subject, 'response', 'through').map((mask) => 1.2 * farthestOf(mask));
+  const high = Math.max(10 * channel.rate.hz, ...channel.wanted.map((band) => 4 * band.highHz), ...masked);
   const axis = frequencyAxis('Hz', Math.min(...lows, high / 1e4), high);
   return { ...axis, lowHz: 0 };
 }
 
-function levelsOf({ path, nominal }: Subject, x: FrequencyAxis): LevelAxis {
+function levelsOf(subject: Subject, x: FrequencyAxis): LevelAxis {
+  const { path, nominal } = subject;
   const shown = [path.total.logGain(0), path.total.logGain(x.logLowHz), nominal.logGain(x.logLowHz)].filter((value) =>
     Number.isFinite(value),
   );
   const top = Math.max(0, ...shown.map((value) => (value * 20) / Math.LN10));
   const end = gainDb(path.analogue, x.highHz);
   const low = Math.max(-140, Math.min(-60, 20 * Math.floor((Number.isFinite(end) ? end : -140) / 20)));
-  return { title: 'dB, the whole path', unit: 'dB', low, high: 10 * Math.ceil((top + 3) / 10) };
+  const plain: LevelAxis = { title: 'dB, the whole path', unit: 'dB', low, high: 10 * Math.ceil((top + 3) / 10) };
+  const shifts = shiftsOf(subject);
+  return masksOf(subject, 'response', 'through').reduce(
+    (axis, mask) => axisWith(axis, [boundsWithin(mask, x)], shifts[mask.key]),
+    plain,
+  );
+}
+
+/** A mask counts from the gain at `reference`, of the filters alone or of the whole; the plot counts from a gain of 1. */
+function shiftsOf({ path, channel }: Subject): Readonly<Record<'response' | 'through' | 'output', number>> {
+  const at = (response: Response): number => finite(gainDb(response, channel.referenceHz)) ?? 0;
+  return { response: at(path.analogue), through: at(path.total), output: 0 };
+}
+
+/** What a `response` mask speaks of, where the pulse sets it apart from the total. */
+function filtersItem(subject: Subject, draw: (response: Response) => Points): Item[] {
+  const { channel, path } = subject;
+  const same = channel.pulse.shape === 'instant' && channel.gate === null;
+  if (same || path.stages.length === 0 || masksOf(subject, 'response').length === 0) return [];
+  return [
+    item({
+      id: 'filters',
+      series: 'filters',
+      pane: magnitudePane,
+      role: 'path',
+      name: 'filters alone',
+      words: sentences(`Gain of all stages without the ${pulseKey(channel)}, which is what the response mask speaks of`),
+      place: filterPlace(subject),
+      shapes: [{ kind: 'curve', points: draw(path.analogue), stroke: 'long-dash', weight: 'bold' }],
+    }),
+  ];
 }
 
 function totalItem(subject: Subject, draw: (response: Response) => Points): Item {
@@ -76,10 +116,8 @@ function totalItem(subject: Subject, draw: (response: Response) => Points): Item
     pane: magnitudePane,
     role: 'total',
     name: 'total',
-    words: sentences(
-      `Gain of the whole path, ${subject.channel.direction === 'capture' ? 'aperture' : 'hold'} included, at nominal values`,
-    ),
-    place: subject.placeOf(['filter']),
+    words: sentences(`Gain of the whole path, ${pulseKey(subject.channel)} included, at nominal values`),
+    place: filterPlace(subject),
     shapes: [{ kind: 'curve', points, stroke: 'solid', weight: 'bold' }],
   });
 }
@@ -100,7 +138,7 @@ function stageItems(subject: Subject, draw: (response: Response) => Points, x: F
       role: 'stage',
       name,
       words: sentences(`Gain of ${name} alone`),
-      place: subject.placeOf(['filter', index]),
+      place: subject.placeOf(stagePath(subject.channel, index)),
       shapes: [{ kind: 'curve', points, stroke: strokes[index % strokes.length] ?? 'dashed', weight: 'thin' }],
       label: { text: name, frequencyHz: points.x[at] ?? 0, level: points.y[at] ?? 0, prefer: 'right', priority: 5 },
     });
@@ -110,7 +148,7 @@ function stageItems(subject: Subject, draw: (response: Response) => Points, x: F
 function pulseItems(subject: Subject, draw: (response: Response) => Points): Item[] {
   const { channel } = subject;
   if (channel.pulse.shape === 'instant') return [];
-  const name = channel.direction === 'capture' ? 'aperture' : 'hold';
+  const name = pulseKey(channel);
   return [
     item({
       id: 'pulse',
@@ -139,7 +177,7 @@ function envelopeItems(subject: Subject, draw: (response: Response) => Points): 
       role: 'envelope',
       name: 'worst of the tolerances',
       words: sentences('Between the largest and the smallest gain that the tolerances allow'),
-      place: subject.placeOf(['filter']),
+      place: filterPlace(subject),
       joins: ['total'],
       shapes: [{ kind: 'area', upper: at('largest'), lower: at('smallest'), tone: 'solid' }],
     }),
@@ -182,12 +220,7 @@ function tableOf(subject: Subject): Plot['table'] {
   const stages = path.stages.map(({ stage }) => ({ title: stage.name ?? stage.label, unit: 'dB' as const }));
   return {
     caption: `${channel.name}: gain of the path at nominal values`,
-    columns: [
-      { title: 'at', unit: 'Hz' },
-      { title: 'total', unit: 'dB' },
-      { title: channel.direction === 'capture' ? 'aperture' : 'hold', unit: 'dB' },
-      ...stages,
-    ],
+    columns: [{ title: 'at', unit: 'Hz' }, { title: 'total', unit: 'dB' }, { title: pulseKey(channel), unit: 'dB' }, ...stages],
     rows: points.map((f) => ({
       item: 'total',
       cells: [

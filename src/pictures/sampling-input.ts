@@ -5,6 +5,7 @@ import type { WantedBand } from '../spec/channel';
 import { flat, item } from './items';
 import { sampleCurve } from './sample-curve';
 import type { SamplingView, SourceView } from './sampling-view';
+import { filterPlace } from './subject';
 import { levelWords, sentences, stretchWords } from './words';
 
 /** The id of the upper pane. */
@@ -123,7 +124,7 @@ function pathItem(view: SamplingView): Item {
     role: 'path',
     name: `filter${aperture}`,
     words: sentences(`Response of the filter${aperture} across the input, at nominal values`),
-    place: subject.placeOf(['filter']),
+    place: filterPlace(subject),
     shapes: [{ kind: 'curve', points, stroke: 'dashed', weight: 'thin' }],
     label: { text: 'path', ...pathLabelPoint(view), prefer: 'right', priority: 4 },
   });

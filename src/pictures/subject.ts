@@ -1,10 +1,10 @@
 /** All that a picture is made from: one whole channel with its figures, its path and its findings. */
 import { channelPath, relativeTo, worstPath } from '../analysis';
-import type { ChannelPath, Figures, LimitFigure, Response } from '../analysis';
+import type { ChannelPath, Figures, JudgedKey, LimitFigure, Response } from '../analysis';
 import type { Finding, Judgement } from '../findings';
 import type { PlaceName } from '../protocol/position';
 import { exists } from '../spec';
-import type { Channel, LimitKey } from '../spec/channel';
+import type { Channel } from '../spec/channel';
 
 /** One channel, ready to be drawn. */
 export interface Subject {
@@ -42,8 +42,20 @@ export function subjectOf(judgement: Judgement, channelName: string): Subject {
 }
 
 /** The figure of a limit, judged or not; null where the channel does not state it. */
-export function limitFigure(subject: Subject, key: LimitKey): LimitFigure | null {
+export function limitFigure(subject: Subject, key: JudgedKey): LimitFigure | null {
   return subject.figures.limits.find((figure) => figure.limit === key) ?? null;
+}
+
+/** What the channel samples or rebuilds with, by its key. */
+export function pulseKey({ direction, gate }: Channel): 'aperture' | 'hold' | 'gate' {
+  if (direction === 'capture') return 'aperture';
+  return gate === null ? 'hold' : 'gate';
+}
+
+/** Where the filter stands: the only one, or of a relay channel's two the one behind the sampler, where both are stated. */
+export function filterPlace({ channel, placeOf }: Subject): PlaceName | null {
+  if (channel.direction !== 'relay') return placeOf(['filter']);
+  return placeOf(['output-filter']) ?? placeOf(['input-filter']);
 }
 
 function nearestPlace({ reading }: Judgement, channel: string, steps: PlaceName['path']): PlaceName | null {

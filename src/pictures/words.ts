@@ -3,7 +3,7 @@ import type { LimitFigure } from '../analysis';
 import { decimalsFor, thinBelow } from '../findings';
 import type { Answer, Standing } from '../protocol/picture';
 import type { Channel } from '../spec/channel';
-import { formatDb, formatFrequency } from '../units/format';
+import { formatAmount, formatDb, formatFrequency } from '../units/format';
 
 /** A level with one digit behind the point. */
 export function levelWords(levelDb: number, unit = 'dBFS'): string {
@@ -21,8 +21,10 @@ export function marginWords(figure: LimitFigure): string {
   const { margin, limit, sense } = figure;
   if (margin === null) return 'not judged';
   if (!Number.isFinite(margin)) return 'nothing comes near it';
-  const amount = formatDb(Math.abs(margin), 'dB', decimalsFor(limit, margin));
-  return margin >= 0 ? `${amount} inside` : `${amount} ${sense === 'at-most' ? 'over' : 'short'}`;
+  const decimals = decimalsFor(limit, margin);
+  const amount = formatAmount(Math.abs(margin), figure.unit === 's' ? 's' : 'dB', decimals);
+  const beyond = { 'at-most': 'over', 'at-least': 'short', inside: 'outside' }[sense];
+  return `${amount} ${margin >= 0 ? 'inside' : beyond}`;
 }
 
 /** How a limit stands. */

@@ -25,6 +25,11 @@ export function formatDb(db: number, unit = 'dB', decimals = 1): string {
   return `${plainNumber(db, decimals)} ${unit}`;
 }
 
+/** A level, a ratio or a time in its unit: "−91.2 dBFS", "30.2 µs"; `decimals` are those of a level. */
+export function formatAmount(value: number, unit: string, decimals = 1): string {
+  return unit === 's' ? formatTime(value) : formatDb(value, unit, decimals);
+}
+
 /** A ratio as a percentage, "4 %". */
 export function formatPercent(ratio: number): string {
   return `${plainNumber(ratio * 100, 3)} %`;

@@ -17,7 +17,9 @@ describe('the figures of a gate', () => {
     const found = gateFigures(rectangle(0.12), 8000, 5);
     close(found?.ownDb, db(0.12));
     assert.equal(found?.copiesDb.length, 5);
-    [1, 2, 3, 4, 5].forEach((k) => close(found.copiesDb[k - 1], db(sinc(0.12 * k))));
+    [1, 2, 3, 4, 5].forEach((k) => {
+      close(found.copiesDb[k - 1], db(sinc(0.12 * k)));
+    });
   });
 
   it('take the area of a shaped gate: a half sine has c₀ = 2d/π', () => {

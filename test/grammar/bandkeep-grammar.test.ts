@@ -57,6 +57,35 @@ describe('the TextMate grammar', () => {
     ]);
   });
 
+  it('knows the words for pulses, kinds of sections and what holds beyond a table', () => {
+    for (const word of ['half-sine', 'raised-cosine', 'split', 'trapezoid']) {
+      assert.equal(scopes(`gate: { shape: ${word}, width: 12 % }`, word)[0], 'support.constant.property-value', word);
+    }
+    assert.equal(scopes('kind: notch', 'notch')[0], 'support.constant.property-value');
+    assert.equal(scopes('{ measured: x.csv, below: refuse }', 'refuse')[0], 'support.constant.property-value');
+  });
+
+  it('gives the name of a mask and of a shared source a scope, but not the words that may stand there', () => {
+    assert.equal(scopes('response: video mask', 'video mask')[0], 'variable.other.name');
+    assert.equal(scopes('unwanted: pump hum', 'pump hum')[0], 'variable.other.name');
+    assert.equal(scopes('unwanted: anything', 'anything')[0], 'support.constant.property-value');
+    assert.equal(scopes('{ tone: 50 Hz, enters: sampler }', 'sampler')[0], 'support.constant.property-value');
+  });
+
+  it('takes the path of a table as a whole, digits included', () => {
+    assert.equal(scopes('- { measured: tables/guard-2.s2p, below: hold }', 'tables/guard-2.s2p')[0], 'string.unquoted.path');
+    assert.equal(scopes('spectrum: 50 Hz.csv', '50 Hz.csv')[0], 'string.unquoted.path');
+  });
+
+  it('reads the imaginary part of a pole with its sign and unit', () => {
+    assert.deepEqual(scopes('poles: [-800 ± 600j Hz]', '-800', '±', '600j', 'Hz'), [
+      'constant.numeric',
+      'keyword.operator.tolerance',
+      'constant.numeric',
+      'keyword.other.unit',
+    ]);
+  });
+
   it('does not take a key inside a channel for the name of a channel', () => {
     const text = 'channels:\n   ice pulse:\n      limits:\n         alias: −96 dBFS\n   second:\n      bits: 16';
     assert.deepEqual(scopes(text, 'ice pulse', 'limits', 'alias', 'second', 'bits'), [

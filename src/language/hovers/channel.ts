@@ -1,6 +1,6 @@
 /** Hover of a channel's name: whether it passes, and each limit's margin. */
 import type { LimitFigure } from '../../analysis';
-import { formatDb, formatFrequency } from '../../units/format';
+import { formatAmount, formatFrequency } from '../../units/format';
 import type { Answer, Row } from './answer';
 import type { Subject } from './subject';
 import { decimalsOf, marginWords } from './words';
@@ -18,6 +18,6 @@ export function channelHover({ document, channel, figures }: Subject): Answer {
 
 function limitRow(limit: LimitFigure): Row {
   if (limit.value === null || limit.margin === null) return [limit.limit, 'not judged'];
-  const value = formatDb(limit.value, limit.unit, decimalsOf(limit.limit));
+  const value = formatAmount(limit.value, limit.unit, decimalsOf(limit.limit));
   return [limit.limit, `${value}, ${marginWords({ ...limit, margin: limit.margin })}`];
 }

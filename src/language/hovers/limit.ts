@@ -1,6 +1,6 @@
 /** Hover of a limit: how it stands, and what contributes, strongest first. */
 import type { Figures, LimitFigure, NoiseFigures } from '../../analysis';
-import { formatDb, formatSignedPercent } from '../../units/format';
+import { formatAmount, formatDb, formatSignedPercent } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { levelRows } from './level';
 import type { Subject } from './subject';
@@ -56,7 +56,7 @@ function standingRows(limit: LimitFigure): Row[] {
 }
 
 function level(limit: LimitFigure, value: number): string {
-  return formatDb(value, limit.unit, decimalsOf(limit.limit));
+  return formatAmount(value, limit.unit, decimalsOf(limit.limit));
 }
 
 function contributions(limit: LimitFigure, figures: Figures): Row[] {

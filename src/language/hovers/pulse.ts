@@ -1,7 +1,18 @@
-/** Hover of an aperture or a hold: what its width takes from the band's edges, and where it passes nothing. */
-import { channelPath, gainDb, pulseNulls, pulseSeconds } from '../../analysis';
+/** Hover of an aperture or a hold: what its width takes from the band's edges, where it passes nothing, how much it delays. */
+import {
+  channelPath,
+  gainDb,
+  pulseDelay,
+  pulseSeconds,
+  pulseShape,
+  shapeNulls,
+  type ChannelPath,
+  type Figures,
+} from '../../analysis';
+import type { Pulse } from '../../spec';
 import { formatFrequency, formatPercent, formatTime } from '../../units/format';
-import type { Answer, Row } from './answer';
+import { knownRows, type Answer, type Row } from './answer';
+import { shapeWords } from './shape-words';
 import type { Subject } from './subject';
 import { lossWords } from './words';
 
@@ -10,28 +21,51 @@ const listedNulls = 3;
 
 /** The channel's pulse. */
 export function pulseHover({ channel, figures }: Subject): Answer {
-  const name = channel.direction === 'capture' ? 'aperture' : 'hold';
+  const shape = pulseShape(channel.pulse, figures.rate);
+  if (shape === null) return { headline: 'An instant: it takes nothing from any frequency', rows: [], formula: null };
   const width = pulseSeconds(channel.pulse, figures.rate);
-  if (width === 0) return { headline: 'An instant: it takes nothing from any frequency', rows: [], formula: null };
   const { pulse } = channelPath(channel);
-  const loss = (hz: number): string => lossWords(-gainDb(pulse, hz));
-  const edges = figures.wanted.flatMap(({ low, high }): Row[] => [
-    [`loss at ${formatFrequency(low)}`, loss(low)],
-    [`loss at ${formatFrequency(high)}`, loss(high)],
-  ]);
   const top = Math.max(...figures.wanted.map(({ high }) => high));
+  const nulls = shapeNulls(shape, listedNulls).map((hz) => formatFrequency(hz));
   return {
-    headline: `${formatTime(width)}: ${loss(top)} loss at ${formatFrequency(top)}`,
+    headline: `${shapeWords(channel.pulse)}${formatTime(width)}: ${lossWords(-gainDb(pulse, top))} loss at ${formatFrequency(top)}`,
     rows: [
       ['share of the period', formatPercent(width * figures.rate)],
-      ...edges,
-      [
-        'passes nothing at',
-        pulseNulls(channel.pulse, figures.rate, listedNulls)
-          .map((hz) => formatFrequency(hz))
-          .join(', '),
-      ],
+      ...edgeRows(pulse, figures),
+      ...knownRows(
+        ['passes nothing at', nulls.length === 0 ? 'no frequency: it decays' : nulls.join(', ')],
+        [`delay at ${formatFrequency(figures.reference)}`, formatTime(pulseDelay(shape, figures.reference))],
+      ),
     ],
-    formula: name === 'aperture' ? '|sinc(f·w)| at the input frequency' : '(w/T)·|sinc(f·w)| at the output frequency',
+    formula: formulaOf(channel.pulse, channel.direction),
   };
+}
+
+function edgeRows(pulse: ChannelPath['pulse'], figures: Figures): Row[] {
+  const edges = [...new Set(figures.wanted.flatMap(({ low, high }) => [low, high]))];
+  return edges.map((hz): Row => [`loss at ${formatFrequency(hz)}`, lossWords(-gainDb(pulse, hz))]);
+}
+
+/** |P(f)| of each shape, in the words of the language. */
+const magnitudes: Readonly<Record<Exclude<Pulse['shape'], 'instant'>, string>> = {
+  rectangle: '|sinc(f·w)|',
+  linear: 'sinc²(f·T)',
+  triangle: 'sinc²(f·w/2)',
+  'half-sine': '|cos(π·f·w)/(1 − (2·f·w)²)|',
+  'raised-cosine': '|sinc(f·(w − e))·cos(π·f·e)/(1 − (2·f·e)²)|',
+  trapezoid: '|sinc(f·(w − e))·sinc(f·e)|',
+  exponential: '|1 − e^(−(1/τ + j2πf)·w)|/(|1 + j2πf·τ|·(1 − e^(−w/τ)))',
+  split: 'sin²(π·f·w/2)/(π·f·w/2)',
+};
+
+function formulaOf({ shape }: Pulse, direction: Subject['channel']['direction']): string | null {
+  if (shape === 'instant') return null;
+  if (direction === 'capture') return `${magnitudes[shape]} at the input frequency`;
+  return shape === 'linear'
+    ? `${magnitudes[shape]} at the output frequency`
+    : `${holdArea(shape)}${magnitudes[shape]} at the output frequency`;
+}
+
+function holdArea(shape: Pulse['shape']): string {
+  return shape === 'rectangle' || shape === 'split' ? '(w/T)·' : '(area/T)·';
 }

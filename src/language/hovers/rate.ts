@@ -1,6 +1,7 @@
 /** Hover of a rate: what it makes of the wanted band, how much room it has, and which other allowed rates pass. */
-import type { Figures } from '../../analysis';
-import { formatFrequency } from '../../units/format';
+import { rateWindowsOf, type Figures, type RateTable, type RateWindow } from '../../analysis';
+import { windowWords, zoneWords } from '../../findings';
+import { formatCount, formatFrequency } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { passingRates, type PassingRates } from './passing-rates';
 import type { Subject } from './subject';
@@ -20,6 +21,7 @@ export function rateHover({ channel, figures }: Subject): Answer {
       ),
       ...copyRows(figures),
       ...windowRows(figures),
+      ...otherWindowRows(rateWindowsOf(channel), figures),
       ...passingRows(passingRates(channel)),
     ],
     formula: 'A band stays whole in zone n while 2·high/n ≤ fs ≤ 2·low/(n − 1)',
@@ -51,6 +53,30 @@ function windowRows({ rate, rateWindow }: Figures): Row[] {
     ['room below', room(rate - low)],
     ['room above', open ? null : room(high - rate)],
   );
+}
+
+/** How many windows are listed to each side of the present rate. */
+const listedWindows = 2;
+
+/** The windows next to the present rate, each with its zones, and how many more there are. */
+function otherWindowRows({ windows, leftOff }: RateTable, { rate }: Figures): Row[] {
+  const below = windows.filter(({ high }) => high < rate * (1 - slack)).slice(-listedWindows);
+  const above = windows.filter(({ low }) => low > rate * (1 + slack)).slice(0, listedWindows);
+  const here = windows.filter((window) => holds(window, rate));
+  const more = windows.length - below.length - above.length - here.length + leftOff;
+  return [
+    ...here.slice(0, 1).map(({ zones }): Row => ['this window', zoneWords(zones)]),
+    ...[...below].reverse().map((window): Row => ['window below', windowWords(window)]),
+    ...above.map((window): Row => ['window above', windowWords(window)]),
+    ...(more > 0 ? [['further windows', formatCount(more, 'more', 'more')] as const] : []),
+  ];
+}
+
+/** A rate this close to the end of a window is in it. */
+const slack = 1e-12;
+
+function holds({ low, high }: RateWindow, rate: number): boolean {
+  return low <= rate * (1 + slack) && rate * (1 - slack) <= high;
 }
 
 function passingRows(found: PassingRates | null): Row[] {

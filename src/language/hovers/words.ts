@@ -1,23 +1,27 @@
 /** Phrases that several hovers share. */
-import { formatDb, formatFrequency } from '../../units/format';
+import { formatAmount, formatDb, formatFrequency } from '../../units/format';
 
 /** What a limit's margin depends on for its wording. */
 interface Margin {
   readonly limit: string;
   readonly sense: 'at-most' | 'at-least' | 'inside';
   readonly margin: number;
+  readonly unit?: string;
 }
 
 /** "4.8 dB over the limit", "2 dB short of the limit", "0.8 dB inside the limit". */
-export function marginWords({ limit, sense, margin }: Margin): string {
+export function marginWords({ limit, sense, margin, unit }: Margin): string {
   const beyond = { 'at-most': 'over', 'at-least': 'short of', inside: 'outside' }[sense];
-  return `${formatDb(Math.abs(margin), 'dB', decimalsOf(limit))} ${margin < 0 ? beyond : 'inside'} the limit`;
+  return `${formatAmount(Math.abs(margin), unit === 's' ? 's' : 'dB', decimalsOf(limit))} ${margin < 0 ? beyond : 'inside'} the limit`;
 }
 
 /** Digits behind the point that a limit's figures are printed with. */
 export function decimalsOf(limit: string): number {
-  return limit === 'flatness' ? 2 : 1;
+  return hundredths.has(limit) ? 2 : 1;
 }
+
+/** Limits whose hundredths matter. */
+const hundredths: ReadonlySet<string> = new Set(['flatness', 'level', 'response', 'through']);
 
 /** Below this a loss is none. */
 const negligibleDb = 1e-5;
