@@ -1,4 +1,5 @@
 /** How flat the wanted band comes out: the proved largest departure of the gain from its value at the reference, and the droop at the top edge. */
+import type { Enclosure } from '../signal/response';
 import { inverse } from '../signal/response-algebra';
 import { largestOverBands } from '../signal/search';
 import type { Extreme } from '../signal/search';
@@ -7,6 +8,7 @@ import { lossDb } from './channel-path';
 import type { ChannelPath } from './channel-path';
 import { toDb } from './decibels';
 import type { WorstAt } from './figures';
+import { contains } from './intervals';
 import { wantedRanges } from './source-range';
 import { partsVary } from './tolerances';
 import { nominalPath, worstPath } from './worst-path';
@@ -26,13 +28,13 @@ export interface Flatness {
 export function flatnessOf(channel: Channel, path: ChannelPath): Flatness | null {
   const referenceHz = channel.referenceHz;
   const plain = nominalPath(path, referenceHz);
-  const nominal = departure(channel, plain, plain);
+  const nominal = departure(path, plain, plain);
   if (nominal === null) return null;
   const nominalDb = toDb(nominal.logGain);
   if (!partsVary(channel)) return figureOf(nominal, nominalDb, nominal.evaluations);
   const most = worstPath(path, { sense: 'largest', referenceHz, axis: 'hertz' });
   const least = worstPath(path, { sense: 'smallest', referenceHz, axis: 'hertz' });
-  const worst = departure(channel, most, least) ?? nominal;
+  const worst = departure(path, most, least) ?? nominal;
   return figureOf(worst, nominalDb, nominal.evaluations + worst.evaluations);
 }
 
@@ -48,10 +50,11 @@ interface Departure extends Extreme {
 }
 
 /** The larger of the largest rise and the largest loss. */
-function departure(channel: Channel, most: WorstPath, least: WorstPath): Departure | null {
-  const bands = wantedRanges(channel);
+function departure(path: ChannelPath, most: WorstPath, least: WorstPath): Departure | null {
+  const bands = wantedRanges(path.channel);
   const rise = largestOverBands(most.response, bands);
-  const loss = largestOverBands(inverse(least.response), bands);
+  // A null in the band is the answer, and a search by halving would only come near it.
+  const loss = largestOverBands(inverse(least.response), [...nullsWithin(path, bands), ...bands]);
   if (rise === null || loss === null) return null;
   const worst = loss.logGain >= rise.logGain ? loss : rise;
   return {
@@ -61,6 +64,13 @@ function departure(channel: Channel, most: WorstPath, least: WorstPath): Departu
     evaluations: rise.evaluations + loss.evaluations,
     path: worst === loss ? least : most,
   };
+}
+
+/** The nulls of the stages in bands, each as a band of no width. */
+function nullsWithin(path: ChannelPath, bands: readonly Enclosure[]): readonly Enclosure[] {
+  return path.stages.flatMap(({ filter }) =>
+    (filter?.zeros ?? []).flatMap(({ re, im }) => (re === 0 && contains(bands, im) ? [{ low: im, high: im }] : [])),
+  );
 }
 
 function figureOf(extreme: Departure, nominalDb: number, evaluations: number): Flatness {

@@ -16,6 +16,8 @@ import { Report } from './report';
 import type { Lookup, Resolution, ResolveProblem } from './resolution';
 import { bandBetween, resolveSources } from './sources';
 import { resolvePaths } from './paths';
+import { checkStagesAt } from './reference-null';
+import { checkReference } from './pulse-reference';
 import { resolveReference, resolveTestTone, resolveWanted } from './wanted';
 
 /**
@@ -58,9 +60,12 @@ function partsOf(
   const judged = judgedParts(model, scale, lookup, report);
   const referenceHz = resolveReference(model.reference, wanted ?? [], report);
   const testTone = resolveTestTone(model['test-tone'], wanted ?? [], scale, report);
+  if (sampling !== null && referenceHz !== null) checkReference(referenceHz, sampling.pulse, direction, model, report);
   const { inputStages, outputStages } = paths;
   if (!wanted || !unwanted || !rate || !inputStages || !outputStages || !sampling || slots === null || !judged) return null;
   if (referenceHz === null || testTone === null) return null;
+  const stages = [...inputStages, ...outputStages];
+  if (checkStagesAt(referenceHz, stages, model.reference !== undefined, report) === null) return null;
   return {
     name,
     direction,
@@ -70,7 +75,7 @@ function partsOf(
     unwanted,
     rate,
     rateChoices,
-    stages: [...inputStages, ...outputStages],
+    stages,
     inputStages,
     outputStages,
     ...sampling,
