@@ -17,7 +17,7 @@ export function changesWords(changes: readonly Change[]): string {
   const about = changes.map((change) => change.about);
   const says = changes.map(({ says, about: stage }, index) => {
     const known = stage !== null && about.indexOf(stage) < index;
-    const words = known ? says.replace(`the corner of ${stage}`, 'its corner') : says;
+    const words = known ? says.replace(`the corner of ${stage}`, 'its corner').replace(` ${stage} `, ' it ') : says;
     return index === 0 ? words : words.charAt(0).toLowerCase() + words.slice(1);
   });
   return says.join(' and ');

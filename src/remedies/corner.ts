@@ -1,99 +1,85 @@
-/** The change of a stage's corner: how far each limit lets it go, and the nearest sensible value that satisfies all. */
-import { editValue, spanOf, type Place } from '../spec';
+/** What a fix may turn of a family stage's corners: the corner, or the width of a band and then each of its edges. */
+import { editValue, spanOf, type Edit, type Path } from '../spec';
 import { formatFrequency } from '../units/format';
-import type { Change } from './change';
-import { cornerWalk, type CornerWalk, type Direction } from './corner-walk';
-import { fromGrid, roundedTowards } from './corner-grid';
-import { rewriteFrequency } from './quantity-text';
+import { formatSpecRange } from '../units/format-spec';
+import type { Knob } from './knob';
+import { rewriteQuantity } from './quantity-text';
 import type { Session } from './session';
 import type { FamilyStage } from './stages';
-import { works, worksCleanly, type Trial } from './trial';
 
-/** A limit's demand on the corner: at most this, or at least this. */
-export interface CornerBound {
-  readonly limit: string;
-  readonly hz: number;
-  readonly sense: 'or less' | 'or more';
+/** The knobs of one stage, the plainest first. */
+export function cornerKnobs(session: Session, stage: FamilyStage): readonly Knob[] {
+  const { cornerHz, upperCornerHz } = stage.form;
+  if (upperCornerHz === null) return [cornerKnob(session, stage)];
+  const band: Band = { low: cornerHz, high: upperCornerHz };
+  return [widthKnob(session, stage, band), edgeKnob(session, stage, band, 'low'), edgeKnob(session, stage, band, 'high')];
 }
 
-/** Two limits that no corner satisfies together: the finding's own, and the one in its way. */
-export interface CornerConflict {
-  readonly own: CornerBound;
-  readonly other: CornerBound;
+interface Band {
+  readonly low: number;
+  readonly high: number;
 }
 
-/** What a search over one corner has found. */
-export interface CornerOutcome {
-  readonly trial: Trial | null;
-  readonly conflict: CornerConflict | null;
-}
-
-const nothing: CornerOutcome = { trial: null, conflict: null };
-
-/** Searches for a corner of one stage, on top of changes that are made anyway. */
-export function* cornerSearch(
-  session: Session,
-  stage: FamilyStage,
-  base: readonly Change[] = [],
-): Generator<void, CornerOutcome> {
-  const change = (hz: number): Change | null => cornerChange(session, stage, hz);
-  const walk = yield* cornerWalk(session, stage.form.cornerHz, base, change);
-  if (walk === null) return nothing;
-  const edge = yield* walk.nearest(walk.aim);
-  if (edge === null) return nothing;
-  const atEdge = yield* walk.at(edge);
-  if (atEdge !== null && works(atEdge)) return { trial: yield* sensible(walk, edge), conflict: null };
-  return base.length > 0 ? nothing : { trial: null, conflict: yield* conflictAt(session, walk, edge) };
-}
-
-/** The change to one corner, written as the spec writes the present one. */
-function cornerChange({ reading, channel }: Session, stage: FamilyStage, hz: number): Change | null {
-  const place: Place = { channel: channel.name, path: ['filter', stage.index, 'corner'] };
-  const { start, end } = spanOf(reading, place);
-  const edit = editValue(reading, place, rewriteFrequency(reading.text.slice(start, end), stage.form.cornerHz, hz));
-  const verb = hz > stage.form.cornerHz ? 'Raise' : 'Lower';
-  return edit === null
-    ? null
-    : {
-        kind: 'corner',
-        says: `${verb} the corner of ${stage.words} to ${formatFrequency(hz)}`,
-        about: stage.words,
-        edits: [edit],
-      };
-}
-
-/** From the first corner that works: the nearest that leaves no new warning, or that one; then a round value just beyond it. */
-function* sensible(walk: CornerWalk, edge: number): Generator<void, Trial | null> {
-  const clean = yield* walk.nearest(worksCleanly, edge);
-  const good = clean === null ? works : worksCleanly;
-  const from = clean ?? edge;
-  for (const digits of [2, 3] as const) {
-    const round = roundedTowards(from, walk.direction, digits);
-    if (Math.abs(fromGrid(round) / fromGrid(from) - 1) > farthestRounding) continue;
-    const trial = yield* walk.at(round);
-    if (trial !== null && good(trial)) return trial;
-  }
-  return yield* walk.at(from);
-}
-
-/** A round value further away than this, relatively, changes more than it has to. */
-const farthestRounding = 0.03;
-
-/** Both bounds on the corner, where the finding's limit is satisfied only behind the point at which another breaks. */
-function* conflictAt(session: Session, walk: CornerWalk, edge: number): Generator<void, CornerConflict | null> {
-  const broken = yield* walk.nearest((trial) => trial.newErrors.length > 0);
-  if (broken === null) return null;
-  const breaking = yield* walk.at(broken);
-  const last = broken - walk.direction;
-  const limit = breaking?.newErrors[0]?.limit ?? null;
-  if (limit === null) return null;
-  const own = session.finding.limit ?? 'headroom';
+function cornerKnob(session: Session, stage: FamilyStage): Knob {
+  const present = stage.form.cornerHz;
   return {
-    own: { limit: own, hz: fromGrid(edge), sense: senseOf(walk.direction) },
-    other: { limit, hz: fromGrid(last), sense: senseOf(walk.direction === 1 ? -1 : 1) },
+    kind: 'corner',
+    present,
+    words: formatFrequency,
+    change: (hz) => {
+      const place = { channel: session.channel.name, path: pathOf(stage, 'corner') };
+      const { start, end } = spanOf(session.reading, place);
+      const text = rewriteQuantity(session.reading.text.slice(start, end), present, hz, 'Hz');
+      const edit = editValue(session.reading, place, text);
+      const says = `${hz > present ? 'Raise' : 'Lower'} the corner of ${stage.words} to ${formatFrequency(hz)}`;
+      return edit === null ? null : { kind: 'corner', says, about: stage.words, edits: [edit] };
+    },
   };
 }
 
-function senseOf(direction: Direction): CornerBound['sense'] {
-  return direction < 0 ? 'or less' : 'or more';
+/** The width between the corners, about their geometric middle, where a band filter has its centre. */
+function widthKnob(session: Session, stage: FamilyStage, { low, high }: Band): Knob {
+  const square = low * high;
+  return {
+    kind: 'corner',
+    present: high - low,
+    words: (width) => `a width of ${formatFrequency(width)}`,
+    change: (width) => {
+      const upper = (width + Math.sqrt(width * width + 4 * square)) / 2;
+      const verb = width > high - low ? 'Widen' : 'Narrow';
+      return bandChange(session, stage, { low: square / upper, high: upper }, `${verb} ${stage.words}`);
+    },
+  };
+}
+
+function edgeKnob(session: Session, stage: FamilyStage, band: Band, edge: 'low' | 'high'): Knob {
+  const present = band[edge];
+  return {
+    kind: 'corner',
+    present,
+    words: (hz) => `${edge === 'low' ? 'a lower' : 'an upper'} corner of ${formatFrequency(hz)}`,
+    change: (hz) => {
+      const moved = { ...band, [edge]: hz };
+      if (moved.low >= moved.high) return null;
+      const verb = hz > present ? 'Raise' : 'Lower';
+      return bandChange(session, stage, moved, `${verb} the ${edge === 'low' ? 'lower' : 'upper'} corner of ${stage.words}`);
+    },
+  };
+}
+
+function bandChange(session: Session, stage: FamilyStage, band: Band, verb: string): ReturnType<Knob['change']> {
+  const rounded = roundedBand(band);
+  const text = formatSpecRange({ low: { value: rounded.low, unit: 'Hz' }, high: { value: rounded.high, unit: 'Hz' } });
+  const edit: Edit | null = editValue(session.reading, { channel: session.channel.name, path: pathOf(stage, 'corners') }, text);
+  return edit === null ? null : { kind: 'corner', says: `${verb} to ${text}`, about: stage.words, edits: [edit] };
+}
+
+/** Both corners to a thousandth of the band, and to four figures at least. */
+function roundedBand({ low, high }: Band): Band {
+  const digits = Math.min(12, Math.max(4, Math.ceil(Math.log10(high / (high - low))) + 3));
+  return { low: Number(low.toPrecision(digits)), high: Number(high.toPrecision(digits)) };
+}
+
+function pathOf(stage: FamilyStage, key: string): Path {
+  return [...stage.path, key];
 }

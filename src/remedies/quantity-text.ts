@@ -1,11 +1,12 @@
 /** A new value in the words of the old one: its unit, its spacing and its tolerance stay. */
-import { formatSpecFrequency } from '../units/format-spec';
+import { formatSpecQuantity } from '../units/format-spec';
+import type { Quantity } from '../units/quantity';
 
-/** A frequency written as `oldText` writes `oldHz`, with at most fifteen digits. */
-export function rewriteFrequency(oldText: string, oldHz: number, newHz: number): string {
+/** A quantity written as `oldText` writes `oldValue`, with at most fifteen digits; a text without a number is written afresh in `unit`. */
+export function rewriteQuantity(oldText: string, oldValue: number, newValue: number, unit: Quantity['unit']): string {
   const parts = /^([+]?\d+(?:\.\d+)?(?:[eE][+-]?\d+)?)(.*)$/su.exec(oldText);
-  const scale = oldHz / Number(parts?.[1]);
-  const number = String(Number((newHz / scale).toPrecision(15)));
-  if (parts === null || !Number.isFinite(scale) || number.includes('e')) return formatSpecFrequency(newHz);
+  const scale = oldValue / Number(parts?.[1]);
+  const number = String(Number((newValue / scale).toPrecision(15)));
+  if (parts === null || !Number.isFinite(scale) || number.includes('e')) return formatSpecQuantity({ value: newValue, unit });
   return `${number}${parts[2] ?? ''}`;
 }

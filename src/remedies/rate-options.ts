@@ -1,6 +1,8 @@
 /** The rates that a fix may pick for a channel: those of `rate-choices`, or any with at most three figures. */
+import { keepsWhole, rateWindowsOf } from '../analysis';
 import { sameRate } from '../findings';
 import type { Channel, ClockShare, RateChoices } from '../spec';
+import { roundedMiddle } from './rounded-middle';
 
 /** One rate, and how it is had from a clock where it is. */
 export interface RateOption {
@@ -85,7 +87,10 @@ function steps({ lowHz, highHz, stepHz }: RangeChoice, presentHz: number): reado
   return Array.from({ length: count }, (_, index) => plain(lowHz + (first + index) * step));
 }
 
-/** Every rate of three figures from one that just carries the bands to well above twice the highest frequency. */
+/**
+ * Every rate of three figures from one that just carries the bands to well above twice the highest frequency, and for each window of
+ * rates that is too narrow for three figures its middle.
+ */
 function figures(channel: Channel, range?: RangeChoice): readonly RateOption[] {
   const top = Math.max(...channel.wanted.map((band) => band.highHz + channel.guardHz));
   const width = Math.max(...channel.wanted.map((band) => band.highHz - band.lowHz));
@@ -97,7 +102,8 @@ function figures(channel: Channel, range?: RangeChoice): readonly RateOption[] {
     if (hz > high) break;
     if (hz >= low) found.push(plain(hz));
   }
-  return found;
+  const middles = rateWindowsOf(channel).windows.flatMap((window) => roundedMiddle(window) ?? []);
+  return [...found, ...middles.filter((hz) => low <= hz && hz <= high && !hasThreeFigures(hz)).map(plain)];
 }
 
 /** Numbers of three figures, counted: 900 in each decade. */
@@ -120,7 +126,7 @@ function plain(hz: number): RateOption {
 }
 
 function split(channel: Channel, options: readonly RateOption[], chosen: boolean): RateOptions {
-  const whole = options.filter(({ hz }) => !sameRate(hz, channel.rate.hz) && keepsBandsWhole(channel, hz));
+  const whole = options.filter(({ hz }) => !sameRate(hz, channel.rate.hz) && keepsWhole(channel, hz));
   const sorted = [...whole].sort((a, b) => a.hz - b.hz);
   return {
     above: sorted.filter(({ hz }) => hz > channel.rate.hz),
@@ -128,18 +134,3 @@ function split(channel: Channel, options: readonly RateOption[], chosen: boolean
     chosen,
   };
 }
-
-/** Whether no multiple of half the rate lies inside a wanted band with its guard, at either end of the clock's tolerance. */
-function keepsBandsWhole({ wanted, guardHz, rate }: Channel, hz: number): boolean {
-  const ends = [hz * (1 + rate.tolerance.low), hz * (1 + rate.tolerance.high)];
-  return wanted.every((band) => {
-    const zones = ends.flatMap((end) => [
-      Math.floor(((2 * (band.lowHz - guardHz)) / end) * (1 + slack)),
-      Math.ceil(((2 * (band.highHz + guardHz)) / end) * (1 - slack)) - 1,
-    ]);
-    return zones.every((zone) => Math.max(zone, 0) === Math.max(zones[0] ?? 0, 0));
-  });
-}
-
-/** Touching an edge is not crossing it, whatever the last bit says. */
-const slack = 1e-12;

@@ -1,10 +1,11 @@
 /** The change of a channel's rate: the next allowed one that works, and the lowest. */
-import { sameRate } from '../findings';
-import { editValue, spanOf, type ClockShare, type Edit, type Place } from '../spec';
+import { sameRate, zoneWords } from '../findings';
+import { zoneOf } from '../signal/folding';
+import { editValue, spanOf, type Channel, type ClockShare, type Edit, type Place } from '../spec';
 import { formatFrequency } from '../units/format';
 import type { Change } from './change';
 import { firstThatWorks, type AttemptAt } from './first-that-works';
-import { rewriteFrequency } from './quantity-text';
+import { rewriteQuantity } from './quantity-text';
 import { rateOptions, type RateOption, type RateOptions } from './rate-options';
 import type { Session } from './session';
 import { works, worksCleanly, type Trial } from './trial';
@@ -25,11 +26,22 @@ export function rateChange(session: Session, option: RateOption): Change | null 
   const share = rate.clock === null ? null : shareFor(rate.clock, option);
   if (rate.clock !== null && share === null) return null;
   const edits = share === null ? [plainEdit(session, option.hz)] : shareEdits(session, share);
-  const verb = option.hz > rate.hz ? 'Raise' : 'Lower';
-  const divided = share === null ? '' : ` (÷${share.divide})`;
   const made = edits.filter((edit) => edit !== null);
   if (made.length < edits.length) return null;
-  return { kind: 'rate', says: `${verb} the rate to ${formatFrequency(option.hz)}${divided}`, about: null, edits: made };
+  return { kind: 'rate', says: rateWords(session.channel, option.hz, share), about: null, edits: made };
+}
+
+/** What a change of the rate is called; where a band is, or will be, above half the rate, the zone counts more than the direction. */
+function rateWords(channel: Channel, hz: number, share: Share | null): string {
+  const zones = (rateHz: number): readonly number[] => channel.wanted.map((band) => zoneOf(band.lowHz, rateHz));
+  const after = zones(hz);
+  const divided = share === null ? [] : [`÷${share.divide}`];
+  const isPlain = [...after, ...zones(channel.rate.hz)].every((zone) => zone === 1);
+  const told = [...divided, ...(isPlain ? [] : [zoneWords(after)])].join(', ');
+  const verb = isPlain ? `${hz > channel.rate.hz ? 'Raise' : 'Lower'} the rate to` : 'Sample at';
+  // A written rate is printed whole; a divided one is rounded, since nobody writes it.
+  const frequency = share === null ? formatFrequency(hz, hz * 1e-9) : formatFrequency(hz);
+  return `${verb} ${frequency}${told === '' ? '' : ` (${told})`}`;
 }
 
 type Share = Pick<ClockShare, 'multiply' | 'divide'>;
@@ -45,7 +57,7 @@ function shareFor(clock: ClockShare, option: RateOption): Share | null {
 function plainEdit({ reading, channel }: Session, hz: number): Edit | null {
   const place: Place = { channel: channel.name, path: ['rate'] };
   const { start, end } = spanOf(reading, place);
-  return editValue(reading, place, rewriteFrequency(reading.text.slice(start, end), channel.rate.hz, hz));
+  return editValue(reading, place, rewriteQuantity(reading.text.slice(start, end), channel.rate.hz, hz, 'Hz'));
 }
 
 function shareEdits({ reading, channel }: Session, share: Share): readonly (Edit | null)[] {

@@ -1,9 +1,10 @@
 /** The stages of a channel whose order and corner a designer chooses, and what titles call them. */
-import type { Channel, FamilyForm, Stage } from '../spec';
+import { stagePath, type Channel, type FamilyForm, type Path, type Stage } from '../spec';
 
 /** A stage that a fix may change. */
 export interface FamilyStage {
-  readonly index: number;
+  /** Where it stands below its channel. */
+  readonly path: Path;
   readonly form: FamilyForm;
   /** "`pick-up guard`", "`pick-up guard`, stage 2", "the filter". */
   readonly words: string;
@@ -13,10 +14,10 @@ export interface FamilyStage {
 export function familyStages(channel: Channel): readonly FamilyStage[] {
   const found = channel.stages.flatMap((stage, index) => {
     const form = familyForm(stage);
-    return form === null ? [] : [{ index, form, stage }];
+    return form === null ? [] : [{ path: stagePath(channel, index), form, stage }];
   });
-  return found.map(({ index, form, stage }) => ({
-    index,
+  return found.map(({ path, form, stage }) => ({
+    path,
     form,
     words: stageWords(
       stage,

@@ -1,6 +1,7 @@
 /** Two changes at once, for findings that no single change cures: a higher order or another rate, with the corner that suits it. */
 import type { Change } from './change';
-import { cornerSearch } from './corner';
+import { cornerKnobs } from './corner';
+import { knobSearch } from './knob';
 import { highestOrder, orderChange } from './order';
 import { rateChange, rateTrials } from './rate';
 import { rateOptions } from './rate-options';
@@ -28,15 +29,15 @@ function* rateAndCorner(session: Session, stage: FamilyStage): Generator<void, r
   const options = Array.from({ length: steps }, (_, index) => above[2 ** index - 1]).filter((option) => option !== undefined);
   for (const option of options) {
     const change = rateChange(session, option);
-    const outcome = change === null ? null : yield* cornerSearch(session, stage, [change]);
-    if (outcome !== null && outcome.trial !== null) return [outcome.trial];
+    const trial = change === null ? null : yield* withCorner(session, stage, change);
+    if (trial !== null) return [trial];
   }
   return [];
 }
 
 function* orderAndCorner(session: Session, stage: FamilyStage): Generator<void, readonly Trial[]> {
   for (const change of higherOrders(session, stage)) {
-    const { trial } = yield* cornerSearch(session, stage, [change]);
+    const trial = yield* withCorner(session, stage, change);
     if (trial !== null) return [trial];
   }
   return [];
@@ -48,6 +49,12 @@ function* orderAndRate(session: Session, stage: FamilyStage): Generator<void, re
     if (trials.length > 0) return trials.slice(0, 1);
   }
   return [];
+}
+
+/** A change with the corner that suits it: of a band filter its width. */
+function* withCorner(session: Session, stage: FamilyStage, change: Change): Generator<void, Trial | null> {
+  const [knob] = cornerKnobs(session, stage);
+  return knob === undefined ? null : (yield* knobSearch(session, knob, [change])).trial;
 }
 
 function higherOrders(session: Session, stage: FamilyStage): readonly Change[] {

@@ -15,7 +15,7 @@ describe('the fixes of the bearing pick-up', () => {
     bearing = cured(bearingSpec, 'alias-over-limit');
   });
 
-  it('are a round rate of its clock and a higher order, each with the margin it leaves', () => {
+  it('are a round rate of its clock, a higher order and a steeper family, each with the margin it leaves', () => {
     assert.equal(
       bearing.finding.message,
       '`drive hash` at 41.2 kHz lands on 10 kHz at −91.2 dBFS, 4.8 dB over the alias limit of −96 dBFS (worst case, corner +4 %; nominal −92.6).',
@@ -23,6 +23,7 @@ describe('the fixes of the bearing pick-up', () => {
     assert.deepEqual(titles(bearing), [
       'Raise the rate to 64 kHz (÷384): alias margin 4.6 dB',
       'Raise `pick-up guard` to order 5: alias margin 4.2 dB, flatness 0.22 dB',
+      'Make `pick-up guard` a `legendre` filter: alias margin 2.2 dB, flatness 0.52 dB',
     ]);
   });
 
@@ -35,9 +36,10 @@ describe('the fixes of the bearing pick-up', () => {
   });
 
   it('change only the value that they name', () => {
-    const [rate, order] = bearing.cure.fixes.map((fix) => after(bearing, fix));
+    const [rate, order, family] = bearing.cure.fixes.map((fix) => after(bearing, fix));
     assert.equal(rate, bearingWith(['divide: 480 }     ', 'divide: 384 }     ']));
     assert.equal(order, bearingWith(['order: 4', 'order: 5']));
+    assert.equal(family, bearingWith(['family: butterworth', 'family: legendre']));
   });
 
   it('leave no error when judged from nothing', () => {
@@ -157,8 +159,8 @@ describe('a search for fixes', () => {
 `;
     const kinds = (text: string): readonly string[] =>
       cured(text, 'alias-over-limit', 'bearing-x').cure.fixes.map(({ kind }) => kind);
-    assert.deepEqual(kinds(roomy), ['corner', 'order']);
-    assert.deepEqual(kinds(`${roomy}${wider}`), ['order']);
+    assert.deepEqual(kinds(roomy), ['corner', 'order', 'family']);
+    assert.deepEqual(kinds(`${roomy}${wider}`), ['order', 'family']);
     const { note } = cured(`${roomy}${wider}`, 'alias-over-limit', 'bearing-x').cure;
     assert.match(
       note ?? '',
@@ -178,10 +180,11 @@ describe('a search for fixes', () => {
     assert.deepEqual(kinds, [
       ['rate', true],
       ['order', true],
+      ['family', true],
       ['rate', false],
     ]);
     assert.match(
-      titles(tight)[2] ?? '',
+      titles(tight)[3] ?? '',
       /^Raise the rate to 57\.83 kHz \(÷425\): alias margin 0\.4 dB; leaves a new warning \(thin alias margin\)$/,
     );
   });
@@ -235,7 +238,7 @@ describe('a search for fixes', () => {
     assert.deepEqual(titles(listed), ['Raise the rate to 64 kHz (÷384): alias margin 4.6 dB']);
   });
 
-  it('cures a copy of a generated band by rate, corner or order', () => {
+  it('cures a copy of a generated band by rate, order or another way to hold', () => {
     const sounder = cured(
       `bandkeep: 1
 channels:
@@ -250,13 +253,13 @@ channels:
     );
     assert.deepEqual(
       [...new Set(sounder.cure.fixes.map(({ kind }) => kind))].sort(),
-      ['order', 'rate'],
+      ['order', 'pulse', 'rate'],
       titles(sounder).join('\n'),
     );
     for (const fix of sounder.cure.fixes) assert.deepEqual(errorsIn(after(sounder, fix)), [], fix.title);
   });
 
-  it('leaves a finding alone that no change of rate, order or corner can cure', () => {
+  it('leaves a finding alone that no change can cure', () => {
     const short = cured(
       bearingWith(['unwanted:\n', 'guard: 1 Hz\n    unwanted:\n      - { name: far, tone: 5 kHz, level: -90 dBFS }\n']),
       'overlaps-wanted',

@@ -1,16 +1,16 @@
-/** Corner frequencies of four significant figures, counted: a corner is searched for, and written, on this grid. */
+/** Numbers of four significant figures, counted: a value that may be anything is searched for, and written, on this grid. */
 
 /** Values in each decade. */
 const inDecade = 9000;
 
-/** Where a frequency stands on the grid; a whole number for one of four figures. */
-export function toGrid(hz: number): number {
-  const decade = Math.floor(Math.log10(hz));
-  const index = decade * inDecade + hz / 10 ** (decade - 3) - 1000;
+/** Where a positive number stands on the grid; a whole number for one of four figures. */
+export function toGrid(value: number): number {
+  const decade = Math.floor(Math.log10(value));
+  const index = decade * inDecade + value / 10 ** (decade - 3) - 1000;
   return Math.abs(index - Math.round(index)) < 1e-6 ? Math.round(index) : index;
 }
 
-/** The frequency at a whole number of the grid. */
+/** The number at a whole number of the grid. */
 export function fromGrid(index: number): number {
   const decade = Math.floor(index / inDecade);
   return Number(`${index - decade * inDecade + 1000}e${decade - 3}`);

@@ -1,49 +1,49 @@
-/** Walks a corner away from its present value in the direction that helps, and finds where a condition begins to hold. */
+/** Walks a value away from where it is in the direction that helps, and finds where a condition begins to hold. */
 import type { Change } from './change';
-import { fromGrid, toGrid } from './corner-grid';
+import { fromGrid, toGrid } from './figure-grid';
 import { ownMargin, type Session } from './session';
 import type { Trial } from './trial';
 
-/** Towards higher or lower corners. */
+/** Towards higher or lower values. */
 export type Direction = 1 | -1;
 
-/** A walk in one direction. Corners are indices of the grid. */
-export interface CornerWalk {
+/** A walk in one direction. Values are indices of the grid. */
+export interface KnobWalk {
   readonly direction: Direction;
   /** What the walk is for: to clear the finding, or, where other changes have cleared it, the errors that they brought. */
   readonly aim: (trial: Trial) => boolean;
   at(index: number): Generator<void, Trial | null>;
-  /** The first corner, from the present or a given one on, at which the condition holds; null where it never does. */
+  /** The first value, from the present or a given one on, at which the condition holds; null where it never does. */
   nearest(good: (trial: Trial) => boolean, from?: number): Generator<void, number | null>;
 }
 
 /** Finds the direction that helps; null where neither does. */
-export function* cornerWalk(
+export function* knobWalk(
   session: Session,
-  presentHz: number,
+  present: number,
   base: readonly Change[],
-  change: (hz: number) => Change | null,
-): Generator<void, CornerWalk | null> {
+  change: (value: number) => Change | null,
+): Generator<void, KnobWalk | null> {
   const at = (index: number): Generator<void, Trial | null> => session.attempt([...base, change(fromGrid(index))]);
   const start = base.length === 0 ? null : yield* session.attempt(base);
   const forFinding = start === null || start.remaining.length > 0;
   const score = (trial: Trial | null): number => (trial === null ? -Infinity : forFinding ? own(session, trial) : others(trial));
   const now = start !== null ? score(start) : (ownMargin(session.finding, session.figures) ?? -Infinity);
-  const up = score(yield* at(Math.round(toGrid(presentHz * firstStride))));
-  const down = score(yield* at(Math.round(toGrid(presentHz / firstStride))));
+  const up = score(yield* at(Math.round(toGrid(present * firstStride))));
+  const down = score(yield* at(Math.round(toGrid(present / firstStride))));
   if (Math.max(up, down) <= now) return null;
   const direction: Direction = up > down ? 1 : -1;
   const aim = forFinding ? clears : (trial: Trial): boolean => trial.newErrors.length === 0;
-  const present = direction > 0 ? Math.floor(toGrid(presentHz)) : Math.ceil(toGrid(presentHz));
-  return { direction, aim, at, nearest: (good, from = present) => nearest({ at, direction, from }, good) };
+  const here = direction > 0 ? Math.floor(toGrid(present)) : Math.ceil(toGrid(present));
+  return { direction, aim, at, nearest: (good, from = here) => nearest({ at, direction, from }, good) };
 }
 
-/** Factors by which a corner is moved until a condition holds; it is then closed in on. */
+/** Factors by which a value is moved until a condition holds; it is then closed in on. */
 const strides: readonly number[] = [1.02, 1.05, 1.1, 1.2, 1.4, 2, 3, 5, 10];
 const firstStride = 1.05;
 
 interface Route {
-  readonly at: CornerWalk['at'];
+  readonly at: KnobWalk['at'];
   readonly direction: Direction;
   readonly from: number;
 }
@@ -63,7 +63,7 @@ function* nearest({ at, direction, from }: Route, good: (trial: Trial) => boolea
   return null;
 }
 
-/** Bisects between a corner where the condition fails and one where it holds. */
+/** Bisects between a value where the condition fails and one where it holds. */
 function* closedIn(
   holds: (index: number) => Generator<void, boolean>,
   failing: number,

@@ -1,9 +1,9 @@
 import assert from 'node:assert/strict';
 import fc from 'fast-check';
-import { fromGrid, roundedTowards, toGrid } from '../../src/remedies/corner-grid';
+import { fromGrid, roundedTowards, toGrid } from '../../src/remedies/figure-grid';
 
-describe('the grid of corners', () => {
-  it('counts every frequency of four figures, without gaps between decades', () => {
+describe('the grid of four figures', () => {
+  it('counts every number of four figures, without gaps between decades', () => {
     assert.equal(fromGrid(toGrid(12180)), 12180);
     assert.equal(fromGrid(toGrid(9999) + 1), 10000);
     assert.equal(fromGrid(toGrid(10000) - 1), 9999);
