@@ -37,6 +37,7 @@ export { noiseBandwidthHz } from './noise-bandwidth';
 export { noiseWidth, type NoiseWidth } from './noise-width';
 export { gateFigures, stretchedGate, type GateFigures } from './gate-figures';
 export { shapeNulls } from './pulse-nulls';
+export { toneLandings } from './tone-landings';
 export { pulseShape, widthSeconds } from './pulse-shape';
 export { pulseDelay } from '../signal/pulses/pulse-delay';
 export { trackAndHoldDelay, type TrackAndHold } from '../signal/pulses/track-and-hold';

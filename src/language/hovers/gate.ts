@@ -2,7 +2,6 @@
 import {
   gainDb,
   gateFigures,
-  pulseDelay,
   pulseShape,
   shapeNulls,
   stretchedGate,
@@ -33,7 +32,7 @@ export function gateHover({ channel, figures }: Subject): Answer | null {
   return gate.kind === 'track' ? trackAnswer(gate.track, figures) : pulseAnswer(gate.pulse, figures);
 }
 
-function pulseAnswer(gate: Pulse, { rate, reference }: Figures): Answer | null {
+function pulseAnswer(gate: Pulse, { rate }: Figures): Answer | null {
   const shape = pulseShape(gate, rate);
   const own = gateFigures(gate, rate, listedCopies);
   if (shape === null || own === null) return null;
@@ -46,8 +45,7 @@ function pulseAnswer(gate: Pulse, { rate, reference }: Figures): Answer | null {
       ...otherWidths.flatMap((factor) => widthRow(gate, factor, rate)),
       ...knownRows(
         ['its spectrum is nothing at', nulls.length === 0 ? null : nulls.join(', ')],
-        ['delay', formatTime(pulseDelay(shape, reference))],
-        ['the wanted band', 'stays flat: a gate weighs each copy as a whole'],
+        ['the wanted band', 'stays flat and undelayed: a gate weighs each copy as a whole'],
       ),
     ],
     formula: 'c_k = (area/T)·P(k·fs): copy k leaves by |c_k|/c_0 weaker than the wanted band, whatever its frequency',

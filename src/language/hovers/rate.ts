@@ -46,8 +46,7 @@ function windowRows({ rate, rateWindow }: Figures): Row[] {
   if (rateWindow === null) return [];
   const { low, high } = rateWindow;
   const open = !Number.isFinite(high);
-  const room = (hz: number): string =>
-    `${formatFrequency(Math.abs(hz))} (${Math.round((Math.abs(hz) / rate) * 1e6).toLocaleString('en-US')} ppm)`;
+  const room = (hz: number): string => roomWords(Math.abs(hz), rate);
   return knownRows(
     ['keeps the band whole', open ? `${formatFrequency(low)} and more` : `${formatFrequency(low)} .. ${formatFrequency(high)}`],
     ['room below', room(rate - low)],
@@ -65,11 +64,22 @@ function otherWindowRows({ windows, leftOff }: RateTable, { rate }: Figures): Ro
   const here = windows.filter((window) => holds(window, rate));
   const more = windows.length - below.length - above.length - here.length + leftOff;
   return [
-    ...here.slice(0, 1).map(({ zones }): Row => ['this window', zoneWords(zones)]),
-    ...[...below].reverse().map((window): Row => ['window below', windowWords(window)]),
-    ...above.map((window): Row => ['window above', windowWords(window)]),
+    ...here.slice(0, 1).flatMap(({ zones }): Row[] => (zones.length < 2 ? [] : [['this window', zoneWords(zones)]])),
+    ...[...below].reverse().map((window): Row => ['window below', wideWords(window)]),
+    ...above.map((window): Row => ['window above', wideWords(window)]),
     ...(more > 0 ? [['further windows', formatCount(more, 'more', 'more')] as const] : []),
   ];
+}
+
+/** A window with its width, which is the room that a clock has in it. */
+function wideWords(window: RateWindow): string {
+  const { low, high } = window;
+  return high === Infinity ? windowWords(window) : `${windowWords(window)}, ${roomWords(high - low, (low + high) / 2)} wide`;
+}
+
+/** "24.7 kHz (26,953 ppm)". */
+function roomWords(hz: number, rate: number): string {
+  return `${formatFrequency(hz)} (${Math.round((hz / rate) * 1e6).toLocaleString('en-US')} ppm)`;
 }
 
 /** A rate this close to the end of a window is in it. */
