@@ -1,6 +1,7 @@
 /** One channel's figures: everything that is computed of it, worst case and nominal. */
 import type { Channel } from '../spec/channel';
 import { aliasesOf } from './alias';
+import { beyondDataOf, withheld } from './beyond-data';
 import { channelPath } from './channel-path';
 import { delayOf } from './delay';
 import { effectiveBits } from './effective-bits';
@@ -9,22 +10,40 @@ import { droopOf, flatnessOf } from './flatness';
 import { headroomOf } from './headroom';
 import { imagesOf } from './image';
 import { protectedAt } from './landing-point';
+import { levelRangeOf } from './level';
 import { judgeLimits, limitOf } from './limits';
+import { masksOf } from './masks';
 import { noiseOf } from './noise';
+import { relayAliases } from './relay/aliases';
+import { copyWeights } from './relay/copy-weights';
+import { crosstalkDb } from './relay/crosstalk';
+import { relayImages } from './relay/images';
+import { relayPath } from './relay/relay-path';
 import { overlapsOf } from './source-range';
 import { windowAround } from './rate-windows';
+import { testToneLevelDb } from './test-tone';
 import { samplingFaults, wantedFigures } from './wanted';
 
-/** Analyses a channel; pure, so the same channel always gives the same figures. */
+/** Analyses a channel; pure, so the same channel always gives the same figures. What a table does not hold is left out. */
 export function analyse(channel: Channel): Figures {
+  return withheld(figuresOf(channel), beyondDataOf(channel));
+}
+
+function figuresOf(channel: Channel): Figures {
   const path = channelPath(channel);
   const wanted = wantedFigures(channel);
-  const aliases = aliasesOf(channel, limitOf(channel, 'alias'));
-  const images = imagesOf(channel, path, limitOf(channel, 'image'));
+  const relayed = channel.direction === 'relay';
+  const aliasLimit = limitOf(channel, 'alias');
+  const imageLimit = limitOf(channel, 'image');
+  const aliases = relayed ? relayAliases(channel, aliasLimit) : aliasesOf(channel, aliasLimit);
+  const images = relayed ? relayImages(channel, imageLimit) : imagesOf(channel, path, imageLimit);
+  const sampled = relayed ? relayPath(channel).input : path;
   const flatness = flatnessOf(channel, path);
-  const delay = delayOf(channel, path);
+  const delay = delayOf(channel, path, { delay: limitOf(channel, 'delay'), spread: limitOf(channel, 'delay-spread') });
   const noise = noiseOf(channel, path, limitOf(channel, 'snr'));
-  const headroom = headroomOf(channel, path);
+  const headroom = headroomOf(sampled.channel, sampled);
+  const level = levelRangeOf(channel, path);
+  const masks = masksOf(channel, path);
   const rate = channel.rate.hz;
   const shared = commonZone(wanted);
   // Written out: spreading objects here took longer than the searches.
@@ -41,7 +60,7 @@ export function analyse(channel: Channel): Figures {
     rateWindow: windowAround(channel),
     wanted,
     protected: protectedAt(channel, rate),
-    limits: judgeLimits(channel, { aliases, images, flatness, noise, headroom }),
+    limits: judgeLimits(channel, { aliases, images, flatness, noise, headroom, delay, level, masks: masks.figures }),
     droop: droopOf(channel, path),
     delay: delay.atReference,
     delaySpread: delay.spread,
@@ -51,19 +70,25 @@ export function analyse(channel: Channel): Figures {
     images: images.figures,
     image: images.strongest,
     noise: noise.figures,
-    testTone: { frequency: channel.testTone.frequencyHz, level: channel.testTone.levelDb, atSampler: noise.toneDb },
+    testTone: {
+      frequency: channel.testTone.frequencyHz,
+      level: channel.testTone.levelDb,
+      atSampler: relayed ? testToneLevelDb(sampled.channel, sampled) : noise.toneDb,
+    },
     snr: noise.snrDb,
     // Distortion and interleave products do not exist yet, so nothing sets the two apart.
-    sinad: noise.snrDb,
-    enob: effectiveBits(noise.snrDb),
-    enobFullScale: noise.snrDb === null ? null : effectiveBits(noise.snrDb - noise.toneDb),
+    sinad: relayed ? null : noise.snrDb,
+    // A relay has no words, so it has no bits.
+    enob: relayed ? null : effectiveBits(noise.snrDb),
+    enobFullScale: relayed || noise.snrDb === null ? null : effectiveBits(noise.snrDb - noise.toneDb),
     headroom: headroom?.valueDb ?? null,
-    masks: [],
-    crosstalk: null,
-    copyWeights: null,
+    masks: masks.figures,
+    crosstalk: crosstalkDb(channel),
+    copyWeights: copyWeights(channel),
+    beyondData: [],
     faults: samplingFaults(channel),
-    overlaps: channel.direction === 'capture' ? overlapsOf(channel) : [],
-    evaluations: totalOf([aliases, images, flatness, delay, noise, headroom]),
+    overlaps: channel.direction === 'generate' ? [] : overlapsOf(channel),
+    evaluations: totalOf([aliases, images, flatness, delay, noise, headroom, level, masks]),
   };
 }
 

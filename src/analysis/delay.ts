@@ -1,10 +1,26 @@
-/** The group delay of a path at its reference and how much it differs over the wanted bands. */
-import type { Channel } from '../spec/channel';
+/** The group delay of a path at its reference and how much it differs over the wanted bands, nominally and at the worst of the tolerances. */
+import type { Channel, Limit } from '../spec/channel';
 import { pathDelay } from './channel-path';
 import type { ChannelPath } from './channel-path';
-import { atCorners, cornerSets } from './corners';
+import { atCorners, cornerSets, deviationsAt } from './corners';
+import type { Corners } from './corners';
 import { delaySpread } from './delay-spread';
+import type { DelaySpread } from './delay-spread';
+import type { WorstAt } from './figures';
 import { wantedRanges } from './source-range';
+import { deviation, joinWorst, rateLabel, rateRange, varies } from './tolerances';
+import { wantedDelayCurve, wantedDelayMoves } from './wanted-delay-curve';
+import { wantedDelaySeconds } from './wanted-pulse';
+import { worstCorners } from './worst-corners';
+
+/** A delay at its worst. */
+export interface WorstDelay {
+  readonly seconds: number;
+  readonly nominalSeconds: number;
+  readonly gapSeconds: number;
+  readonly frequencyHz: number;
+  readonly worstAt: WorstAt | null;
+}
 
 /** The delay of a channel's path. */
 export interface Delay {
@@ -12,22 +28,104 @@ export interface Delay {
   readonly atReference: number | null;
   /** Largest minus smallest over the wanted bands, at the worst ends of the corners; null without a wanted band, or where a table has no phase. */
   readonly spread: number | null;
+  /** What a `delay` limit is held against; null without one, and where a table has no phase. */
+  readonly worst: WorstDelay | null;
+  /** What a `delay-spread` limit is held against; null without one, and as above. */
+  readonly worstSpread: WorstDelay | null;
   readonly evaluations: number;
 }
 
-/** The delay of a channel. */
-export function delayOf(channel: Channel, path: ChannelPath): Delay {
+/** The limits that a channel's delay is held to; null where there is none. */
+export interface DelayLimits {
+  readonly delay: Limit | null;
+  readonly spread: Limit | null;
+}
+
+/** The delay of a channel; a limit of the spread makes its search as fine as the limit asks, without one a thousandth of the delay does. */
+export function delayOf(channel: Channel, path: ChannelPath, limits: DelayLimits): Delay {
   const atReference = pathDelay(path, channel.referenceHz);
-  // A pulse delays every frequency alike, so only the stages spread.
-  if (path.stages.length === 0 || channel.wanted.length === 0) {
-    return { atReference, spread: channel.wanted.length === 0 ? null : 0, evaluations: 0 };
-  }
-  const bands = wantedRanges(channel);
-  const spreads = cornerSets(path).map((corners) => delaySpread(atCorners(path, corners).stages, bands));
-  const known = spreads.flatMap((spread) => spread ?? []);
+  const spread = spreadOf(channel, path, limits.spread);
   return {
     atReference,
-    spread: known.length < spreads.length ? null : Math.max(...known.map((spread) => spread.seconds)),
-    evaluations: known.reduce((sum, spread) => sum + spread.evaluations, 0),
+    spread: spread?.reachedSeconds ?? null,
+    worst: atReference === null || limits.delay === null ? null : worstDelay(channel, path, atReference),
+    worstSpread: limits.spread === null ? null : (spread?.judged ?? null),
+    evaluations: spread?.evaluations ?? 0,
   };
+}
+
+/** The stages' delays and the pulse's move by themselves, so each is taken at its own largest. */
+function worstDelay(channel: Channel, path: ChannelPath, nominalSeconds: number): WorstDelay {
+  const { referenceHz, rate } = channel;
+  const corners = worstCorners(path, [], (tried) => pathDelay(atCorners(path, tried), referenceHz) ?? -Infinity);
+  const stages = pathDelay(atCorners(path, corners), referenceHz) ?? nominalSeconds;
+  const pulseAt = (rateHz: number): number => wantedDelaySeconds(channel, rateHz, referenceHz);
+  const slowest = rateEnds(channel).reduce((worst, hz) => (pulseAt(hz) > pulseAt(worst) ? hz : worst), rate.hz);
+  return {
+    seconds: Math.max(stages - pulseAt(rate.hz) + pulseAt(slowest), nominalSeconds),
+    nominalSeconds,
+    gapSeconds: 0,
+    frequencyHz: referenceHz,
+    worstAt: joinWorst(deviationsAt(path, corners), rateDeviation(channel, slowest)),
+  };
+}
+
+interface Spread {
+  readonly reachedSeconds: number;
+  readonly judged: WorstDelay;
+  readonly evaluations: number;
+}
+
+/** How much of the limit its search may leave open. */
+const openShare = 1e-3;
+
+function spreadOf(channel: Channel, path: ChannelPath, limit: Limit | null): Spread | null {
+  if (channel.wanted.length === 0) return null;
+  const withinSeconds = limit === null ? null : limit.at * openShare;
+  const bands = wantedRanges(channel);
+  // A pulse that delays every frequency alike has no part in the spread, whatever the rate.
+  const rates = wantedDelayCurve(channel, channel.rate.hz, bands) === null ? [channel.rate.hz] : rateEnds(channel);
+  const settings = cornerSets(path).flatMap((corners) => rates.map((rateHz) => ({ corners, rateHz })));
+  const found = settings.flatMap((setting): readonly Found[] => {
+    const { stages } = atCorners(path, setting.corners);
+    const spread = delaySpread({ stages, pulse: wantedDelayCurve(channel, setting.rateHz, bands), bands, withinSeconds });
+    return spread === null ? [] : [{ ...setting, spread }];
+  });
+  const [nominal] = found;
+  return nominal === undefined ? null : worstOf(channel, path, nominal, found);
+}
+
+interface Found {
+  readonly corners: Corners;
+  readonly rateHz: number;
+  readonly spread: DelaySpread;
+}
+
+function worstOf(channel: Channel, path: ChannelPath, nominal: Found, found: readonly Found[]): Spread {
+  const worst = found.reduce((best, one) => (one.spread.seconds > best.spread.seconds ? one : best), nominal);
+  return {
+    reachedSeconds: Math.max(...found.map(({ spread }) => spread.reachedSeconds)),
+    judged: {
+      seconds: worst.spread.seconds,
+      nominalSeconds: nominal.spread.seconds,
+      gapSeconds: worst.spread.seconds - worst.spread.reachedSeconds,
+      frequencyHz: worst.spread.atHz,
+      worstAt: joinWorst(deviationsAt(path, worst.corners), rateDeviation(channel, worst.rateHz)),
+    },
+    evaluations: found.reduce((sum, { spread }) => sum + spread.evaluations, 0),
+  };
+}
+
+/** The rates at which a pulse is looked at, nominal first: only one whose length moves with the clock has more than one. */
+function rateEnds(channel: Channel): readonly number[] {
+  const { rate } = channel;
+  if (!varies(rate.tolerance) || !wantedDelayMoves(channel)) return [rate.hz];
+  const { low, high } = rateRange(rate);
+  return [rate.hz, low, high];
+}
+
+function rateDeviation(channel: Channel, rateHz: number): WorstAt | null {
+  const { rate } = channel;
+  const moves = varies(rate.tolerance) && wantedDelayMoves(channel);
+  return moves ? { [rateLabel(rate)]: deviation(rateHz / rate.hz, rate.tolerance) } : null;
 }

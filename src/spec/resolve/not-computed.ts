@@ -23,7 +23,6 @@ export function withoutNotComputed(resolution: Resolution): Resolution {
 
 function notComputed(channel: Channel): readonly NotComputed[] {
   return [
-    ...(channel.direction === 'relay' ? [{ path: ['direction'], what: '`direction: relay`' }] : []),
     ...channel.stages.flatMap((stage, index) => {
       const what = stageWhat(stage);
       return what === null ? [] : [{ path: stagePath(channel, index), what }];
@@ -41,13 +40,12 @@ function stageWhat({ form, parts, qTolerance }: Stage): string | null {
 }
 
 /** The limits of one value that are judged. */
-const judged: readonly string[] = ['alias', 'image', 'flatness', 'snr', 'headroom'];
+const judged: readonly string[] = ['alias', 'image', 'flatness', 'delay', 'delay-spread', 'snr', 'headroom', 'crosstalk'];
 
-function limitsOf({ limits, levelLimit, masks }: Channel): readonly NotComputed[] {
+function limitsOf({ limits, masks }: Channel): readonly NotComputed[] {
   const keys = [
     ...limits.flatMap(({ key }) => (judged.includes(key) ? [] : [key])),
-    ...(levelLimit === null ? [] : ['level']),
-    ...masks.map(({ key }) => key),
+    ...masks.flatMap(({ key }) => (key === 'output' ? [key] : [])),
   ];
   return keys.map((key) => ({ path: ['limits', key], what: `the limit \`${key}\`` }));
 }

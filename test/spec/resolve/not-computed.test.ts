@@ -14,7 +14,6 @@ const messages = (rest: string) => read(spec(rest)).problems.map(({ message }) =
 
 describe('what is not computed yet', () => {
   for (const [rest, word] of [
-    ['    limits: { delay: 1 ms }\n', '`delay`'],
     ['    filter: { second-order: { frequency: 2 kHz, q: 1 }, tolerance: { q: 5 % } }\n', '`q`'],
     ['    filter: { rlc: { r: 50 Ω, l: 1 mH ± 5 %, c: 10 nF } }\n', '`rlc`'],
   ] as const) {
