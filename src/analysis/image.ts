@@ -26,11 +26,25 @@ export interface Images {
 
 /** Every copy's strongest point, measured as the image limit measures it; by level where there is none. */
 export function imagesOf(channel: Channel, path: ChannelPath, limit: Limit | null): Images {
-  const none: Images = { figures: [], strongest: null, nominalLevelDb: null, nominalRelativeDb: null, evaluations: 0 };
-  if (channel.direction !== 'generate') return none;
-  const measure: Measure = limit?.unit === 'dBc' ? 'relative' : 'level';
-  const found = channel.wanted.flatMap((band) => imagesOfBand(channel, path, band, measure));
-  if (found.length === 0) return none;
+  if (channel.direction !== 'generate') return noImages;
+  const measure = measureOf(limit);
+  return imagesFrom(
+    channel.wanted.flatMap((band) => imagesOfBand(channel, path, band, measure)),
+    limit,
+  );
+}
+
+const noImages: Images = { figures: [], strongest: null, nominalLevelDb: null, nominalRelativeDb: null, evaluations: 0 };
+
+/** How images are measured under a limit. */
+export function measureOf(limit: Limit | null): Measure {
+  return limit?.unit === 'dBc' ? 'relative' : 'level';
+}
+
+/** The images of a channel from those of all its wanted bands. */
+export function imagesFrom(found: readonly Image[], limit: Limit | null): Images {
+  if (found.length === 0) return noImages;
+  const measure = measureOf(limit);
   const key = (one: Image): number => (measure === 'relative' ? one.relativeDb : one.levelDb);
   const nominalKey = (one: Image): number => (measure === 'relative' ? one.nominalRelativeDb : one.nominalLevelDb);
   const figures = strongestOfEach(found, key).map((one) => figureOf(one, limit, key(one)));
@@ -50,7 +64,7 @@ export function imagesOf(channel: Channel, path: ChannelPath, limit: Limit | nul
 }
 
 /** A copy's strongest point in levels, worst and nominal. */
-interface Image {
+export interface Image {
   readonly copy: ImagePoint['copy'];
   readonly fromHz: number;
   readonly frequencyHz: number;

@@ -57,10 +57,10 @@ function landsProtected(channel: Channel, point: LandingPoint): boolean {
   );
 }
 
-/** The protected ranges at a rate: as stated, or the wanted bands where they then appear. */
+/** The protected ranges at a rate: as stated, or the wanted bands where they then appear (capture) or leave. */
 export function protectedAt(channel: Channel, rateHz: number): readonly Enclosure[] {
   if (channel.protect !== null) return channel.protect.map((range) => ({ low: range.lowHz, high: range.highHz }));
   return channel.wanted.map((band) =>
-    channel.direction === 'generate' ? { low: band.lowHz, high: band.highHz } : appearance(band, rateHz),
+    channel.direction !== 'capture' ? { low: band.lowHz, high: band.highHz } : appearance(band, rateHz),
   );
 }

@@ -6,6 +6,7 @@ import type { NoiseFigures, WorstAt } from './figures';
 import { captureNoise } from './noise-capture';
 import { generateNoise } from './noise-generate';
 import type { DirectionNoise } from './noise-parts';
+import { relayNoise } from './relay/noise';
 import { testToneLevelDb } from './test-tone';
 
 /** Noise and what follows from it. */
@@ -21,8 +22,7 @@ export interface Noise {
 
 /** The noise of a channel; `limit` is its snr limit, which says whether unwanted sources count. */
 export function noiseOf(channel: Channel, path: ChannelPath, limit: Limit | null): Noise {
-  const withUnwanted = limit?.withUnwanted === true;
-  const noise = channel.direction === 'capture' ? captureNoise(channel, path, withUnwanted) : generateNoise(channel, path);
+  const noise = noiseIn(channel, path, limit?.withUnwanted === true);
   const toneDb = testToneLevelDb(channel, path);
   const total = sumOfParts([noise.nominal.quantisation, noise.nominal.jitter]);
   return {
@@ -42,6 +42,17 @@ export function noiseOf(channel: Channel, path: ChannelPath, limit: Limit | null
     judged: judged(noise),
     evaluations: noise.evaluations,
   };
+}
+
+function noiseIn(channel: Channel, path: ChannelPath, withUnwanted: boolean): DirectionNoise {
+  switch (channel.direction) {
+    case 'capture':
+      return captureNoise(channel, path, withUnwanted);
+    case 'generate':
+      return generateNoise(channel, path);
+    case 'relay':
+      return relayNoise(channel, withUnwanted);
+  }
 }
 
 function judged({ nominalShares, worstShares, worstAt }: DirectionNoise): Noise['judged'] {

@@ -5,6 +5,7 @@ import { gainDb } from './channel-path';
 import type { ChannelPath } from './channel-path';
 import { wantedRanges } from './source-range';
 import { contains } from './intervals';
+import { relayPath } from './relay/relay-path';
 import { nominalPath } from './worst-path';
 
 /** The wanted band that the test tone stands in, where its noise counts; all of them where it stands in none. */
@@ -24,8 +25,14 @@ export function levelReference(channel: Channel): number | null {
   return channel.direction === 'capture' && channel.levelsAt === 'sampler' ? channel.referenceHz : null;
 }
 
-/** The test tone's nominal level in dBFS: at the sampler in capture, as it leaves in generate. */
+/** The test tone's nominal level in dBFS: at the sampler in capture, as it leaves in generate and relay. */
 export function testToneLevelDb(channel: Channel, path: ChannelPath): number {
   const { response } = nominalPath(path, levelReference(channel));
-  return channel.testTone.levelDb + gainDb(response, channel.testTone.frequencyHz);
+  const referenceDb = channel.direction === 'relay' && channel.levelsAt === 'sampler' ? inputGainDb(channel) : 0;
+  return channel.testTone.levelDb + gainDb(response, channel.testTone.frequencyHz) - referenceDb;
+}
+
+/** The gain at `reference` of what leads to a relay's sampler. */
+function inputGainDb(channel: Channel): number {
+  return gainDb(relayPath(channel).input.total, channel.referenceHz);
 }

@@ -12,7 +12,7 @@ const slack = 1e-12;
 export function wantedFigures(channel: Channel): readonly WantedFigure[] {
   return channel.wanted.map((band) => {
     const zone = zoneOf(band.lowHz, channel.rate.hz);
-    const stays = channel.direction === 'generate';
+    const stays = channel.direction !== 'capture';
     const appears = appearance(band, channel.rate.hz);
     return {
       name: band.name,

@@ -5,10 +5,11 @@ import { constantResponse, inverse, largestOf } from '../signal/response-algebra
 import { axisFactors } from './axis';
 import { relativeTo } from './channel-path';
 import type { ChannelPath } from './channel-path';
-import { pulseAreaLog, pulseMoves, pulseResponse } from './pulse';
+import { pulseAreaLog, pulseMoves } from './pulse';
 import { pulseShape } from './pulse-shape';
 import { stretchedFrom, type WorstQuestion } from './stretched-from';
 import { rateRange, varies } from './tolerances';
+import { wantedPulse } from './wanted-pulse';
 
 /**
  * The pulse's worst responses, in series; none for `instant`.
@@ -20,12 +21,27 @@ import { rateRange, varies } from './tolerances';
  */
 export function worstPulse(path: ChannelPath, question: WorstQuestion): readonly Response[] {
   const { channel, pulse } = path;
+  if (channel.gate !== null) return worstGate(path, question);
   if (channel.pulse.shape === 'instant') return [];
   const moves = pulseMoves(channel.pulse);
   const still = moves === 'follows' ? question.axis === 'periods' : moves === 'stays';
   if (still || !varies(channel.rate.tolerance)) return [...areaShift(path, question), fixed(pulse, question)];
   if (moves === 'follows') return [stretchedFrom(pulse, axisFactors(channel).hertz, question).response];
   return channel.pulse.shape === 'exponential' ? [worstOfRates(path, question)] : worstFactors(path, question);
+}
+
+/**
+ * What a gate makes of the wanted path. A pulsed one is a constant, c₀, which a fixed width makes follow the rate; track and hold follows
+ * the rate, or is taken at the worst of nominal and either end where it tracks for a fixed time.
+ */
+function worstGate(path: ChannelPath, question: WorstQuestion): readonly Response[] {
+  const { channel, pulse } = path;
+  const { gate } = channel;
+  if (gate === null) return [];
+  const follows = gate.kind === 'pulse' ? pulseMoves(gate.pulse) === 'follows' : 'share' in gate.track;
+  if (!varies(channel.rate.tolerance) || question.axis === 'periods') return [fixed(pulse, question)];
+  if (!follows) return [worstOfRates(path, question)];
+  return gate.kind === 'pulse' ? [fixed(pulse, question)] : [stretchedFrom(pulse, axisFactors(channel).hertz, question).response];
 }
 
 function fixed(response: Response, { referenceHz }: WorstQuestion): Response {
@@ -64,7 +80,7 @@ function factorsAt({ channel }: ChannelPath, rateHz: number): readonly PulseFact
 
 function worstOfRates({ channel, rateHz }: ChannelPath, question: WorstQuestion): Response {
   const rates = [rateHz, ...rateEnds(channel.rate)];
-  const responses = rates.map((rate) => fixed(pulseResponse(channel, rate), question));
+  const responses = rates.map((rate) => fixed(wantedPulse(channel, rate), question));
   return question.sense === 'largest' ? largestOf(responses) : inverse(largestOf(responses.map(inverse)));
 }
 
