@@ -139,6 +139,23 @@ export interface Overlap {
   readonly highHz: number;
 }
 
+/** A measured table that refuses to be asked outside its range, and is. */
+export interface BeyondData {
+  /** Index into the channel's `stages`. */
+  readonly stage: number;
+  /** Which end of the table it is about, and that end in Hz at the worst of the corner's tolerance. */
+  readonly side: 'below' | 'beyond';
+  readonly endHz: number;
+  /** The farthest frequency asked; it may be Infinity. */
+  readonly askedHz: number;
+  /** Who asks there. */
+  readonly asks: 'wanted' | 'test tone' | 'source' | 'copies' | 'landings' | MaskLimit['key'];
+  /** Its name, where a source asks. */
+  readonly source: string | null;
+  /** The limits that can then not be judged. */
+  readonly keys: readonly JudgedKey[];
+}
+
 /** All figures of one channel. */
 export interface Figures {
   readonly name: string;
@@ -175,6 +192,7 @@ export interface Figures {
   readonly crosstalk: number | null;
   /** |c_k|/c_0 for k = 0 … 8; null without a gate. */
   readonly copyWeights: readonly number[] | null;
+  readonly beyondData: readonly BeyondData[];
   readonly faults: readonly SamplingFault[];
   readonly overlaps: readonly Overlap[];
   /** Points and bounds evaluated by the searches, for tests. */

@@ -1,6 +1,9 @@
 /** The list of all finding codes, in the order of the documentation. */
 import { aliasOverLimit } from './alias-over-limit';
+import { beyondData } from './beyond-data';
 import { contradiction } from './contradiction';
+import { delayOverLimit } from './delay-over-limit';
+import { delaySpreadOverLimit } from './delay-spread-over-limit';
 import { duplicateName } from './duplicate-name';
 import { fileNotRead } from './file-not-read';
 import type { Code, RemedyKind } from './finding';
@@ -8,6 +11,7 @@ import { flatnessOverLimit } from './flatness-over-limit';
 import { headroomShort } from './headroom-short';
 import { imageOverLimit } from './image-over-limit';
 import type { FindingKind } from './kind';
+import { levelOverLimit } from './level-over-limit';
 import { missingKey } from './missing-key';
 import { noFilter } from './no-filter';
 import { noLimits } from './no-limits';
@@ -18,6 +22,7 @@ import { outOfRange } from './out-of-range';
 import { overdriven } from './overdriven';
 import { overlapsWanted } from './overlaps-wanted';
 import { rateUnavailable } from './rate-unavailable';
+import { responseOverMask } from './response-over-mask';
 import { snrShort } from './snr-short';
 import { staleAcceptance } from './stale-acceptance';
 import { syntax } from './syntax';
@@ -53,7 +58,12 @@ export const kinds: readonly FindingKind[] = [
   overdriven,
   imageOverLimit,
   flatnessOverLimit,
+  responseOverMask,
+  delayOverLimit,
+  delaySpreadOverLimit,
+  levelOverLimit,
   snrShort,
+  beyondData,
   notJudged,
   thinMargin,
   nothingUnwanted,

@@ -34,8 +34,16 @@ export const notJudged: FindingKind = {
   group: 'advice',
   help,
   remedies: [],
-  check: (subject) => subject.figures.limits.filter((figure) => !figure.judged).map((figure) => unjudged(subject, figure)),
+  check: (subject) =>
+    subject.figures.limits
+      .filter((figure) => !figure.judged && !withheldFor(subject, figure))
+      .map((figure) => unjudged(subject, figure)),
 };
+
+/** Whether `beyond-data` already says why it is not judged. */
+function withheldFor({ figures }: Subject, { limit }: LimitFigure): boolean {
+  return figures.beyondData.some(({ keys }) => keys.includes(limit));
+}
 
 function unjudged({ channel, figures }: Subject, figure: LimitFigure): Finding {
   const folded = figures.faults.some((fault) => fault.kind === 'wanted-folds');
@@ -65,14 +73,21 @@ function missing(channel: Channel, figure: LimitFigure, folded: boolean): string
       return folded ? foldsFirst : 'a path without a filter is flat by nature. Give it its `filter`';
     case 'crosstalk':
       return 'the channel has no time slots. Give it `slots`';
-    case 'image':
-    case 'headroom':
     case 'delay':
     case 'delay-spread':
-    case 'level':
+      if (hasTable(channel)) return 'a measured stage has no phase. Give its table a phase column';
+      return 'a path without a filter delays nothing. Give it its `filter`';
     case 'response':
     case 'through':
+      return 'a path without a filter is flat by nature, and that is inside the mask. Give it its `filter`';
+    case 'image':
+    case 'headroom':
+    case 'level':
     case 'output':
       return folded ? foldsFirst : 'the channel has nothing that could break it';
   }
+}
+
+function hasTable({ stages }: Channel): boolean {
+  return stages.some(({ form }) => form.kind === 'measured' && form.table.phasesRad === null);
 }

@@ -117,6 +117,7 @@ const atRest: Figures = {
   enob: null,
   enobFullScale: null,
   headroom: 3,
+  beyondData: [],
   faults: [],
   overlaps: [],
   evaluations: 0,

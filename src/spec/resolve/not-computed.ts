@@ -34,7 +34,6 @@ function notComputed(channel: Channel): readonly NotComputed[] {
 /** Parts of an `rlc` and Qs that may be off vary by themselves. */
 function stageWhat({ form, parts, qTolerance }: Stage): string | null {
   if (qTolerance.low !== 0 || qTolerance.high !== 0) return 'a tolerance of `q`';
-  if (form.kind === 'measured') return 'a stage by `measured`';
   const loose = form.kind === 'rlc' && parts.some(({ tolerance }) => tolerance.low !== 0 || tolerance.high !== 0);
   return loose ? 'a tolerance of a part of `rlc`' : null;
 }
