@@ -1,4 +1,8 @@
 /** What the command line needs of the machine; main.ts gives the real one, tests give their own. */
+import type { FileFault } from '../spec';
+
+/** A file's bytes, or why there are none. */
+export type LoadedFile = { readonly bytes: Uint8Array } | { readonly fault: FileFault };
 
 /** The outside world as the command sees it. */
 export interface Host {
@@ -15,6 +19,8 @@ export interface Host {
   kindOf(path: string): 'file' | 'folder' | null;
   /** A file's bytes; throws where it cannot be read. */
   readFile(path: string): Uint8Array;
+  /** A file that a spec names, by its path from the root, with `/`; never one outside of it, links followed. */
+  loadFile(root: string, path: string): LoadedFile;
   /** Every spec below a folder, sorted; folders of tools and hidden ones are passed over. */
   specsBelow(folder: string): readonly string[];
   /** All of standard input. */

@@ -7,6 +7,8 @@ import { UsageError } from './usage';
 /** One spec, read. */
 export interface InputText extends InputFile {
   readonly text: string;
+  /** Its path from the root, where the paths that it names start; that of its name for standard input. */
+  readonly fromRoot: string;
 }
 
 /**
@@ -14,10 +16,18 @@ export interface InputText extends InputFile {
  * @throws UsageError where a path leads nowhere, a folder holds no spec, or a file is not UTF-8
  */
 export function readInputs(command: CheckCommand, host: Host): InputText[] {
-  if (command.paths[0] === '-') return [inputText(command.name ?? 'standard-input.bandkeep.yaml', host.readInput(), host)];
-  const root = host.resolve(command.root ?? '.');
+  const root = rootOf(command, host);
+  if (command.paths[0] === '-') {
+    const name = command.name ?? 'standard-input.bandkeep.yaml';
+    return [{ ...inputText(name, host.readInput(), host), fromRoot: host.relative(root, host.resolve(name)) }];
+  }
   const files = new Set(command.paths.flatMap((path) => filesAt(path, host)));
   return [...files].map((file) => inputText(host.relative(root, file), readBytes(file, host), host));
+}
+
+/** The folder that paths in the result start from, and that no file may lead out of. */
+export function rootOf(command: CheckCommand, host: Host): string {
+  return host.resolve(command.root ?? '.');
 }
 
 function filesAt(path: string, host: Host): readonly string[] {
@@ -39,7 +49,7 @@ function readBytes(file: string, host: Host): Uint8Array {
 }
 
 function inputText(path: string, bytes: Uint8Array, host: Host): InputText {
-  return { path, sha256: host.sha256(bytes), text: decoded(path, bytes) };
+  return { path, sha256: host.sha256(bytes), text: decoded(path, bytes), fromRoot: path };
 }
 
 /** UTF-8 without its byte order mark, which editors do not count as text either. */

@@ -1,9 +1,10 @@
 /** The `bandkeep` command on Node: the only file of the command line that touches the process and the disk. */
 import { spawn } from 'node:child_process';
 import { createHash } from 'node:crypto';
-import { readdirSync, readFileSync, statSync } from 'node:fs';
-import { join, relative, resolve, sep } from 'node:path';
-import type { Host } from './host';
+import { readdirSync, readFileSync, realpathSync, statSync } from 'node:fs';
+import { isAbsolute, join, relative, resolve, sep } from 'node:path';
+import { largestTable } from '../spec';
+import type { Host, LoadedFile } from './host';
 import { run } from './run';
 
 /** Set by the bundler from package.json. */
@@ -17,6 +18,7 @@ const host: Host = {
   cwd: process.cwd(),
   kindOf,
   readFile: (path) => readFileSync(path),
+  loadFile,
   specsBelow,
   readInput: () => readFileSync(0),
   resolve: (path) => resolve(path),
@@ -31,6 +33,27 @@ function kindOf(path: string): 'file' | 'folder' | null {
   const stat = statSync(path, { throwIfNoEntry: false });
   if (stat?.isFile()) return 'file';
   return stat?.isDirectory() ? 'folder' : null;
+}
+
+/** Only a plain file is opened, so that neither a pipe nor a device can hold the check up. */
+function loadFile(root: string, path: string): LoadedFile {
+  try {
+    if (isOutside(root, resolve(root, path))) return { fault: 'outside' };
+    const file = realpathSync(resolve(root, path));
+    if (isOutside(realpathSync(root), file)) return { fault: 'outside' };
+    const stat = statSync(file);
+    if (stat.isDirectory()) return { fault: 'folder' };
+    if (!stat.isFile()) return { fault: 'unreadable' };
+    return stat.size > largestTable ? { fault: 'too-large' } : { bytes: readFileSync(file) };
+  } catch (fault) {
+    const code = fault instanceof Error && 'code' in fault ? fault.code : null;
+    return { fault: code === 'ENOENT' || code === 'ENOTDIR' ? 'missing' : 'unreadable' };
+  }
+}
+
+function isOutside(root: string, path: string): boolean {
+  const way = relative(root, path);
+  return way === '..' || way.startsWith(`..${sep}`) || isAbsolute(way);
 }
 
 /** Hidden folders and `node_modules` hold no specs of the user's own; links are not followed, so no loop can form. */

@@ -1,10 +1,11 @@
 /** The command: arguments in, exit code out; everything it touches comes from the host. */
 import { explain } from '../findings';
 import { checkText } from '../jobs';
-import { ansi, plain, tally, toResult, toText, type CheckedFile } from '../output';
+import { ansi, plain, tally, toResult, toText, type CheckedFile, type InputFile } from '../output';
 import { readArguments, type CheckCommand } from './arguments';
 import { exitCode, type Host } from './host';
-import { readInputs, type InputText } from './inputs';
+import { readInputs, rootOf, type InputText } from './inputs';
+import { NamedFiles } from './named-files';
 import { usage, UsageError } from './usage';
 
 /** Runs the command and gives its exit code; never throws. */
@@ -42,13 +43,24 @@ async function runCommand(host: Host): Promise<number> {
 
 function check(command: CheckCommand, host: Host): number {
   const inputs = readInputs(command, host);
-  const files = inputs.map((input) => checkText(input.path, input.text, { fixes: command.fixes }));
-  host.write(command.format === 'json' ? asJson(files, inputs, host) : toText(files, inColour(host) ? ansi : plain));
+  const named = new NamedFiles(host, rootOf(command, host));
+  const files = inputs.map(({ path, text, fromRoot }) =>
+    checkText(path, text, { fixes: command.fixes, files: named.sourceFor(fromRoot) }),
+  );
+  host.write(
+    command.format === 'json' ? asJson(files, allRead(inputs, named), host) : toText(files, inColour(host) ? ansi : plain),
+  );
   const { errors, warnings } = tally(files);
   return errors > 0 || (command.strict && warnings > 0) ? exitCode.findings : exitCode.holds;
 }
 
-function asJson(files: readonly CheckedFile[], inputs: readonly InputText[], host: Host): string {
+/** The specs in their order, then every other file that they name. */
+function allRead(inputs: readonly InputText[], named: NamedFiles): readonly InputFile[] {
+  const checked = new Set(inputs.map(({ path }) => path));
+  return [...inputs, ...named.inputs.filter(({ path }) => !checked.has(path))];
+}
+
+function asJson(files: readonly CheckedFile[], inputs: readonly InputFile[], host: Host): string {
   return `${JSON.stringify(toResult(files, inputs, host.version), null, 2)}\n`;
 }
 

@@ -14,7 +14,8 @@ export const usage = `Judges the analogue edge of sampled systems, described in 
 Options of check
   --format text|json   text for people (default), json for programs
   --strict             warnings fail the check too
-  --root FOLDER        paths in the result are relative to it (default: this folder)
+  --root FOLDER        paths in the result are relative to it, and every file that a spec
+                       names lies in it (default: this folder)
   --no-fixes           do not search for fixes (faster on large sets)
   --help, --version
 

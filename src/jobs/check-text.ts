@@ -2,13 +2,15 @@
 import { createJudgeStore, judging, remediesOf, type Finding } from '../findings';
 import type { CheckedFile } from '../output';
 import { curing, type Cure } from '../remedies';
-import { read } from '../spec';
+import { read, type FileSource } from '../spec';
 import { drain } from './drain';
 
 /** What a check may leave out. */
 export interface CheckOptions {
   /** Whether fixes are searched for; the judgement is the same either way. */
   readonly fixes: boolean;
+  /** The files that the spec names, loaded by the caller; without it a spec that names any is not whole. */
+  readonly files?: FileSource;
 }
 
 /** Checks a text at once. `path` is what the result calls the file. */
@@ -19,7 +21,7 @@ export function checkText(path: string, text: string, options: CheckOptions = { 
 /** The same check, yielding between steps so that a caller may stop it or share the thread. */
 export function* checkingText(path: string, text: string, options: CheckOptions): Generator<void, CheckedFile> {
   const store = createJudgeStore();
-  const judgement = yield* judging(read(text), store);
+  const judgement = yield* judging(read(text, undefined, options.files), store);
   const cures = new Map<Finding, Cure>();
   if (options.fixes) {
     for (const finding of judgement.findings) {

@@ -125,12 +125,14 @@ function limitResult(limit: LimitFigure, range: Range): LimitResult {
 function aliasResult(alias: AliasFigure): AliasResult {
   return {
     source: alias.source,
+    harmonic: alias.harmonic,
     frequency: number(alias.frequency),
     lands: number(alias.lands),
     fold: number(alias.fold),
     inverted: alias.inverted,
     level: number(alias.level),
     nominal: number(alias.nominal),
+    sum: number(alias.sum),
     relative: number(alias.relative),
     limit: number(alias.limit),
     margin: number(alias.margin),

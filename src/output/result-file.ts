@@ -65,12 +65,16 @@ export interface LimitResult {
 /** One source's strongest landing. */
 export interface AliasResult {
   readonly source: string;
+  /** 1 for the source itself. */
+  readonly harmonic: number;
   readonly frequency: ResultNumber;
   readonly lands: ResultNumber;
   readonly fold: ResultNumber;
   readonly inverted: boolean | null;
   readonly level: ResultNumber;
   readonly nominal: ResultNumber;
+  /** All its harmonics and lines that land, as powers; `level` where only one does. */
+  readonly sum: ResultNumber;
   readonly relative: ResultNumber;
   readonly limit: ResultNumber;
   readonly margin: ResultNumber;

@@ -1,4 +1,6 @@
 /** A reading with what the spec layer itself keeps of it: slices, names, resolutions; other layers see only `Reading`. */
+import { noFiles } from './files/file-source';
+import type { FileSource } from './files/file-source';
 import { nothingShelved } from './files/shelved';
 import type { Shelved } from './files/shelved';
 import { lineIndex } from './line-index';
@@ -17,6 +19,8 @@ export interface Inside {
   readonly resolved: ReadonlyMap<string, Resolved>;
   /** Other files that were read. */
   readonly shelved: Shelved;
+  /** Where their contents came from. */
+  readonly files: FileSource;
 }
 
 /** A reading as `read` makes it. */
@@ -74,4 +78,5 @@ export const nothingRead: Inside = {
   lists: { clocks: [], filters: [], sources: [], masks: [], channels: [] },
   resolved: new Map(),
   shelved: nothingShelved,
+  files: noFiles,
 };

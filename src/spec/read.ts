@@ -1,7 +1,6 @@
 /** Reads a spec's text: slices, names, channels and every fault, taking over from an earlier reading all that has not changed. */
 import { findAcceptances } from './acceptances';
 import { definitionsOf, nameLists } from './definitions';
-import { noFiles } from './files/file-source';
 import type { FileSource } from './files/file-source';
 import { outsideOf } from './files/outside';
 import { Shelf } from './files/shelf';
@@ -24,9 +23,10 @@ import { vocabulary } from './vocabulary';
 /**
  * Reads a text. Never throws and does no I/O; takes time linear in the text.
  * @param previous a reading of an earlier text of the same file: slices and channels on which nothing has changed are taken over
- * @param files contents of the files that the spec names; those that are missing are asked for in `Reading.paths`
+ * @param files contents of the files that the spec names; those that are missing are asked for in `Reading.paths`. The earlier reading's
+ * unless they are given, so that a change of the text alone is tried on the same files
  */
-export function read(text: string, previous?: Reading, files: FileSource = noFiles): Reading {
+export function read(text: string, previous?: Reading, files?: FileSource): Reading {
   return readAccepting(withoutNotComputed, text, previous, files);
 }
 
@@ -35,19 +35,26 @@ export function readAccepting(
   acceptedOf: (resolution: Resolution) => Resolution,
   text: string,
   previous?: Reading,
-  files: FileSource = noFiles,
+  files?: FileSource,
 ): Reading {
   if (text.length > largestSpec) return new SpecReading(tooLarge(text), nothingRead);
   const before = previous === undefined ? nothingRead : insideOf(previous);
   const { slices, faults } = scan(text, vocabulary);
   const { placed, count } = readSlices(slices, before);
   const names = namesIn(placed);
-  const shelf = new Shelf(files, before.shelved);
+  const shelf = new Shelf(files ?? before.files, before.shelved);
   const outside = outsideOf(placed, names, shelf);
   const lists = nameLists(names, outside, before.lists);
   const resolver = new Resolver(definitionsOf(names, lists, placed, outside, shelf), before.resolved, acceptedOf);
   for (const name of names.channels.keys()) resolver.resolve(name);
-  const inside: Inside = { slices: placed, names, lists, resolved: resolver.resolved, shelved: shelf.shelved };
+  const inside: Inside = {
+    slices: placed,
+    names,
+    lists,
+    resolved: resolver.resolved,
+    shelved: shelf.shelved,
+    files: shelf.files,
+  };
   const accepted = findAcceptances(text, (offset) => isInScalar(placed, offset));
   const problems = problemsOf(text, inside, faults, [
     ...accepted.problems,

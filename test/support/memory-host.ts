@@ -26,6 +26,12 @@ export function memoryHost(
     cwd: '/lagoon',
     kindOf: (path) => (path in files ? 'file' : Object.keys(files).some((file) => file.startsWith(`${path}/`)) ? 'folder' : null),
     readFile: (path) => bytes(files[path] ?? ''),
+    loadFile: (root, path) => {
+      const full = posix.resolve(root, path);
+      if (!full.startsWith(`${root}/`)) return { fault: 'outside' };
+      const content = files[full];
+      return content === undefined ? { fault: 'missing' } : { bytes: bytes(content) };
+    },
     specsBelow: (folder) => below(folder).sort(),
     readInput: () => bytes(more.input ?? ''),
     resolve: (path) => posix.resolve('/lagoon', path),

@@ -1,7 +1,7 @@
 /** The files that a spec names, as the caller has loaded them: reading itself does no I/O. */
 
-/** Why a file could not be loaded. */
-export type FileFault = 'missing' | 'unreadable' | 'too-large';
+/** Why a file could not be loaded; `outside` where its path or a link leads out of the root. */
+export type FileFault = 'missing' | 'unreadable' | 'too-large' | 'outside' | 'folder' | 'not-text';
 
 /** What a file holds. */
 export type FileContent = { readonly text: string } | { readonly fault: FileFault };

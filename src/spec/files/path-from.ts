@@ -21,8 +21,14 @@ export function pathFrom(file: string, written: string): PathReading {
   for (const step of written.split('/')) {
     if (step === '' || step === '.') continue;
     if (step !== '..') steps.push(step);
-    else if (steps.pop() === undefined)
-      return { fault: `\`${written}\` leads out of the root, where no file may be named`, meant: null };
+    else if ((steps.pop() ?? '..') === '..') return outOfRoot(written);
   }
+  // A spec that lies outside the root itself has nothing beside it that may be named.
+  if (steps[0] === '..') return outOfRoot(written);
   return steps.length === 0 ? { fault: `\`${written}\` names a folder`, meant: null } : { path: steps.join('/') };
 }
+
+const outOfRoot = (written: string): PathReading => ({
+  fault: `\`${written}\` leads out of the root, where no file may be named`,
+  meant: null,
+});

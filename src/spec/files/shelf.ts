@@ -7,7 +7,7 @@ import type { TableReading, TableUse } from '../tables/spec-table';
 import { largestSpec } from '../too-large';
 import { vocabulary } from '../vocabulary';
 import { largestTable } from './file-source';
-import type { FileSource } from './file-source';
+import type { FileFault, FileSource } from './file-source';
 import type { ReadTable, Shelved, UsedSpec } from './shelved';
 
 /** A file's text, or why there is none. */
@@ -72,10 +72,17 @@ export class Shelf {
     if ('text' in content && content.text.length <= largest) return content;
     const fault = 'text' in content ? 'too-large' : content.fault;
     if (fault === 'too-large') return { code: 'too-large', problem: `\`${path}\` is larger than ${most}, the most that is read` };
-    const why = fault === 'missing' ? 'there is no such file' : 'it cannot be read';
-    return { code: 'file-not-read', problem: `\`${path}\`: ${why}` };
+    return { code: 'file-not-read', problem: `\`${path}\`: ${reasons[fault]}` };
   }
 }
+
+const reasons: Readonly<Record<Exclude<FileFault, 'too-large'>, string>> = {
+  missing: 'there is no such file',
+  unreadable: 'it cannot be read',
+  outside: 'it lies outside the root, where no file may be named',
+  folder: 'it is a folder',
+  'not-text': 'it is not UTF-8 text',
+};
 
 function usedSpec(path: string, text: string, before: UsedSpec | undefined): UsedSpec {
   const { slices } = scan(text, vocabulary);

@@ -35,4 +35,11 @@ describe('a path of a spec', () => {
       assert.equal(reading.meant, meant);
     });
   }
+
+  for (const written of ['x.csv', '../x.csv', '../../x.csv']) {
+    it(`refuses \`${written}\` beside a spec that lies outside the root itself`, () => {
+      const reading = pathFrom('../elsewhere/a.bandkeep.yaml', written);
+      assert.match('fault' in reading ? reading.fault : '', /leads out of the root/);
+    });
+  }
 });
