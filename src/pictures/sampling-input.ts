@@ -1,10 +1,12 @@
 /** The upper pane: what arrives – the wanted bands, each source as it is stated and as the path leaves it, and the path's response across it. */
 import { gainDb, pulseNulls } from '../analysis';
+import type { Enclosure } from '../analysis';
+import type { WantedFigure } from '../analysis';
 import type { Item, Shape } from '../protocol/picture';
 import type { WantedBand } from '../spec/channel';
 import { flat, item } from './items';
 import { sampleCurve } from './sample-curve';
-import type { SamplingView, SourceView } from './sampling-view';
+import type { SamplingView, SourceView, ToneView } from './sampling-view';
 import { filterPlace } from './subject';
 import { levelWords, sentences, stretchWords } from './words';
 
@@ -15,7 +17,8 @@ export const inputPane = 'input';
 export function inputItems(view: SamplingView): Item[] {
   const { channel } = view.subject;
   const wanted = channel.wanted.map((band, index) => wantedItem(view, band, index));
-  return [...wanted, ...view.sources.flatMap((source) => sourceItems(view, source)), pathItem(view)];
+  const zones = view.subject.figures.wanted.flatMap((band, index) => zoneItems(view, band, index));
+  return [...wanted, ...zones, ...view.sources.flatMap((source) => sourceItems(view, source)), pathItem(view)];
 }
 
 /** The series of a source, shared by all that comes of it. */
@@ -49,60 +52,117 @@ function wantedItem(view: SamplingView, band: WantedBand, index: number): Item {
   });
 }
 
+/** The two multiples of half the rate around a band that lies above it: no filter parts the band from what lies just beyond them. */
+function zoneItems(view: SamplingView, { zone, inverted }: WantedFigure, index: number): Item[] {
+  if (zone === 1) return [];
+  const { halfRate } = view.subject.figures;
+  const [low, high] = [(zone - 1) * halfRate, zone * halfRate];
+  const text = `zone ${zone}${inverted ? ', inverted' : ''}`;
+  return [
+    item({
+      id: `zone-${index}`,
+      series: 'zones',
+      pane: inputPane,
+      role: 'rule',
+      name: 'zone of the wanted band',
+      words: sentences(
+        `The wanted band lies in zone ${zone}, ${stretchWords(low, high)}, and comes out ${inverted ? 'inverted' : 'upright'}`,
+      ),
+      place: view.subject.placeOf(['rate']),
+      joins: [`wanted-${index}`],
+      shapes: [
+        { kind: 'rule', frequencyHz: low },
+        { kind: 'rule', frequencyHz: high },
+      ],
+      label: {
+        text,
+        frequencyHz: low,
+        level: view.levels.low + (view.levels.high - view.levels.low) * 0.06,
+        prefer: 'right',
+        priority: 6,
+      },
+    }),
+  ];
+}
+
 function lid(lowHz: number, highHz: number, level: number): Shape {
   return { kind: 'curve', points: flat(lowHz, highHz, level), stroke: 'solid', weight: 'bold' };
 }
 
 function sourceItems(view: SamplingView, source: SourceView): Item[] {
   const { index } = source;
-  const { name, levelDb } = source.source;
+  const { name } = source.source;
   const place = view.subject.placeOf(['unwanted', index]);
-  const range = shownRange(view, source);
-  const stands = stretchWords(source.range.low, source.range.high);
   const common = { series: sourceSeries(index), pane: inputPane, role: 'source', place } as const;
   const stated = item({
     ...common,
     id: `source-${index}`,
     name,
-    words: sentences(
-      `${name}: ${levelWords(levelDb)} at the input, ${source.range.low === source.range.high ? 'at' : 'anywhere in'} ${stands}`,
-      landingWords(view, index),
-    ),
-    shapes: statedShapes(range, levelDb),
+    words: sentences(statedWords(source), landingWords(view, index)),
+    shapes: source.tones.flatMap((tone) => statedShapes(view, tone)),
     joins: [`arrives-${index}`],
-    label: { text: name, frequencyHz: middleOf(range.low, range.high), level: levelDb, prefer: 'above', priority: 8 },
+    label: { text: name, ...labelPoint(view, source), prefer: 'above', priority: 8 },
   });
   const arrives = item({
     ...common,
     id: `arrives-${index}`,
     name: `${name}, behind the path`,
     words: sentences(`${name} behind the path, at the worst of its tolerances`),
-    shapes: arrivingShapes(view, source, range),
+    shapes: source.tones.flatMap((tone) => arrivingShapes(view, tone)),
   });
   return arrives.shapes.length === 0 ? [stated] : [stated, arrives];
 }
 
-/** What of a source lies on the axis; an endless one runs to its end. */
-function shownRange({ input }: SamplingView, { range }: SourceView): { readonly low: number; readonly high: number } {
+function statedWords({ source, range, tones }: SourceView): string {
+  const stands = stretchWords(range.low, range.high);
+  const where = range.low === range.high ? `at ${stands}` : `anywhere in ${stands}`;
+  const entrance = { input: 'at the input', sampler: 'at the sampler', stage: 'in front of a later stage' };
+  const enters = entrance[typeof source.enters === 'object' ? 'stage' : source.enters];
+  if (source.kind === 'spectrum')
+    return `${source.name}: at most ${levelWords(source.levelDb)} ${enters}, ${source.lines ? `${tones.length} lines in` : 'anywhere under its table over'} ${stands}`;
+  const top = Math.max(...tones.map(({ harmonic }) => harmonic));
+  return `${source.name}: ${levelWords(source.levelDb)} ${enters}, ${where}${top > 1 ? `, and its harmonics up to ${top}` : ''}`;
+}
+
+/** Over the source itself; of a table over its highest level. */
+function labelPoint(view: SamplingView, { source, tones, range }: SourceView): { frequencyHz: number; level: number } {
+  const [strongest] = tones;
+  if (source.kind === 'spectrum' && source.lines && strongest !== undefined)
+    return { frequencyHz: strongest.range.low, level: source.levelDb };
+  const low = Math.max(range.low, 0);
+  const frequencyHz = middleOf(low, Math.min(range.high, view.input.highHz));
+  const envelope = strongest?.envelope ?? null;
+  return { frequencyHz, level: source.levelDb + (envelope === null ? 0 : gainDb(envelope, frequencyHz)) };
+}
+
+/** What of a tone lies on the axis; an endless one runs to its end. */
+function shownRange({ input }: SamplingView, { range }: ToneView): Enclosure {
   return { low: Math.max(range.low, 0), high: Math.min(range.high, input.highHz) };
 }
 
-function statedShapes({ low, high }: { readonly low: number; readonly high: number }, level: number): Shape[] {
-  if (low === high) return [{ kind: 'stem', frequencyHz: low, top: level, tone: 'pale' }];
+function statedShapes(view: SamplingView, tone: ToneView): Shape[] {
+  const { low, high } = shownRange(view, tone);
+  const { levelDb, envelope } = tone;
+  if (low === high) return [{ kind: 'stem', frequencyHz: low, top: levelDb, tone: 'pale' }];
+  if (envelope === null) {
+    return [
+      { kind: 'block', lowHz: low, highHz: high, top: levelDb, tone: 'pale' },
+      { kind: 'curve', points: flat(low, high, levelDb), stroke: 'dotted', weight: 'bold' },
+    ];
+  }
+  const points = sampleCurve((f) => levelDb + gainDb(envelope, f), { lowHz: low, highHz: high, ...precision(view) });
   return [
-    { kind: 'block', lowHz: low, highHz: high, top: level, tone: 'pale' },
-    { kind: 'curve', points: flat(low, high, level), stroke: 'dotted', weight: 'bold' },
+    { kind: 'area', upper: points, lower: null, tone: 'pale' },
+    { kind: 'curve', points, stroke: 'dotted', weight: 'bold' },
   ];
 }
 
-function arrivingShapes(
-  view: SamplingView,
-  source: SourceView,
-  { low, high }: { readonly low: number; readonly high: number },
-): Shape[] {
-  const level = (f: number): number => source.levelDb + gainDb(source.response, f);
-  if (low === high) return [{ kind: 'stem', frequencyHz: low, top: level(low), tone: 'solid' }];
-  return source.ranges.flatMap((range): Shape[] => {
+function arrivingShapes(view: SamplingView, tone: ToneView): Shape[] {
+  const { low, high } = shownRange(view, tone);
+  const level = (f: number): number => tone.levelDb + gainDb(tone.response, f);
+  if (low === high)
+    return Number.isFinite(level(low)) ? [{ kind: 'stem', frequencyHz: low, top: level(low), tone: 'solid' }] : [];
+  return tone.ranges.flatMap((range): Shape[] => {
     const highHz = Math.min(range.high, view.input.highHz);
     if (range.low >= highHz) return [];
     const points = sampleCurve(level, { lowHz: range.low, highHz, ...precision(view) });

@@ -8,7 +8,7 @@ import { landingCurves } from './landings';
 import { overLimit } from './over-limit';
 import { sampleCurve } from './sample-curve';
 import { sourceSeries } from './sampling-input';
-import type { SamplingView, SourceView } from './sampling-view';
+import type { SamplingView, SourceView, ToneView } from './sampling-view';
 import { limitFigure } from './subject';
 import { levelWords, marginWords, sentences, stretchWords } from './words';
 
@@ -70,16 +70,21 @@ function inputOf({ subject }: SamplingView, band: WantedFigure, x: number): numb
   return Math.min(band.high, Math.max(band.low, f));
 }
 
-/** One shape for a tone that stands still, else curves with what lies under them. */
+/** One line for each tone that stands still, else curves with what lies under them. */
 function landingShapes(view: SamplingView, source: SourceView): Shape[] {
-  if (source.ranges.length === 0) return [];
-  const { low, high } = source.range;
+  return source.tones.flatMap((tone) => toneShapes(view, tone));
+}
+
+function toneShapes(view: SamplingView, tone: ToneView): Shape[] {
+  if (tone.ranges.length === 0) return [];
+  const { low, high } = tone.range;
   if (low === high) {
-    const top = source.levelDb + gainDb(source.response, low);
-    return [{ kind: 'stem', frequencyHz: foldFrequency(low, source.rateHz).landsHz, top, tone: 'solid' }];
+    const top = tone.levelDb + gainDb(tone.response, low);
+    const { landsHz } = foldFrequency(low, tone.rateHz);
+    return Number.isFinite(top) ? [{ kind: 'stem', frequencyHz: landsHz, top, tone: 'solid' }] : [];
   }
   const through = [...view.protect.flatMap((range) => [range.low, range.high]), ...worstLandings(view)];
-  return landingCurves(source, { through, floor: view.levels.low, tolerance: view.tolerance }).flatMap((points): Shape[] => [
+  return landingCurves(tone, { through, floor: view.levels.low, tolerance: view.tolerance }).flatMap((points): Shape[] => [
     { kind: 'area', upper: points, lower: null, tone: 'pale' },
     { kind: 'curve', points, stroke: 'solid', weight: 'thin' },
   ]);
@@ -115,8 +120,10 @@ function strongestPoint(shapes: readonly Shape[]): { readonly frequencyHz: numbe
   const curves = shapes.flatMap((shape) => (shape.kind === 'curve' ? [shape.points] : []));
   const longest = curves.reduce<Points | null>((best, one) => (best === null || widthOf(one) > widthOf(best) ? one : best), null);
   if (longest === null) {
-    const [stem] = shapes;
-    return stem?.kind === 'stem' ? { frequencyHz: stem.frequencyHz, level: stem.top } : null;
+    const stems = shapes.flatMap((shape) =>
+      shape.kind === 'stem' ? [{ frequencyHz: shape.frequencyHz, level: shape.top }] : [],
+    );
+    return [...stems].sort((a, b) => b.level - a.level)[0] ?? null;
   }
   const index = longest.x.findIndex((x) => x >= (longest.x[0] ?? 0) + widthOf(longest) * 0.7);
   return { frequencyHz: longest.x[index] ?? 0, level: longest.y[index] ?? 0 };
@@ -127,12 +134,19 @@ function widthOf({ x }: Points): number {
 }
 
 function harmItems(view: SamplingView, source: SourceView, shapes: readonly Shape[]): Item[] {
-  const { limitDb } = view;
-  if (limitDb === null) return [];
+  const { limitDb, limitSums } = view;
+  if (limitDb === null || limitSums) return [];
   const over = shapes.flatMap((shape) =>
     shape.kind === 'curve' ? view.protect.flatMap((range) => overLimit(shape.points, () => limitDb, range)) : [],
   );
-  if (over.length === 0) return [];
+  const lines = shapes.flatMap((shape) =>
+    shape.kind === 'stem' && shape.top > limitDb && view.protect.some((range) => holds(range, shape.frequencyHz)) ? [shape] : [],
+  );
+  if (over.length === 0 && lines.length === 0) return [];
+  const where = [
+    ...over.map(({ upper }) => stretchWords(upper.x[0] ?? 0, upper.x.at(-1) ?? 0)),
+    ...lines.map(({ frequencyHz }) => stretchWords(frequencyHz, frequencyHz)),
+  ];
   return [
     item({
       id: `harm-${source.index}`,
@@ -141,20 +155,27 @@ function harmItems(view: SamplingView, source: SourceView, shapes: readonly Shap
       role: 'harm',
       name: `${source.source.name}, over the limit`,
       words: sentences(
-        `${source.source.name} is over the alias limit at ${over.map(({ upper }) => stretchWords(upper.x[0] ?? 0, upper.x[upper.x.length - 1] ?? 0)).join(' and ')}`,
+        `${source.source.name} is over the alias limit at ${where.slice(0, mostPlaces).join(' and ')}${where.length > mostPlaces ? ` and ${where.length - mostPlaces} more` : ''}`,
       ),
       place: view.subject.placeOf(['unwanted', source.index]),
       joins: [`landing-${source.index}`, `source-${source.index}`, `arrives-${source.index}`],
-      shapes: over.map(({ upper, lower }): Shape => ({ kind: 'area', upper, lower, tone: 'solid' })),
+      shapes: [...over.map(({ upper, lower }): Shape => ({ kind: 'area', upper, lower, tone: 'solid' })), ...lines],
     }),
   ];
+}
+
+/** How many places that are over the limit are told in words. */
+const mostPlaces = 4;
+
+function holds({ low, high }: Enclosure, frequencyHz: number): boolean {
+  return low <= frequencyHz && frequencyHz <= high;
 }
 
 function limitItems(view: SamplingView): Item[] {
   const { limitDb, subject } = view;
   const figure = limitFigure(subject, 'alias');
   if (limitDb === null || figure === null) return [];
-  const text = `alias limit ${levelWords(figure.at, figure.unit)}`;
+  const text = `${view.limitSums ? 'limit of all aliases together' : 'alias limit'} ${levelWords(figure.at, figure.unit)}`;
   const shapes = view.protect.map((range): Shape => ({
     kind: 'curve',
     points: flat(range.low, range.high, limitDb),
@@ -232,7 +253,7 @@ function markItems(view: SamplingView, alias: AliasFigure): Item[] {
       role: over ? 'harm' : 'landing',
       name: `strongest landing of ${alias.source}`,
       words: sentences(
-        `${alias.source} at ${stretchWords(frequency, frequency)} lands on ${text.replace(/^(.*) at (.*)$/, '$2 at $1')}${alias.inverted === true ? ', inverted' : ''}`,
+        `${alias.source}${alias.harmonic > 1 ? `, harmonic ${alias.harmonic},` : ''} at ${stretchWords(frequency, frequency)} lands on ${text.replace(/^(.*) at (.*)$/, '$2 at $1')}${alias.inverted === true ? ', inverted' : ''}`,
         marginOf(alias),
       ),
       place: view.subject.placeOf(['unwanted', alias.index]),

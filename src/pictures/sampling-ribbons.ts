@@ -5,7 +5,7 @@ import type { FoldStretch } from './fold-stretches';
 import { item } from './items';
 import { inputPane, sourceSeries } from './sampling-input';
 import { outputPane } from './sampling-output';
-import type { SamplingView, SourceView } from './sampling-view';
+import type { SamplingView, SourceView, ToneView } from './sampling-view';
 import { levelWords, ordinal, sentences, stretchWords } from './words';
 
 /** The most ribbons of one source; beyond that they only cover one another. */
@@ -43,28 +43,40 @@ function wantedRibbons({ subject }: SamplingView): Item[] {
 }
 
 function ribbonsOf(view: SamplingView, source: SourceView): Item[] {
-  const stretches = foldStretches(source, view.protect);
-  const against = view.limitDb ?? view.subject.figures.alias?.level ?? stretches[0]?.strongestDb ?? 0;
+  const stretches = source.tones
+    .flatMap((tone, index) => foldStretches(tone, view.protect).map((stretch): Fold => ({ tone, index, stretch })))
+    .sort((a, b) => b.stretch.strongestDb - a.stretch.strongestDb);
+  const against = view.limitDb ?? view.subject.figures.alias?.level ?? stretches[0]?.stretch.strongestDb ?? 0;
   return stretches
-    .filter((stretch) => stretch.strongestDb > against - reachDb)
+    .filter(({ stretch }) => stretch.strongestDb > against - reachDb)
     .slice(0, mostOfOne)
-    .flatMap((stretch) => partsOf(view, source, stretch))
-    .map(({ part, over }) =>
-      ribbonItem(view, source, part, over ? 'harm' : 'source', 1 - (against - part.strongestDb) / reachDb),
+    .flatMap((fold) =>
+      partsOf(view, fold).map(({ part, over }) => ({ fold, part, role: over ? ('harm' as const) : ('source' as const) })),
+    )
+    .map(({ fold, part, role }) =>
+      ribbonItem(view, source, { ...fold, stretch: part }, role, 1 - (against - part.strongestDb) / reachDb),
     );
 }
 
-function partsOf(
-  { limitDb }: SamplingView,
-  source: SourceView,
-  stretch: FoldStretch,
-): { readonly part: FoldStretch; readonly over: boolean }[] {
-  if (limitDb === null) return [{ part: stretch, over: false }];
-  if (stretch.lowHz === stretch.highHz) return [{ part: stretch, over: stretch.strongestDb > limitDb }];
-  return cutAtLimit(source, stretch, limitDb);
+/** A stretch of one of a source's tones that lands in a protected range. */
+interface Fold {
+  readonly tone: ToneView;
+  /** Which of the source's tones. */
+  readonly index: number;
+  readonly stretch: FoldStretch;
 }
 
-function ribbonItem(view: SamplingView, source: SourceView, part: FoldStretch, role: 'harm' | 'source', strength: number): Item {
+function partsOf(
+  { limitDb, limitSums }: SamplingView,
+  { tone, stretch }: Fold,
+): { readonly part: FoldStretch; readonly over: boolean }[] {
+  if (limitDb === null || limitSums) return [{ part: stretch, over: false }];
+  if (stretch.lowHz === stretch.highHz) return [{ part: stretch, over: stretch.strongestDb > limitDb }];
+  return cutAtLimit(tone, stretch, limitDb);
+}
+
+function ribbonItem(view: SamplingView, source: SourceView, fold: Fold, role: 'harm' | 'source', strength: number): Item {
+  const { stretch: part, tone } = fold;
   const rateHz = view.subject.channel.rate.hz;
   const ends = [landsAt(part, part.lowHz, rateHz), landsAt(part, part.highHz, rateHz)];
   const [landsLowHz, landsHighHz] = [Math.max(0, Math.min(...ends)), Math.max(...ends)];
@@ -72,13 +84,13 @@ function ribbonItem(view: SamplingView, source: SourceView, part: FoldStretch, r
   const isWorst = role === 'harm' && holdsWorst(view, index, part);
   const turned = part.inverted ? ', inverted' : '';
   return item({
-    id: `ribbon-${index}-${part.fold}-${part.inverted ? 'lower' : 'upper'}-${Math.round(part.lowHz)}`,
+    id: `ribbon-${index}-${part.fold}-${part.inverted ? 'lower' : 'upper'}-${Math.round(part.lowHz)}${fold.index === 0 ? '' : `-${fold.index}`}`,
     series: sourceSeries(index),
     pane: inputPane,
     role,
     name: `fold of ${source.source.name}`,
     words: sentences(
-      `${source.source.name}: ${stretchWords(part.lowHz, part.highHz)} lands on ${stretchWords(landsLowHz, landsHighHz)}, ${ordinal(part.fold)} fold${turned}`,
+      `${source.source.name}${tone.harmonic > 1 ? `, harmonic ${tone.harmonic}` : ''}: ${stretchWords(part.lowHz, part.highHz)} lands on ${stretchWords(landsLowHz, landsHighHz)}, ${ordinal(part.fold)} fold${turned}`,
       `At most ${levelWords(part.strongestDb)}${role === 'harm' ? ', over the limit' : view.limitDb === null ? '' : ', within the limit'}`,
     ),
     place: view.subject.placeOf(['unwanted', index]),

@@ -26,6 +26,10 @@ function answerText({ figures, channel }: Subject): string {
   const { alias } = figures;
   if (channel.unwanted.length === 0) return 'nothing unwanted is stated';
   if (alias === null || alias.level === null || alias.lands === null) return 'nothing lands in a protected range';
+  const sum = channel.limits.some(({ key, sum: sums }) => key === 'alias' && sums)
+    ? figures.limits.find(({ limit }) => limit === 'alias')
+    : undefined;
+  if (sum !== undefined && sum.value !== null) return `all aliases together ${levelWords(sum.value, sum.unit)}`;
   const level =
     limitIsRelative(figures.limits) && alias.relative !== null ? levelWords(alias.relative, 'dBc') : levelWords(alias.level);
   return `worst alias ${level} at ${stretchWords(alias.lands, alias.lands)}`;
@@ -56,7 +60,7 @@ function samplingPlot(view: SamplingView): Plot {
 
 /** The legend follows the signal: wanted, sources, path, limit, noise; a source's looks come from its stated item. */
 function seriesRank({ id, role, series }: Item): number {
-  const order = ['wanted', 'source', 'path', 'limit', 'noise'];
+  const order = ['wanted', 'source', 'path', 'zones', 'limit', 'noise'];
   const head = order.findIndex((start) => series.startsWith(start));
   return head * 10 + (id === series || role !== 'harm' ? 0 : 1);
 }

@@ -1,19 +1,34 @@
 /** What the section "before and after sampling" needs to know of a channel, worked out once. */
-import type { Enclosure } from '../analysis';
-import { gainDb } from '../analysis';
-import { sourceRange, outsideWanted } from '../analysis/source-range';
+import { gainDb, inSeries } from '../analysis';
+import type { Enclosure, Response } from '../analysis';
+import { arrivalsOf } from '../analysis/arrivals';
+import type { Arrival } from '../analysis/arrivals';
+import { captureViews } from '../analysis/capture-view';
+import { sourceRange, wantedRanges } from '../analysis/source-range';
+import { without } from '../analysis/intervals';
 import type { FrequencyAxis, LevelAxis } from '../protocol/picture';
-import type { Source } from '../spec/channel';
+import type { Channel, Source } from '../spec/channel';
 import { frequencyAxis, levelAxis } from './axes';
 import type { Arriving } from './landings';
 import { limitFigure } from './subject';
 import type { Subject } from './subject';
 
-/** A source with where it may stand. */
-export interface SourceView extends Arriving {
+/** One tone of a source: itself, a harmonic, a line of its table, or what may stand anywhere under an envelope. */
+export interface ToneView extends Arriving {
+  /** Every frequency at which it may stand. */
+  readonly range: Enclosure;
+  readonly harmonic: number;
+  /** How far its stated level lies below `levelDb` over frequency; null where it is the same everywhere. */
+  readonly envelope: Response | null;
+}
+
+/** A source with what it sends. */
+export interface SourceView {
   readonly source: Source;
   readonly index: number;
+  /** Where it may stand itself. */
   readonly range: Enclosure;
+  readonly tones: readonly ToneView[];
 }
 
 /** The section's common ground. */
@@ -26,6 +41,8 @@ export interface SamplingView {
   readonly protect: readonly Enclosure[];
   /** The alias limit as a level, dBFS; null without one. */
   readonly limitDb: number | null;
+  /** Whether the limit holds for all landings together, so that no single one breaks it. */
+  readonly limitSums: boolean;
   /** How far a straight line may miss a curve, dB. */
   readonly tolerance: number;
 }
@@ -34,16 +51,8 @@ export interface SamplingView {
 export function samplingView(subject: Subject): SamplingView {
   const { figures, channel } = subject;
   const limitDb = limitLevel(subject);
-  const sources = channel.unwanted.map((source, index): SourceView => ({
-    source,
-    index,
-    range: sourceRange(source),
-    ranges: outsideWanted(channel, source),
-    levelDb: source.levelDb,
-    response: subject.largest,
-    rateHz: channel.rate.hz,
-  }));
-  const stated = [...channel.wanted.map((band) => band.levelDb), ...sources.map(({ levelDb }) => levelDb)];
+  const sources = sourceViews(subject);
+  const stated = [...channel.wanted.map((band) => band.levelDb), ...channel.unwanted.map(({ levelDb }) => levelDb)];
   const levels = levelAxis(Math.max(...stated), 1.5, [limitDb, figures.alias?.level ?? null, figures.noise.total]);
   const tolerance = (levels.high - levels.low) / 3000;
   return {
@@ -54,8 +63,31 @@ export function samplingView(subject: Subject): SamplingView {
     levels,
     protect: figures.protected.map(({ low, high }) => ({ low, high: Math.min(high, figures.halfRate) })),
     limitDb,
+    limitSums: channel.limits.some(({ key, sum }) => key === 'alias' && sum),
     tolerance,
   };
+}
+
+/** Tones of a source that are drawn; the weaker ones beyond them would only cover one another. */
+const mostTones = 200;
+
+function sourceViews({ channel }: Subject): readonly SourceView[] {
+  // Levels that hold at the sampler are measured from the reference, so the path counts from there.
+  const viewAt = captureViews(channel, channel.levelsAt === 'sampler' ? channel.referenceHz : null);
+  return channel.unwanted.map((source, index): SourceView => {
+    const { response } = viewAt(source.enters).worst.worst;
+    const tones = [...arrivalsOf(source)]
+      .sort((a, b) => b.levelDb - a.levelDb)
+      .slice(0, mostTones)
+      .map((arrival) => toneView(channel, arrival, response));
+    return { source, index, range: sourceRange(source), tones };
+  });
+}
+
+function toneView(channel: Channel, { harmonic, range, levelDb, envelope }: Arrival, path: Response): ToneView {
+  const response = envelope === null ? path : inSeries([path, envelope]);
+  const ranges = without([range], wantedRanges(channel));
+  return { harmonic, range, ranges, levelDb, response, envelope, rateHz: channel.rate.hz };
 }
 
 function frequencyAxisTo(highHz: number): FrequencyAxis {
@@ -65,20 +97,21 @@ function frequencyAxisTo(highHz: number): FrequencyAxis {
 function inputAxis(subject: Subject, sources: readonly SourceView[], levels: LevelAxis): FrequencyAxis {
   const { channel } = subject;
   const wanted = channel.wanted.flatMap((band) => [band.lowHz, band.highHz]);
-  const edges = sources.flatMap(({ range }) => [range.low, range.high]);
+  const tones = sources.flatMap((source) => source.tones);
+  const edges = tones.flatMap(({ range }) => [range.low, range.high]);
   const finite = [...wanted, ...edges].filter((f) => f > 0 && Number.isFinite(f));
-  const endless = sources.filter(({ range }) => !Number.isFinite(range.high));
+  const endless = tones.filter(({ range }) => !Number.isFinite(range.high));
   const worst = subject.figures.alias?.frequency ?? null;
   const highest = Math.max(...finite, 1.5 * channel.rate.hz, worst !== null && Number.isFinite(worst) ? worst : 0);
-  const fading = endless.map((source) => fadesAt(source, highest, levels.low));
+  const fading = endless.map((tone) => fadesAt(tone, highest, levels.low));
   // A source from 0 Hz up shows the first stretch that lands, too.
-  const fromZero = sources.some(({ range }) => range.low === 0) ? [channel.rate.hz / 20] : [];
+  const fromZero = tones.some(({ range }) => range.low === 0) ? [channel.rate.hz / 20] : [];
   const lowest = Math.min(...finite, ...fromZero);
   return frequencyAxis('Hz at the input', Number.isFinite(lowest) ? lowest : 0, Math.max(highest * 1.1, ...fading));
 }
 
 /** Where an endless source has faded below what is shown; at most 20 times as far. */
-function fadesAt({ levelDb, response }: SourceView, fromHz: number, floorDb: number): number {
+function fadesAt({ levelDb, response }: ToneView, fromHz: number, floorDb: number): number {
   const steps = Array.from({ length: 14 }, (_, index) => fromHz * 10 ** (index / 10));
   return steps.find((f) => levelDb + gainDb(response, f) < floorDb) ?? fromHz * 20;
 }
