@@ -49,12 +49,12 @@ export function figuresOf(figure: LimitFigure): Partial<FindingFigures> {
 }
 
 /** The path of a limit's quantity below its channel. */
-export function limitPath(channel: Channel, figure: LimitFigure): Path {
+export function limitPath(channel: Channel, figure: Pick<LimitFigure, 'limit'>): Path {
   return limitPlace(channel, figure.limit).path;
 }
 
 /** The limit and the filter, as places that a broken limit points to. */
-export function limitAndFilter(channel: Channel, figure: LimitFigure): readonly { path: Path; message: string }[] {
+export function limitAndFilter(channel: Channel, figure: Pick<LimitFigure, 'limit'>): readonly { path: Path; message: string }[] {
   const filter = channel.stages.length === 0 ? [] : [{ path: ['filter'], message: 'the filter' }];
   return [{ path: limitPath(channel, figure), message: 'the limit' }, ...filter];
 }

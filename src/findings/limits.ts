@@ -27,14 +27,26 @@ export function countsSum(channel: Channel, key: JudgedKey): boolean {
 /** Whether the limit would hold at nominal values. */
 export function nominalPasses(figure: LimitFigure, nominal: number | null): boolean {
   if (nominal === null) return false;
+  if (figure.sense === 'inside') return isUpperBound(figure) ? nominal <= figure.at : nominal >= figure.at;
   return figure.sense === 'at-most' ? nominal <= figure.at : nominal >= figure.at;
 }
 
 /** The margin below which a limit that holds is called thin: its own, or 1 dB for levels and ratios, or a tenth of the limit. */
 export function thinBelow(channel: Channel, figure: LimitFigure): number {
-  const own = channel.limits.find((limit) => limit.key === figure.limit)?.margin ?? null;
+  const own = ownMargin(channel, figure.limit);
   if (own !== null) return own;
   return inDecibels.has(figure.limit) ? 1 : Math.abs(figure.at) / 10;
+}
+
+/** The margin that a limit in long form asks for. */
+function ownMargin(channel: Channel, key: JudgedKey): number | null {
+  if (key === 'level') return channel.levelLimit?.margin ?? null;
+  return (channel.limits.find((limit) => limit.key === key) ?? channel.masks.find((mask) => mask.key === key))?.margin ?? null;
+}
+
+/** Whether a figure that must stay inside something is held to a bound above it, as its margin tells. */
+export function isUpperBound({ at, value, margin }: Pick<LimitFigure, 'at' | 'value' | 'margin'>): boolean {
+  return (value ?? 0) > at === (margin ?? 0) < 0;
 }
 
 const inDecibels: ReadonlySet<JudgedKey> = new Set<JudgedKey>(['alias', 'image', 'output', 'snr', 'headroom', 'crosstalk']);

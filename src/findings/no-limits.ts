@@ -31,7 +31,7 @@ export const noLimits: FindingKind = {
   help,
   remedies: [],
   check: ({ channel }) => {
-    if (channel.limits.length > 0) return [];
+    if (channel.limits.length > 0 || channel.levelLimit !== null || channel.masks.length > 0) return [];
     const usual = channel.direction === 'capture' ? '`alias` and `flatness`' : '`image` and `flatness`';
     return [
       findingIn(channel, {

@@ -1,12 +1,12 @@
 /** `thin-margin`: a limit holds, but only just. */
 import type { LimitFigure } from '../analysis/figures';
-import { formatDb } from '../units/format';
+import { formatAmount } from '../units/format';
 import { figuresOf, findingIn, limitPath } from './build';
 import type { Finding } from './finding';
 import { frequencyWords } from './frequency-words';
 import type { FindingKind, Help, Subject } from './kind';
 import { thinBelow } from './limits';
-import { decimalsFor, limitWords, worstWords } from './wording';
+import { decimalsFor, distanceWords, limitWords, valueWords, worstWords } from './wording';
 
 const help: Help = {
   summary: 'A limit holds, but by less than the margin it should have.',
@@ -47,16 +47,16 @@ export const thinMargin: FindingKind = {
 function thin({ channel, figures }: Subject, figure: LimitFigure): Finding {
   const margin = figure.margin ?? 0;
   const decimals = decimalsFor(figure.limit, margin);
-  const value = formatDb(figure.value ?? 0, figure.unit, decimals);
+  const value = valueWords(figure, decimals);
   const source = figure.where?.source === undefined ? '' : `\`${figure.where.source}\` `;
   const at = figure.where === null ? '' : ` (${source}at ${frequencyWords(figures, figure.where.frequency)})`;
   const worst = worstWords(figure.worstAt);
-  const enough = formatDb(thinBelow(channel, figure), 'dB', 3);
+  const enough = formatAmount(thinBelow(channel, figure), figure.unit === 's' ? 's' : 'dB', 3);
   return findingIn(channel, {
     code: 'thin-margin',
     severity: 'warning',
     message:
-      `The limit \`${figure.limit}\` of ${limitWords(figure)} holds by only ${formatDb(margin, 'dB', decimals)}, at ${value}${at}` +
+      `The limit \`${figure.limit}\` of ${limitWords(figure)} holds by only ${distanceWords(figure, decimals)}, at ${value}${at}` +
       `${worst === null ? '' : `, worst case ${worst}`}; less than ${enough} is thin.`,
     path: limitPath(channel, figure),
     ref: figure.ref,

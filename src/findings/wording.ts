@@ -1,17 +1,31 @@
 /** Phrases that several findings share: amounts with their unit, and what was reached at the worst case. */
 import type { LimitFigure, WorstAt } from '../analysis/figures';
-import { formatDb, formatSignedPercent, plainNumber } from '../units/format';
+import { formatAmount, formatDb, formatSignedPercent, formatTime, plainNumber } from '../units/format';
 
 /** Digits behind the point that a limit's figures are printed with, more where the margin would round to nothing. */
 export function decimalsFor(limit: string, margin: number): number {
-  const usual = limit === 'flatness' ? 2 : 1;
+  const usual = hundredths.has(limit) ? 2 : 1;
   const needed = [1, 2, 3].find((decimals) => Math.abs(margin) >= 0.5 * 10 ** -decimals) ?? 3;
   return Math.max(usual, needed);
 }
 
-/** A limit as the spec states it: "−96 dBFS". */
+/** Limits of the gain in the wanted band, whose hundredths matter. */
+const hundredths: ReadonlySet<string> = new Set(['flatness', 'level', 'response', 'through']);
+
+/** A limit as the spec states it: "−96 dBFS", "300 µs". */
 export function limitWords(figure: Pick<LimitFigure, 'at' | 'unit'>): string {
-  return formatDb(figure.at, figure.unit, 3);
+  return formatAmount(figure.at, figure.unit, 3);
+}
+
+/** What a limit is held against: "−91.2 dBFS", "312 µs". */
+export function valueWords({ value, unit }: Pick<LimitFigure, 'value' | 'unit'>, decimals: number): string {
+  return formatAmount(value ?? 0, unit, decimals);
+}
+
+/** How far a limit is missed or kept, without a sign: "4.8 dB", "12 µs". */
+export function distanceWords({ margin, unit }: Pick<LimitFigure, 'margin' | 'unit'>, decimals: number): string {
+  const size = Math.abs(margin ?? 0);
+  return unit === 's' ? formatTime(size) : formatDb(size, 'dB', decimals);
 }
 
 /** The tolerances at a worst case: "corner +4 %", or whose corner it is where more than one varies; null where none does. */
@@ -31,13 +45,16 @@ export interface WorstCase {
   /** Whether the limit would hold without tolerances. */
   readonly nominalPasses: boolean;
   readonly decimals: number;
+  /** `s` where the figure is a time; else it is in some kind of decibels, which go without saying. */
+  readonly unit?: LimitFigure['unit'];
 }
 
 /** " (worst case, corner +4 %; nominal −92.6)", or nothing where no tolerance is at work. */
-export function worstCaseWords({ worstAt, nominal, nominalPasses, decimals }: WorstCase): string {
+export function worstCaseWords({ worstAt, nominal, nominalPasses, decimals, unit }: WorstCase): string {
   const worst = worstWords(worstAt);
   if (worst === null) return '';
-  const plain = nominal === null ? '' : `; nominal ${plainNumber(nominal, decimals)}${nominalPasses ? ', which would pass' : ''}`;
+  if (nominal === null) return ` (worst case, ${worst})`;
+  const plain = `; nominal ${unit === 's' ? formatTime(nominal) : plainNumber(nominal, decimals)}${nominalPasses ? ', which would pass' : ''}`;
   return ` (worst case, ${worst}${plain})`;
 }
 

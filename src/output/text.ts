@@ -2,7 +2,7 @@
 import type { LimitFigure } from '../analysis/figures';
 import { spanOfFinding, type ChannelJudgement, type Finding } from '../findings';
 import { lineIndexOf } from '../spec';
-import { formatDb } from '../units/format';
+import { formatAmount } from '../units/format';
 import type { CheckedFile } from './checked-file';
 import { textProblem } from './finding-result';
 
@@ -68,8 +68,8 @@ function channelLine(judged: ChannelJudgement, paint: Paint): string {
 
 function limitText(limit: LimitFigure): string {
   if (!limit.judged || limit.value === null || limit.margin === null) return `${limit.limit} not judged`;
-  const room = `${formatDb(Math.abs(limit.margin), 'dB', 2)} ${limit.margin < 0 ? 'short' : 'in hand'}`;
-  return `${limit.limit} ${formatDb(limit.value, limit.unit, 2)} (${room})`;
+  const room = `${formatAmount(Math.abs(limit.margin), limit.unit === 's' ? 's' : 'dB', 2)} ${limit.margin < 0 ? 'short' : 'in hand'}`;
+  return `${limit.limit} ${formatAmount(limit.value, limit.unit, 2)} (${room})`;
 }
 
 function sumLine(files: readonly CheckedFile[]): string {

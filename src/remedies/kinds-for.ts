@@ -1,6 +1,7 @@
 /** Which kinds of change are worth trying for one finding: those of its code, less those that cannot move its limit. */
 import { remediesOf, type Code, type Finding, type RemedyKind } from '../findings';
-import type { Channel, LimitKey } from '../spec';
+import type { JudgedKey } from '../analysis';
+import type { Channel } from '../spec';
 
 /** The kinds to try, cheapest first. */
 export function kindsFor(finding: Finding, channel: Channel): readonly RemedyKind[] {
@@ -12,14 +13,19 @@ export function kindsFor(finding: Finding, channel: Channel): readonly RemedyKin
 }
 
 /** What breaks a limit cures a thin margin of it too. */
-const brokenCodes: Readonly<Partial<Record<LimitKey, Code>>> = {
+const brokenCodes: Readonly<Partial<Record<JudgedKey, Code>>> = {
   alias: 'alias-over-limit',
   image: 'image-over-limit',
   flatness: 'flatness-over-limit',
+  response: 'response-over-mask',
+  through: 'response-over-mask',
+  delay: 'delay-over-limit',
+  'delay-spread': 'delay-spread-over-limit',
+  level: 'level-over-limit',
   snr: 'snr-short',
   headroom: 'headroom-short',
 };
 
-function isLimit(limit: string | null): limit is LimitKey {
+function isLimit(limit: string | null): limit is JudgedKey {
   return limit !== null && limit in brokenCodes;
 }

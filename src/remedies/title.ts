@@ -2,7 +2,7 @@
 import type { Figures, LimitFigure } from '../analysis';
 import { decimalsFor, thinBelow, type Finding } from '../findings';
 import type { Channel } from '../spec';
-import { formatDb } from '../units/format';
+import { formatAmount } from '../units/format';
 import { changesWords } from './change';
 import type { Fix } from './fix';
 import { ownMargin, type Session } from './session';
@@ -43,12 +43,12 @@ function isMoved(figure: LimitFigure, before: Figures, channel: Channel): boolea
   return figure.margin <= was - 0.05 && figure.margin < 3 * thinBelow(channel, figure);
 }
 
-function marginWords({ limit, margin }: LimitFigure): string {
-  return `${limit} margin ${formatDb(margin ?? 0, 'dB', decimalsFor(limit, margin ?? 0))}`;
+function marginWords({ limit, margin, unit }: LimitFigure): string {
+  return `${limit} margin ${formatAmount(margin ?? 0, unit === 's' ? 's' : 'dB', decimalsFor(limit, margin ?? 0))}`;
 }
 
 function valueWords({ limit, value, unit, margin }: LimitFigure): string {
-  return `${limit} ${formatDb(value ?? 0, unit, decimalsFor(limit, margin ?? 0))}`;
+  return `${limit} ${formatAmount(value ?? 0, unit, decimalsFor(limit, margin ?? 0))}`;
 }
 
 /** What a change leaves behind that was not there before, or null. */

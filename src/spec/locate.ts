@@ -98,8 +98,8 @@ function stepInto(inside: Inside, at: Located, step: string | number): Located |
     const pair = pairOf(node, step);
     return pair === undefined ? null : atPair(from.base, pair);
   }
-  // The short form of a limit is its `at`.
-  return step === 'at' && node?.form === 'scalar' ? from : null;
+  // The short form of a limit is its `at`; where that is the name of a mask it is the name itself.
+  return step === 'at' && (at.node?.form === 'scalar' || at.node?.form === 'list') ? at : null;
 }
 
 /** Where a value is the name of a filter, a clock, a source or a mask, what it names. */
