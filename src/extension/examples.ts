@@ -26,6 +26,11 @@ export const examples: readonly Example[] = [
     label: 'Fish sounder',
     detail: 'Generate: a held output, its copies, and the filter that keeps them down.',
   },
+  {
+    file: 'echo-receiver.bandkeep.yaml',
+    label: 'Ice echo receiver',
+    detail: 'Capture: an intermediate frequency of 4.2 to 4.5 MHz sampled near 1 MHz, whole and the right way round.',
+  },
 ];
 
 /** Lets the reader choose an example and opens a copy of it. */

@@ -45,6 +45,7 @@ const cases: readonly (readonly [string, string])[] = [
   [exampleText('gate-bearing'), 'bearing-y'],
   [exampleText('gate-bearing-broken'), 'bearing-x'],
   [exampleText('fish-sounder'), 'sounder-drive'],
+  [exampleText('echo-receiver'), 'ice-echo'],
   ...['undersampled', 'bare', 'staircase', 'upper-copy'].map((name) => [odd, name] as const),
 ];
 
