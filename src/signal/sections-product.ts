@@ -1,4 +1,5 @@
 /** |H|² of a rational filter as a product of section ratios, each zero over the pole nearest to it: values, ranges and slopes in u = f². */
+import { ratioTable, tableLogAt } from './ratio-table';
 import type { Enclosure } from './response';
 import {
   hasNull,
@@ -15,24 +16,19 @@ import { doubleSection, pairSection, singleSection, type PairSection, type Root,
 /** The product. */
 export class SectionsProduct {
   private readonly ratios: readonly SectionRatio[];
+  private readonly table: Float64Array;
 
   /** There may be no more zeros than poles; of a conjugate pair both are listed. */
   constructor(poles: readonly Root[], zeros: readonly Root[]) {
     this.ratios = matched(poles, zeros);
+    this.table = ratioTable(this.ratios);
   }
 
   /** ln of the product at a frequency in Hz; −Infinity at a null. */
   logAt(frequencyHz: number): number {
-    let logarithm = 0;
-    let product = 1;
-    for (const ratio of this.ratios) {
-      product *= ratioAt(ratio, frequencyHz);
-      if (product > 1e150 || product < 1e-150) {
-        logarithm += Math.log(product);
-        product = 1;
-      }
-    }
-    return logarithm + Math.log(product);
+    const quick = tableLogAt(this.table, frequencyHz);
+    if (quick !== null) return quick;
+    return this.ratios.reduce((sum, ratio) => sum + Math.log(ratioAt(ratio, frequencyHz)), 0);
   }
 
   /** An enclosure of the logarithm, ratio by ratio; `highHz` may be Infinity. */

@@ -23,10 +23,11 @@ export function median(values: readonly number[]): number {
   return sorted[Math.floor(sorted.length / 2)] ?? NaN;
 }
 
-/** One line of the report: what was measured, against what, the ratio, and the goal. */
-export function report(what: string, ratio: number, goal: number, detail: string): void {
-  const verdict = ratio <= goal ? 'within' : 'OVER';
+/** One line of the report: what was measured, against what, the ratio, and the goal; without a goal the ratio is only shown. */
+export function report(what: string, ratio: number, goal: number | null, detail: string): void {
+  const verdict = goal === null ? '' : ratio <= goal ? 'within' : 'OVER';
+  const wanted = goal === null ? '' : `goal ${String(goal)}`;
   process.stdout.write(
-    `${what.padEnd(58)} ${ratio.toFixed(4).padStart(9)}  goal ${String(goal).padEnd(7)} ${verdict.padEnd(7)} ${detail}\n`,
+    `${what.padEnd(58)} ${ratio.toFixed(4).padStart(9)}  ${wanted.padEnd(12)} ${verdict.padEnd(7)} ${detail}\n`,
   );
 }
