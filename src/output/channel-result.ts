@@ -1,8 +1,8 @@
 /** A channel's figures in the form of the machine-readable result. */
-import type { AliasFigure, Figures, ImageFigure, LimitFigure } from '../analysis/figures';
+import type { AliasFigure, Figures, ImageFigure, LimitFigure, MaskFigure } from '../analysis/figures';
 import type { ChannelJudgement } from '../findings';
 import type { Range } from '../protocol/position';
-import type { AliasResult, ChannelResult, ImageResult, LimitResult } from './result-file';
+import type { AliasResult, ChannelResult, ImageResult, LimitResult, MaskResult } from './result-file';
 import { resultNumber as number } from './result-number';
 
 /**
@@ -12,7 +12,7 @@ import { resultNumber as number } from './result-number';
 export function channelResult(judged: ChannelJudgement, rangeOf: (path: readonly string[]) => Range): ChannelResult {
   const { entry, figures, passes } = judged;
   const head = { name: entry.name, direction: entry.direction, ref: entry.ref, passes };
-  const notYet = { masks: null, spurs: null, settling: null, crosstalk: null, copyWeights: null, parts: null } as const;
+  const notYet = { spurs: null, settling: null, parts: null } as const;
   if (figures === null) return { ...head, ...unknownFigures, ...notYet };
   return { ...head, ...samplingOf(figures), ...levelsOf(figures, rangeOf), ...notYet };
 }
@@ -37,6 +37,7 @@ const unknownFigures = {
   aliasSum: null,
   images: null,
   image: null,
+  masks: null,
   noise: null,
   testTone: null,
   snr: null,
@@ -44,6 +45,8 @@ const unknownFigures = {
   enob: null,
   enobFullScale: null,
   headroom: null,
+  crosstalk: null,
+  copyWeights: null,
 } as const;
 
 function samplingOf(figures: Figures) {
@@ -79,6 +82,7 @@ function levelsOf(figures: Figures, rangeOf: (path: readonly string[]) => Range)
     aliasSum: number(figures.aliasSum),
     images: figures.images.map(imageResult),
     image: figures.image && imageResult(figures.image),
+    masks: figures.masks.map(maskResult),
     noise: {
       quantisation: number(noise.quantisation),
       jitter: number(noise.jitter),
@@ -96,6 +100,8 @@ function levelsOf(figures: Figures, rangeOf: (path: readonly string[]) => Range)
     enob: number(figures.enob),
     enobFullScale: number(figures.enobFullScale),
     headroom: number(figures.headroom),
+    crosstalk: number(figures.crosstalk),
+    copyWeights: figures.copyWeights && figures.copyWeights.map(number),
   };
 }
 
@@ -149,5 +155,16 @@ function imageResult(image: ImageFigure): ImageResult {
     relative: number(image.relative),
     limit: number(image.limit),
     margin: number(image.margin),
+  };
+}
+
+function maskResult({ limit, segment, frequency, value, bound, margin }: MaskFigure): MaskResult {
+  return {
+    limit,
+    segment,
+    frequency: number(frequency),
+    value: number(value),
+    bound: number(bound),
+    margin: number(margin),
   };
 }

@@ -92,6 +92,17 @@ export interface ImageResult {
   readonly margin: ResultNumber;
 }
 
+/** The worst point of one segment of a mask, in dB against `reference`, or in dBFS for `output`. */
+export interface MaskResult {
+  readonly limit: string;
+  /** Its place among the mask's segments, from 0. */
+  readonly segment: number;
+  readonly frequency: ResultNumber;
+  readonly value: ResultNumber;
+  readonly bound: ResultNumber;
+  readonly margin: ResultNumber;
+}
+
 /** One channel; everything below `passes` is null where the channel is not whole. */
 export interface ChannelResult {
   readonly name: string;
@@ -120,8 +131,7 @@ export interface ChannelResult {
   readonly aliasSum: ResultNumber;
   readonly images: readonly ImageResult[] | null;
   readonly image: ImageResult | null;
-  /** Not computed yet. */
-  readonly masks: null;
+  readonly masks: readonly MaskResult[] | null;
   /** Not computed yet. */
   readonly spurs: null;
   readonly noise: Readonly<
@@ -138,10 +148,10 @@ export interface ChannelResult {
   readonly headroom: ResultNumber;
   /** Not computed yet. */
   readonly settling: null;
-  /** Not computed yet. */
-  readonly crosstalk: null;
-  /** Not computed yet. */
-  readonly copyWeights: null;
+  /** In dB; null without time slots. */
+  readonly crosstalk: ResultNumber;
+  /** |c_k|/c_0 for k = 0 … 8; null without a gate. */
+  readonly copyWeights: readonly ResultNumber[] | null;
   /** Not computed yet. */
   readonly parts: null;
 }
