@@ -14,6 +14,7 @@ import { levelRangeOf } from './level';
 import { judgeLimits, limitOf } from './limits';
 import { masksOf } from './masks';
 import { noiseOf } from './noise';
+import { outputMasksOf } from './output-mask';
 import { relayAliases } from './relay/aliases';
 import { copyWeights } from './relay/copy-weights';
 import { crosstalkDb } from './relay/crosstalk';
@@ -44,6 +45,8 @@ function figuresOf(channel: Channel): Figures {
   const headroom = headroomOf(sampled.channel, sampled);
   const level = levelRangeOf(channel, path);
   const masks = masksOf(channel, path);
+  const outputs = outputMasksOf(channel, path);
+  const maskFigures = [...masks.figures, ...outputs.figures];
   const rate = channel.rate.hz;
   const shared = commonZone(wanted);
   // Written out: spreading objects here took longer than the searches.
@@ -60,7 +63,7 @@ function figuresOf(channel: Channel): Figures {
     rateWindow: windowAround(channel),
     wanted,
     protected: protectedAt(channel, rate),
-    limits: judgeLimits(channel, { aliases, images, flatness, noise, headroom, delay, level, masks: masks.figures }),
+    limits: judgeLimits(channel, { aliases, images, flatness, noise, headroom, delay, level, masks: maskFigures }),
     droop: droopOf(channel, path),
     delay: delay.atReference,
     delaySpread: delay.spread,
@@ -82,13 +85,13 @@ function figuresOf(channel: Channel): Figures {
     enob: relayed ? null : effectiveBits(noise.snrDb),
     enobFullScale: relayed || noise.snrDb === null ? null : effectiveBits(noise.snrDb - noise.toneDb),
     headroom: headroom?.valueDb ?? null,
-    masks: masks.figures,
+    masks: maskFigures,
     crosstalk: crosstalkDb(channel),
     copyWeights: copyWeights(channel),
     beyondData: [],
     faults: samplingFaults(channel),
     overlaps: channel.direction === 'generate' ? [] : overlapsOf(channel),
-    evaluations: totalOf([aliases, images, flatness, delay, noise, headroom, level, masks]),
+    evaluations: totalOf([aliases, images, flatness, delay, noise, headroom, level, masks, outputs]),
   };
 }
 

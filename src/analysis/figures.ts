@@ -87,6 +87,14 @@ export interface ImageFigure {
   readonly worstAt: WorstAt | null;
 }
 
+/** What stands at the worst point of an `output` mask. */
+export interface MaskOrigin {
+  /** An unwanted source's name; null for a copy of the wanted band. */
+  readonly source: string | null;
+  /** Where it arrives, or in generate the wanted frequency that it copies. */
+  readonly frequency: number;
+}
+
 /** The worst point of one segment of a mask; in dB against the gain at `reference`, or in dBFS for `output`. */
 export interface MaskFigure {
   readonly limit: MaskLimit['key'];
@@ -102,6 +110,8 @@ export interface MaskFigure {
   readonly margin: number;
   readonly gap: number;
   readonly worstAt: WorstAt | null;
+  /** `output` only, where anything leaves in the segment. */
+  readonly from?: MaskOrigin;
 }
 
 /** Noise in the wanted band as it comes out, dBFS; null where that part does not exist. */

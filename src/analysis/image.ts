@@ -92,7 +92,7 @@ function imagesOfBand(channel: Channel, path: ChannelPath, band: WantedBand, mea
 }
 
 /** A rate, the path at it, and the copies there. */
-interface Assumption {
+export interface Assumption {
   readonly path: ChannelPath;
   readonly copies: WantedCopy;
 }
@@ -101,7 +101,7 @@ interface Assumption {
  * Where the worst is looked for. A hold that follows the rate is the same at every rate when frequencies are counted in periods, so that
  * one search covers the clock's tolerance; a hold of fixed width is looked at with the clock at nominal and at either end.
  */
-function assumptions(channel: Channel, path: ChannelPath, range: Enclosure): readonly Assumption[] {
+export function assumptions(channel: Channel, path: ChannelPath, range: Enclosure): readonly Assumption[] {
   if (followsRate(channel.pulse) || !varies(channel.rate.tolerance)) {
     return [{ path, copies: copiesOf(onAxis(channel, 'periods', range), path.rateHz) }];
   }
@@ -158,7 +158,7 @@ function levelsOf(
 }
 
 /** The rate, over nominal, at which the wanted frequency that was found lies in its band: nominal where it does. */
-function rateScale(channel: Channel, band: WantedBand, wantedHz: number): number {
+export function rateScale(channel: Channel, band: WantedBand, wantedHz: number): number {
   const { low, high } = rateRange(channel.rate);
   const nominal = channel.rate.hz;
   const inside = (scale: number): boolean =>

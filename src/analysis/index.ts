@@ -8,6 +8,7 @@ export type {
   JudgedKey,
   LimitFigure,
   MaskFigure,
+  MaskOrigin,
   NoiseFigures,
   Overlap,
   SamplingFault,
@@ -26,6 +27,9 @@ export {
   type ChannelPath,
   type StagePath,
 } from './channel-path';
+export { relayPath, type RelayPath } from './relay/relay-path';
+export { relayWeights, weightResponse, type RelayWeights, type Weight } from './relay/weights';
+export { hasPulse } from './wanted-pulse';
 export { rateWindowsOf, type RateTable, type RateWindow } from './rate-windows';
 export { keepsWhole } from './wanted';
 export type { Axis } from './axis';

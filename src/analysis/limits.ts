@@ -215,7 +215,13 @@ function maskFigure(channel: Channel, { key, ref }: MaskLimit, masks: readonly M
     gap: found === null ? null : found.gap,
     judged: found !== null,
     passes: found !== null && passes,
-    where: found === null ? null : { frequency: found.frequency },
+    where: found === null ? null : { frequency: found.frequency, ...sourceOf(found) },
     worstAt: found === null ? null : found.worstAt,
   };
+}
+
+/** Which unwanted source it is that leaves there, if it is one. */
+function sourceOf({ from }: MaskFigure): Pick<Where, 'source'> {
+  const source = from?.source ?? null;
+  return source === null ? {} : { source };
 }
