@@ -2,23 +2,12 @@
 import { inSeries } from './channel-path';
 import type { ChannelPath } from './channel-path';
 import type { WorstAt } from './figures';
-import { stretchedStage } from './stage-path';
 import type { StagePath } from './stage-path';
+import { atSetting, factorOf } from './stage-setting';
+import type { StageSetting } from './stage-setting';
+import { endVariants } from './stage-variants';
 import { cornerLabel, deviation, factorsOf, joinWorst, varies } from './tolerances';
 import { hasPulse } from './wanted-pulse';
-
-/** A stage with parts or Qs of it off. */
-export interface StageVariant {
-  /** With its corner as it is. */
-  readonly path: StagePath;
-  /** The factor on its corner. */
-  readonly factor: number;
-  /** What is off besides the corner, and how far, by label. */
-  readonly deviations: WorstAt;
-}
-
-/** What one stage is set to: a factor on its corner, or a variant of it. */
-export type StageSetting = number | StageVariant;
 
 /** A setting for each stage, in order. */
 export type Corners = readonly StageSetting[];
@@ -54,10 +43,12 @@ function fewSets(nominal: Corners, ends: readonly (readonly StageSetting[])[]): 
 }
 
 /** The ends of what one stage may be. */
-function endsOf({ stage }: StagePath): readonly StageSetting[] {
-  if (!varies(stage.cornerTolerance)) return [1];
-  const { low, high } = factorsOf(stage.cornerTolerance);
-  return [low, high];
+function endsOf(path: StagePath): readonly StageSetting[] {
+  const variants = endVariants(path);
+  const { low, high } = factorsOf(path.stage.cornerTolerance);
+  const factors = low === high ? [1] : [low, high];
+  if (variants === null) return factors;
+  return variants.flatMap((variant) => factors.map((factor) => ({ ...variant, factor })));
 }
 
 /** The path with its stages set. */
@@ -69,27 +60,10 @@ export function atCorners(path: ChannelPath, corners: Corners): ChannelPath {
   return { ...path, stages, analogue: inSeries(responses), total: inSeries([...pulses, ...responses]) };
 }
 
-/** A stage at a setting. */
-export function atSetting(stage: StagePath, setting: StageSetting): StagePath {
-  return typeof setting === 'number' ? stretchedStage(stage, setting) : stretchedStage(setting.path, setting.factor);
-}
-
-/** ln of a stage's gain at a setting. */
-export function gainAtSetting(stage: StagePath, setting: StageSetting, frequencyHz: number): number {
-  return typeof setting === 'number'
-    ? stage.response.logGain(frequencyHz / setting)
-    : setting.path.response.logGain(frequencyHz / setting.factor);
-}
-
-/** The factor on a stage's corner at a setting. */
-export function factorOf(setting: StageSetting): number {
-  return typeof setting === 'number' ? setting : setting.factor;
-}
-
 /** What deviates at given settings and how far, by label; null where nothing can. */
-export function deviationsAt(path: ChannelPath, corners: Corners): WorstAt | null {
+export function deviationsAt({ stages }: Pick<ChannelPath, 'stages'>, corners: Corners): WorstAt | null {
   return joinWorst(
-    ...path.stages.map(({ stage }, index) => {
+    ...stages.map(({ stage }, index) => {
       const setting = corners[index] ?? 1;
       const corner = varies(stage.cornerTolerance)
         ? { [cornerLabel(stage)]: deviation(factorOf(setting), stage.cornerTolerance) }

@@ -1,6 +1,6 @@
 /** The proved strongest point of one copy or of a run of copies, as a level or against the same tone's own output, nominally or at the worst parts. */
-import { alongCopy, tiedRatio } from '../signal/copy-axis';
-import type { Enclosure, Response } from '../signal/response';
+import { alongCopy } from '../signal/copy-axis';
+import type { Response } from '../signal/response';
 import { inverse, product } from '../signal/response-algebra';
 import { largestOverBands, largestOverFolds } from '../signal/search';
 import { axisFactors } from './axis';
@@ -11,10 +11,11 @@ import type { Copy, CopyRun, WantedCopy } from './copies';
 import { deviationsAt } from './corners';
 import type { Corners } from './corners';
 import { wholePulse } from './whole-pulse';
-import { factorsOf, partsVary } from './tolerances';
+import { partsVary } from './tolerances';
 import type { WorstAt } from './figures';
 import { nominalPath, worstPath } from './worst-path';
 import type { WorstPath } from './worst-path';
+import { tiedStage } from './worst-stage';
 
 /** How images are measured: their own level, or against the same tone's wanted output. */
 export type Measure = 'level' | 'relative';
@@ -88,12 +89,6 @@ export function strongestOfRun(
   };
 }
 
-/** One part's ratio along a copy, and the factor that makes it largest. */
-interface Tied {
-  readonly response: Response;
-  factorAt(x: number): number;
-}
-
 /**
  * The path with its pulse's envelope alone, where the pulse lasts whole periods: its ripple then depends on x only. It cancels between a
  * copy and the wanted output, and stands beside a level; about 0 Hz a level has the pulse itself.
@@ -128,19 +123,11 @@ function strongestTied(question: ImageQuestion, copy: Copy): ImagePoint | null {
   const rate = path.rateHz;
   const axes = { copy: axisOf(copy, rate), wanted: axisOf(copies.wanted, rate) };
   const periods = axisFactors(path.channel).periods;
-  const tie = (response: Response, factors: Enclosure): Tied => {
-    if (factors.low === factors.high) return { response: plainRatio(response, axes.copy, axes.wanted), factorAt: () => 1 };
-    const tied = tiedRatio(response, factors, axes.copy, axes.wanted);
-    return { response: tied, factorAt: (x) => tied.factorAt(x) };
-  };
-  const stages = path.stages.map(({ stage, response }) => {
-    const own = factorsOf(stage.cornerTolerance);
-    return { own, tied: tie(response, { low: own.low * periods.low, high: own.high * periods.high }) };
-  });
-  const pulse = tie(path.pulse, { low: 1, high: 1 });
-  const found = largestOverBands(product([pulse.response, ...stages.map((one) => one.tied.response)]), [copies.baseband]);
+  const stages = path.stages.map((stage) => tiedStage(stage, periods, axes.copy, axes.wanted));
+  const pulse = product([alongCopy(path.pulse, axes.copy), inverse(alongCopy(path.pulse, axes.wanted))]);
+  const found = largestOverBands(product([pulse, ...stages.map((tied) => tied.response)]), [copies.baseband]);
   if (found === null) return null;
-  const corners = stages.map(({ own, tied }) => Math.min(Math.max(tied.factorAt(found.frequencyHz), own.low), own.high));
+  const corners = stages.map((tied) => tied.settingAt(found.frequencyHz));
   return {
     copy,
     measure: question.measure,
@@ -153,8 +140,4 @@ function strongestTied(question: ImageQuestion, copy: Copy): ImagePoint | null {
     gainLog: 0,
     worstAt: deviationsAt(path, corners),
   };
-}
-
-function plainRatio(response: Response, copy: ReturnType<typeof axisOf>, wanted: ReturnType<typeof axisOf>): Response {
-  return product([alongCopy(response, copy), inverse(alongCopy(response, wanted))]);
 }

@@ -39,7 +39,8 @@ function exponentOf({ filter, table }: StagePath): number {
 /** A frequency above which a stage's gain only falls, or holds. */
 function fallsFromHz(stage: StagePath): number {
   const { filter, response } = stage;
-  if (filter?.turnsHz == null) return filter === null ? farthestHz(stage) : settled * farthestHz(stage);
+  if (filter === null) return farthestHz(stage);
+  if (filter.turnsHz === null) return settled * farthestHz(stage);
   const last = filter.turnsHz.at(-1) ?? 0;
   const falls = response.logGain(last) >= response.logGain(Infinity);
   return falls ? last * factorsOf(stage.stage.cornerTolerance).high : settled * farthestHz(stage);

@@ -1,6 +1,6 @@
 /** Which of a channel's values may deviate and how far, as factors, and how a worst case names where it lies between them. */
 import type { Enclosure } from '../signal/response';
-import type { Channel, Rate, Stage, ToneSource } from '../spec/channel';
+import type { Channel, Rate, Stage, StagePart, ToneSource } from '../spec/channel';
 import type { Tolerance } from '../units/quantity';
 import type { WorstAt } from './figures';
 
@@ -27,14 +27,28 @@ export function toneRange(tone: ToneSource): Enclosure {
 
 /** Whether any stage or the clock deviates: only then does the worst case differ from nominal. */
 export function partsVary(channel: Channel): boolean {
-  return (
-    varies(channel.rate.tolerance) || channel.stages.some((stage) => varies(stage.cornerTolerance) || varies(stage.gainTolerance))
-  );
+  return varies(channel.rate.tolerance) || channel.stages.some(stageVaries);
+}
+
+function stageVaries({ form, parts, cornerTolerance, qTolerance, gainTolerance }: Stage): boolean {
+  if (varies(cornerTolerance) || varies(qTolerance) || varies(gainTolerance)) return true;
+  // Those of an `rc` and a `cr` stand in its corner.
+  return form.kind === 'rlc' && parts.some(({ tolerance }) => varies(tolerance));
 }
 
 /** What a worst case calls a stage's corner, as in "pick-up guard, stage 2, corner". */
 export function cornerLabel(stage: Stage): string {
   return `${stage.label}, corner`;
+}
+
+/** What a worst case calls a part of a stage, as in "trap, l". */
+export function partLabel(stage: Stage, part: StagePart['part']): string {
+  return `${stage.label}, ${part}`;
+}
+
+/** What a worst case calls the Q of a section, counted from 0; of a lone one no number is needed. */
+export function qLabel(stage: Stage, section: number, sections: number): string {
+  return sections === 1 ? `${stage.label}, q` : `${stage.label}, q of section ${section + 1}`;
 }
 
 /** What a worst case calls a stage's gain. */

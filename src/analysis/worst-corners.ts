@@ -1,7 +1,8 @@
 /** The corners at which a figure that is no single gain, such as a noise sum over a tone, is worst: every end, and what lies between. */
 import type { ChannelPath } from './channel-path';
 import { cornerSets } from './corners';
-import type { Corners, StageSetting } from './corners';
+import type { Corners } from './corners';
+import { withFactor } from './stage-setting';
 import { factorsOf, varies } from './tolerances';
 
 /** How many points between the ends of a corner are looked at before the best is refined. */
@@ -34,10 +35,6 @@ export function worstCorners(path: ChannelPath, further: readonly Corners[], mea
     refine(at, low, high);
   });
   return worst;
-}
-
-function withFactor(setting: StageSetting, factor: number): StageSetting {
-  return typeof setting === 'number' ? factor : { ...setting, factor };
 }
 
 /** Evenly spaced points, then a golden section about the best of them. */

@@ -6,11 +6,14 @@ import type { Channel } from '../spec/channel';
 import { axisFactors } from './axis';
 import { inSeries, relativeTo } from './channel-path';
 import type { ChannelPath, StagePath } from './channel-path';
+import { deviationsAt } from './corners';
 import type { Corners } from './corners';
 import type { WorstAt } from './figures';
-import { stretchedFrom, type WorstQuestion } from './stretched-from';
-import { cornerLabel, deviation, factorsOf, gainLabel, partsVary, varies } from './tolerances';
+import type { StageSetting } from './stage-setting';
+import type { WorstQuestion } from './stretched-from';
+import { gainLabel, joinWorst, partsVary, varies } from './tolerances';
 import { worstPulse } from './worst-pulse';
+import { movedStage } from './worst-stage';
 
 /** A path at its worst. */
 export interface WorstPath {
@@ -32,7 +35,7 @@ export function worstPath(path: ChannelPath, question: WorstQuestion): WorstPath
   return {
     response,
     gainLog: stages.reduce((sum, stage) => sum + stage.gainLog, 0),
-    cornersAt: (frequencyHz) => stages.map((stage) => stage.cornerAt(frequencyHz)),
+    cornersAt: (frequencyHz) => stages.map((stage) => stage.settingAt(frequencyHz)),
     worstAt: (frequencyHz) => describe(stages, frequencyHz, withGain ? question.sense : null),
   };
 }
@@ -51,34 +54,27 @@ interface WorstStage {
   readonly path: StagePath;
   readonly responses: readonly Response[];
   readonly gainLog: number;
-  cornerAt(frequencyHz: number): number;
+  settingAt(frequencyHz: number): StageSetting;
 }
 
 function worstStage(path: StagePath, channel: Channel, question: WorstQuestion): WorstStage {
-  const { stage, response } = path;
-  const own = factorsOf(stage.cornerTolerance);
-  const axis = question.axis === 'periods' ? axisFactors(channel).periods : { low: 1, high: 1 };
-  const moved = stretchedFrom(response, { low: own.low * axis.low, high: own.high * axis.high }, question);
+  const { stage } = path;
+  const moved = movedStage(path, question.axis === 'periods' ? axisFactors(channel).periods : { low: 1, high: 1 }, question);
   const gain = question.sense === 'largest' ? stage.gainTolerance.high : stage.gainTolerance.low;
   const gainLog = question.referenceHz === null ? Math.log1p(gain) : 0;
   return {
     path,
     responses: gainLog === 0 ? [moved.response] : [moved.response, constantResponse(gainLog)],
     gainLog,
-    // What the rate moves is no deviation of the corner.
-    cornerAt: (frequencyHz) => Math.min(Math.max(moved.factorAt(frequencyHz), own.low), own.high),
+    settingAt: (frequencyHz) => moved.settingAt(frequencyHz),
   };
 }
 
 function describe(stages: readonly WorstStage[], frequencyHz: number, gainSense: Sense | null): WorstAt | null {
-  const entries = stages.flatMap((worst): readonly (readonly [string, number])[] => {
-    const { stage } = worst.path;
-    const corner = varies(stage.cornerTolerance) ? deviation(worst.cornerAt(frequencyHz), stage.cornerTolerance) : null;
+  const gains = stages.flatMap(({ path: { stage } }): readonly (readonly [string, number])[] => {
     const gain = gainSense === 'largest' ? stage.gainTolerance.high : stage.gainTolerance.low;
-    return [
-      ...(corner === null ? [] : [[cornerLabel(stage), corner] as const]),
-      ...(gainSense !== null && varies(stage.gainTolerance) ? [[gainLabel(stage), gain] as const] : []),
-    ];
+    return gainSense !== null && varies(stage.gainTolerance) ? [[gainLabel(stage), gain]] : [];
   });
-  return entries.length === 0 ? null : Object.fromEntries(entries);
+  const settings = stages.map((worst) => worst.settingAt(frequencyHz));
+  return joinWorst(deviationsAt({ stages: stages.map((worst) => worst.path) }, settings), Object.fromEntries(gains));
 }

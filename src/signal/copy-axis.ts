@@ -1,7 +1,6 @@
 /** One copy of a sampled band as an axis: responses seen along the baseband frequency x, at the output frequency that x leaves at. */
-import { FactorRatio } from './factor-ratio';
+import type { PairRatio } from './pair-ratio';
 import type { Enclosure, Response } from './response';
-import type { StretchedResponse } from './stretched';
 
 /** Where x leaves: at offset + direction·x, in Hz, which is not negative for any x asked for. */
 export interface CopyAxis {
@@ -34,21 +33,24 @@ export function alongCopy(response: Response, axis: CopyAxis): Response {
 }
 
 /**
- * The largest H(f/c)/H(r/c) over every corner factor c, f along one copy and r along another: a copy against the same tone's own
- * output behind the very same part, whatever its tolerance makes of it.
+ * A part seen along two copies at once: x ↦ H(f)/H(r) at its largest, f along one copy and r along the other. So a copy is held against the
+ * same tone's own output behind the very same part, whatever its tolerance makes of it.
  *
- * @param response the part at its nominal corner.
- * @param factors range of c, 0 < low ≤ high.
+ * @param ratio the part at two frequencies.
  * @param copy where f is for each x.
  * @param wanted where r is for each x.
  * Source: interval branch and bound, common practice; slopes by the envelope theorem.
- * @example Math.exp(tiedRatio(filterResponse(realPole(1000)), { low: 0.5, high: 2 }, { offsetHz: 3000, direction: -1 }, { offsetHz: 0, direction: 1 }).logGain(1000)) // 0.790569415
+ * @example tiedAlong(new FactorRatio(filterResponse(realPole(1000)), { low: 1, high: 1 }), { offsetHz: 0, direction: 1 }, { offsetHz: 0, direction: 1 }).logGain(500) // 0
  */
-export function tiedRatio(response: Response, factors: Enclosure, copy: CopyAxis, wanted: CopyAxis): StretchedResponse {
-  const ratio = new FactorRatio(response, factors);
+export function tiedAlong<At extends { readonly logGain: number }>(
+  ratio: PairRatio<At>,
+  copy: CopyAxis,
+  wanted: CopyAxis,
+): Response & { at(x: number): At } {
+  const at = (x: number): At => ratio.at(placeOf(copy, x), placeOf(wanted, x));
   return {
-    logGain: (x) => ratio.at(placeOf(copy, x), placeOf(wanted, x)).logGain,
-    factorAt: (x) => ratio.at(placeOf(copy, x), placeOf(wanted, x)).factor,
+    at,
+    logGain: (x) => at(x).logGain,
     bounds: (low, high) => {
       const boxes = [intervalOf(copy, { low, high }), intervalOf(wanted, { low, high })] as const;
       return { low: ratio.lower(...boxes), high: ratio.upper(...boxes) };

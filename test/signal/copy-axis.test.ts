@@ -1,6 +1,7 @@
 /** Responses seen along a copy, and parts seen at a copy and at the wanted output at once. */
 import assert from 'node:assert/strict';
-import { alongCopy, tiedRatio, type CopyAxis } from '../../src/signal/copy-axis';
+import { alongCopy, tiedAlong, type CopyAxis } from '../../src/signal/copy-axis';
+import { FactorRatio } from '../../src/signal/factor-ratio';
 import { butterworth } from '../../src/signal/families/butterworth';
 import { chebyshev } from '../../src/signal/families/chebyshev';
 import { filterResponse } from '../../src/signal/filter';
@@ -35,10 +36,10 @@ describe('alongCopy', () => {
   });
 });
 
-describe('tiedRatio', () => {
+describe('tiedAlong', () => {
   it('gives a part one corner for the copy and for the wanted output', () => {
     for (const copy of [lower, upper]) {
-      const tied = tiedRatio(stage, factors, copy, baseband);
+      const tied = tiedAlong(new FactorRatio(stage, factors), copy, baseband);
       for (const x of [0, 300, 1200, 1900, 2390]) {
         const f = copy.offsetHz + copy.direction * x;
         let best = -Infinity;
@@ -47,22 +48,22 @@ describe('tiedRatio', () => {
           best = Math.max(best, stage.logGain(f / factor) - stage.logGain(x / factor));
         }
         assertWithin(toDb(tied.logGain(x)), toDb(best), 2e-5, `x = ${x}`);
-        const at = tied.factorAt(x);
+        const at = tied.at(x).factor;
         assertWithin(toDb(stage.logGain(f / at) - stage.logGain(x / at)), toDb(tied.logGain(x)), 1e-9);
       }
     }
   });
 
   it('encloses its gain and its slope', () => {
-    assertBoundsEnclose(tiedRatio(stage, factors, upper, baseband), 1000, 82);
-    assertSlopeEncloses(tiedRatio(stage, factors, upper, baseband), 1000, 83);
+    assertBoundsEnclose(tiedAlong(new FactorRatio(stage, factors), upper, baseband), 1000, 82);
+    assertSlopeEncloses(tiedAlong(new FactorRatio(stage, factors), upper, baseband), 1000, 83);
   });
 
   it('proves images behind a hold, one corner for both, against a plain scan', () => {
     for (const part of [filterResponse(butterworth(5, 26e3)), filterResponse(chebyshev(5, 24e3, 1, 'ripple'))]) {
       const hold = rectangleResponse(1 / 48e3);
       const copy: CopyAxis = { offsetHz: 48e3, direction: -1 };
-      const path = product([alongCopy(hold, copy), inverse(hold), tiedRatio(part, factors, copy, baseband)]);
+      const path = product([alongCopy(hold, copy), inverse(hold), tiedAlong(new FactorRatio(part, factors), copy, baseband)]);
       const images = largestOverBands(path, [{ low: 1e3, high: 20e3 }])!;
       let best = -Infinity;
       for (let i = 0; i <= 90; i += 1) {

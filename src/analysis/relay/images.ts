@@ -1,8 +1,7 @@
 /** What a relay channel lets out of its wanted band besides the band itself: the strongest point of every copy, to infinity. */
-import { alongCopy, tiedRatio } from '../../signal/copy-axis';
 import type { CopyAxis } from '../../signal/copy-axis';
 import { inverse, product } from '../../signal/response-algebra';
-import type { Enclosure, Response } from '../../signal/response';
+import type { Response } from '../../signal/response';
 import type { CopyExtreme } from '../../signal/search';
 import type { Channel, Limit, WantedBand } from '../../spec/channel';
 import { axisFactors } from '../axis';
@@ -14,8 +13,10 @@ import { toDb } from '../decibels';
 import { imagesFrom, measureOf } from '../image';
 import type { Image, Images } from '../image';
 import type { Measure } from '../image-search';
-import { factorsOf, joinWorst } from '../tolerances';
+import { joinWorst } from '../tolerances';
 import type { WorstAt } from '../figures';
+import { tiedStage } from '../worst-stage';
+import type { MovedStage } from '../worst-stage';
 import { strongestArriving } from './copy-search';
 import { inView, rateDeviation, rateScale, relayViews, sideOf } from './views';
 import type { RelayView } from './views';
@@ -119,11 +120,11 @@ function relativeQuestion(view: RelayView): ImageQuestion {
   return {
     input: inverse(product([wanted, least.response])),
     output: most.response,
-    tied: ties === null ? null : (axis) => product([inverse(wanted), ...ties.map((tie) => tie.along(axis))]),
+    tied: ties === null ? null : (axis) => product([inverse(wanted), ...ties.map((tie) => tie(axis).response)]),
     pointOf: (extreme, statedDb) => {
       const axis = axisOf(extreme, relay.rateHz);
       const corners =
-        ties === null || extreme.copy === Infinity ? nominal : ties.map((tie) => tie.factorAt(axis, extreme.nearHz));
+        ties === null || extreme.copy === Infinity ? nominal : ties.map((tie) => tie(axis).settingAt(extreme.nearHz));
       return {
         view,
         extreme,
@@ -136,26 +137,17 @@ function relativeQuestion(view: RelayView): ImageQuestion {
 }
 
 /** One stage seen at both frequencies at once. */
-interface Tie {
-  along(axis: CopyAxis): Response;
-  factorAt(axis: CopyAxis, x: number): number;
-}
+type Tie = (axis: CopyAxis) => MovedStage;
 
 const same: CopyAxis = { offsetHz: 0, direction: 1 };
 
 function tiesOf({ relay, channel }: RelayView): readonly Tie[] {
   const { periods } = axisFactors(channel);
-  return relay.output.stages.map(({ stage, response }): Tie => {
-    const own = factorsOf(stage.cornerTolerance);
-    const factors: Enclosure = { low: own.low * periods.low, high: own.high * periods.high };
-    if (factors.low === factors.high) {
-      return { along: (axis) => product([alongCopy(response, axis), inverse(response)]), factorAt: () => 1 };
-    }
-    return {
-      along: (axis) => tiedRatio(response, factors, axis, same),
-      factorAt: (axis, x) => Math.min(Math.max(tiedRatio(response, factors, axis, same).factorAt(x), own.low), own.high),
-    };
-  });
+  return relay.output.stages.map(
+    (stage): Tie =>
+      (axis) =>
+        tiedStage(stage, periods, axis, same),
+  );
 }
 
 /** The branch of a copy that a point lies on. */

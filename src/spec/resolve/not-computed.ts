@@ -1,5 +1,5 @@
 /** Refuses, at its key, what the text may say and the analysis does not compute yet, so that nothing is passed over in silence. */
-import type { Channel, Stage } from '../channel';
+import type { Channel, Stage, StageForm } from '../channel';
 import type { Path } from '../place';
 import { Report } from './report';
 import type { Resolution } from './resolution';
@@ -27,24 +27,20 @@ function notComputed(channel: Channel): readonly NotComputed[] {
       const what = stageWhat(stage);
       return what === null ? [] : [{ path: stagePath(channel, index), what }];
     }),
-    ...limitsOf(channel),
   ];
 }
 
-/** Parts of an `rlc` and Qs that may be off vary by themselves. */
-function stageWhat({ form, parts, qTolerance }: Stage): string | null {
-  if (qTolerance.low !== 0 || qTolerance.high !== 0) return 'a tolerance of `q`';
-  const loose = form.kind === 'rlc' && parts.some(({ tolerance }) => tolerance.low !== 0 || tolerance.high !== 0);
-  return loose ? 'a tolerance of a part of `rlc`' : null;
+/** Of this many sections every combination of their Qs is looked at, which doubles with each. */
+const mostLooseSections = 4;
+
+function stageWhat({ form, qTolerance }: Stage): string | null {
+  if (qTolerance.low === 0 && qTolerance.high === 0) return null;
+  return sectionsOf(form) > mostLooseSections ? `a tolerance of \`q\` over more than ${mostLooseSections} sections` : null;
 }
 
-/** The limits of one value that are judged. */
-const judged: readonly string[] = ['alias', 'image', 'flatness', 'delay', 'delay-spread', 'snr', 'headroom', 'crosstalk'];
-
-function limitsOf({ limits, masks }: Channel): readonly NotComputed[] {
-  const keys = [
-    ...limits.flatMap(({ key }) => (judged.includes(key) ? [] : [key])),
-    ...masks.flatMap(({ key }) => (key === 'output' ? [key] : [])),
-  ];
-  return keys.map((key) => ({ path: ['limits', key], what: `the limit \`${key}\`` }));
+/** How many sections of a stage have a Q, at most. */
+function sectionsOf(form: StageForm): number {
+  if (form.kind === 'roots') return form.poles.filter(({ im }) => im > 0).length;
+  if (form.kind !== 'family') return 1;
+  return form.filterKind === 'lowpass' || form.filterKind === 'highpass' ? Math.floor(form.order / 2) : form.order;
 }
