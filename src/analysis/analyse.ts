@@ -3,6 +3,7 @@ import type { Channel } from '../spec/channel';
 import { aliasesOf } from './alias';
 import { beyondDataOf, withheld } from './beyond-data';
 import { channelPath } from './channel-path';
+import type { ChannelPath } from './channel-path';
 import { delayOf } from './delay';
 import { effectiveBits } from './effective-bits';
 import type { Figures, WantedFigure } from './figures';
@@ -12,6 +13,7 @@ import { imagesOf } from './image';
 import { protectedAt } from './landing-point';
 import { levelRangeOf } from './level';
 import { judgeLimits, limitOf } from './limits';
+import type { Judged } from './limits';
 import { masksOf } from './masks';
 import { noiseOf } from './noise';
 import { outputMasksOf } from './output-mask';
@@ -33,20 +35,8 @@ export function analyse(channel: Channel): Figures {
 function figuresOf(channel: Channel): Figures {
   const path = channelPath(channel);
   const wanted = wantedFigures(channel);
+  const { aliases, images, noise, ...others } = searchesOf(channel, path);
   const relayed = channel.direction === 'relay';
-  const aliasLimit = limitOf(channel, 'alias');
-  const imageLimit = limitOf(channel, 'image');
-  const aliases = relayed ? relayAliases(channel, aliasLimit) : aliasesOf(channel, aliasLimit);
-  const images = relayed ? relayImages(channel, imageLimit) : imagesOf(channel, path, imageLimit);
-  const sampled = relayed ? relayPath(channel).input : path;
-  const flatness = flatnessOf(channel, path);
-  const delay = delayOf(channel, path, { delay: limitOf(channel, 'delay'), spread: limitOf(channel, 'delay-spread') });
-  const noise = noiseOf(channel, path, limitOf(channel, 'snr'));
-  const headroom = headroomOf(sampled.channel, sampled);
-  const level = levelRangeOf(channel, path);
-  const masks = masksOf(channel, path);
-  const outputs = outputMasksOf(channel, path);
-  const maskFigures = [...masks.figures, ...outputs.figures];
   const rate = channel.rate.hz;
   const shared = commonZone(wanted);
   // Written out: spreading objects here took longer than the searches.
@@ -63,10 +53,10 @@ function figuresOf(channel: Channel): Figures {
     rateWindow: windowAround(channel),
     wanted,
     protected: protectedAt(channel, rate),
-    limits: judgeLimits(channel, { aliases, images, flatness, noise, headroom, delay, level, masks: maskFigures }),
+    limits: judgeLimits(channel, { aliases, images, noise, ...others }),
     droop: droopOf(channel, path),
-    delay: delay.atReference,
-    delaySpread: delay.spread,
+    delay: others.delay.atReference,
+    delaySpread: others.delay.spread,
     aliases: aliases.figures,
     alias: aliases.strongest,
     aliasSum: aliases.sumDb,
@@ -76,7 +66,7 @@ function figuresOf(channel: Channel): Figures {
     testTone: {
       frequency: channel.testTone.frequencyHz,
       level: channel.testTone.levelDb,
-      atSampler: relayed ? testToneLevelDb(sampled.channel, sampled) : noise.toneDb,
+      atSampler: relayed ? sampledToneDb(channel) : noise.toneDb,
     },
     snr: noise.snrDb,
     // Distortion and interleave products do not exist yet, so nothing sets the two apart.
@@ -84,15 +74,40 @@ function figuresOf(channel: Channel): Figures {
     // A relay has no words, so it has no bits.
     enob: relayed ? null : effectiveBits(noise.snrDb),
     enobFullScale: relayed || noise.snrDb === null ? null : effectiveBits(noise.snrDb - noise.toneDb),
-    headroom: headroom?.valueDb ?? null,
-    masks: maskFigures,
+    headroom: others.headroom?.valueDb ?? null,
+    masks: others.masks,
     crosstalk: crosstalkDb(channel),
     copyWeights: copyWeights(channel),
     beyondData: [],
     faults: samplingFaults(channel),
     overlaps: channel.direction === 'generate' ? [] : overlapsOf(channel),
-    evaluations: totalOf([aliases, images, flatness, delay, noise, headroom, level, masks, outputs]),
+    evaluations: others.evaluations,
   };
+}
+
+/** Everything that limits are judged on, and what it took. */
+function searchesOf(channel: Channel, path: ChannelPath): Judged & { readonly evaluations: number } {
+  const relayed = channel.direction === 'relay';
+  const aliasLimit = limitOf(channel, 'alias');
+  const imageLimit = limitOf(channel, 'image');
+  const aliases = relayed ? relayAliases(channel, aliasLimit) : aliasesOf(channel, aliasLimit);
+  const images = relayed ? relayImages(channel, imageLimit) : imagesOf(channel, path, imageLimit);
+  const sampled = relayed ? relayPath(channel).input : path;
+  const flatness = flatnessOf(channel, path);
+  const delay = delayOf(channel, path, { delay: limitOf(channel, 'delay'), spread: limitOf(channel, 'delay-spread') });
+  const noise = noiseOf(channel, path, limitOf(channel, 'snr'));
+  const headroom = headroomOf(sampled.channel, sampled);
+  const level = levelRangeOf(channel, path);
+  const gains = masksOf(channel, path);
+  const outputs = outputMasksOf(channel, path);
+  const evaluations = totalOf([aliases, images, flatness, delay, noise, headroom, level, gains, outputs]);
+  return { aliases, images, flatness, delay, noise, headroom, level, masks: [...gains.figures, ...outputs.figures], evaluations };
+}
+
+/** The test tone as a relay samples it: behind the input filter alone. */
+function sampledToneDb(channel: Channel): number {
+  const { input } = relayPath(channel);
+  return testToneLevelDb(input.channel, input);
 }
 
 /** A band of the zone that all wanted bands share; null where they do not. */
