@@ -77,7 +77,7 @@ describe('a relay against a plain grid', () => {
             { arrives: { low, high: low + width }, leaves: [zone], first: 0, last: copies },
             4000,
           );
-          if (figure?.level == null) {
+          if (figure === undefined || figure.level === null) {
             assert.equal(grid, -Infinity);
             return;
           }

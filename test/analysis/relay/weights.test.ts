@@ -19,9 +19,9 @@ const tracking = (share: number): Sampling => ({ pulse: { shape: 'instant' }, ga
 /** dB of copy k for an input at f ≥ 0. */
 function weightDb(sampling: Sampling, rateHz: number, copy: number, inputHz: number): number {
   const output = inputHz + copy * rateHz;
-  const { copy: weightOf } = relayWeights(sampling, rateHz);
+  const weights = relayWeights(sampling, rateHz);
   // Copy k at a negative output is copy −k at the positive one.
-  const response = weightResponse(weightOf(output < 0 ? -copy : copy));
+  const response = weightResponse(weights.copy(output < 0 ? -copy : copy));
   return (20 / Math.LN10) * response.logGain(Math.abs(output));
 }
 
