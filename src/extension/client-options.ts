@@ -6,7 +6,8 @@ import { specSelector } from './specs';
 
 /** Options for a client whose output goes to `output`. */
 export function clientOptions(extensionUri: vscode.Uri, output: vscode.LogOutputChannel): LanguageClientOptions {
-  const options: ServerOptions = { docsBase: vscode.Uri.joinPath(extensionUri, 'docs', 'findings').toString() };
+  const docsBase = vscode.Uri.joinPath(extensionUri, 'docs', 'findings').toString();
+  const options: ServerOptions = { docsBase, readsFiles: true };
   return {
     documentSelector: specSelector,
     initializationOptions: options,

@@ -8,11 +8,13 @@ import {
   locateRequest,
   pictureRequest,
   placeAtRequest,
+  readFileRequest,
   type LocateParams,
   type PictureParams,
   type PictureResult,
   type PlaceAtParams,
 } from '../protocol/requests';
+import { readFile } from './read-file';
 
 /** Whether the server can be asked. */
 export type ServerState = 'starting' | 'ready' | 'stopped';
@@ -27,6 +29,7 @@ export class ServerLink implements vscode.Disposable {
     client.onDidChangeState(({ newState }) => {
       this.changed.fire(stateOf(newState));
     });
+    client.onRequest(readFileRequest, readFile);
   }
 
   get state(): ServerState {

@@ -15,3 +15,5 @@ export { channelAt, locate, placeNameAt } from './locate';
 export { unproved, unprovedIn } from './proving';
 export type { SpecDocument } from './spec-document';
 export type { Finding } from '../findings';
+export { largestTable } from '../spec';
+export type { FileContent, FileSource } from '../spec';

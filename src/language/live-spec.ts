@@ -1,8 +1,9 @@
 /** An open spec over its versions: reads and judges the newest text, and reuses all that an edit left alone. */
 import { createJudgeStore, judging, type Finding, type Judgement } from '../findings';
 import { curing } from '../remedies';
-import { read, type Reading } from '../spec';
+import type { FileSource, Reading } from '../spec';
 import { createCureShelf } from './cure-shelf';
+import { NewestText } from './newest-text';
 import type { SpecDocument } from './spec-document';
 
 /** How much work the newest judged version was, for tests and benchmarks. */
@@ -18,23 +19,30 @@ export interface SpecCounts {
 export interface LiveSpec {
   readonly uri: string;
   readonly version: number;
+  /** Goes up with every newer text and with every change of a file that it leans on. */
+  readonly revision: number;
+  /** The other files that the text last read leans on, from its root. */
+  readonly paths: readonly string[];
   /** The newest version, judged; null while it is not. */
   readonly document: SpecDocument | null;
   readonly counts: SpecCounts | null;
   /** Takes a newer text; nothing is computed until it is asked for. */
   change(version: number, text: string): void;
+  /** Drops what was judged, since a file that the spec leans on has other contents now. */
+  refresh(): void;
+  /** Reads the newest text with the files as they are, and gives the paths of all that it leans on. */
+  read(): readonly string[];
   /** Judges the newest version, yielding between channels. The caller drops it when a newer version arrives. */
   judging(): Generator<void, SpecDocument>;
   /** Searches for a finding's fixes and keeps the outcome with the document. */
   curing(document: SpecDocument, finding: Finding): Generator<void, void>;
 }
 
-/** Opens a spec. */
-export function openSpec(uri: string, version: number, text: string): LiveSpec {
+/** Opens a spec. `files` are those that it names, as far as they have been loaded. */
+export function openSpec(uri: string, version: number, text: string, files?: FileSource): LiveSpec {
   const store = createJudgeStore();
   const shelf = createCureShelf();
-  let newest = { version, text };
-  let reading: Reading | null = null;
+  const newest = new NewestText(version, text, files);
   let document: SpecDocument | null = null;
   let counts: SpecCounts | null = null;
 
@@ -53,6 +61,12 @@ export function openSpec(uri: string, version: number, text: string): LiveSpec {
     get version() {
       return newest.version;
     },
+    get revision() {
+      return newest.revision;
+    },
+    get paths() {
+      return newest.paths;
+    },
     get document() {
       return document;
     },
@@ -60,15 +74,20 @@ export function openSpec(uri: string, version: number, text: string): LiveSpec {
       return counts;
     },
     change(nextVersion, nextText) {
-      newest = { version: nextVersion, text: nextText };
+      newest.change(nextVersion, nextText);
       document = null;
     },
+    refresh() {
+      newest.refresh();
+      document = null;
+    },
+    read: () => newest.read().paths,
     *judging() {
       const before = store.analysed;
-      reading = reading?.text === newest.text ? reading : read(newest.text, reading ?? undefined);
-      const judgement = yield* judging(reading, store);
+      const current = newest.current();
+      const judgement = yield* judging(current, store);
       document = documentOf(judgement);
-      counts = countsOf(reading, store.analysed - before);
+      counts = countsOf(current, store.analysed - before);
       return document;
     },
     *curing(on, finding) {

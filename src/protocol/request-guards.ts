@@ -1,7 +1,7 @@
 /** Guards for the parameters of requests, standard and our own: the server puts them at its door. */
 import { isCount, isNullOr, isPlaceName, isRecord, isText } from './guards';
 import type { Position, Range } from './position';
-import type { CountsParams, LocateParams, PictureParams, PlaceAtParams } from './requests';
+import type { CountsParams, LocateParams, PictureParams, PlaceAtParams, ReadFileResult } from './requests';
 
 /** Parameters of a standard request about a document. */
 export function isAboutDocument(value: unknown): value is { textDocument: { uri: string } } {
@@ -36,6 +36,18 @@ export function isCountsParams(value: unknown): value is CountsParams {
 /** Parameters of `textDocument/codeAction`. */
 export function isAboutRange(value: unknown): value is { textDocument: { uri: string }; range: Range } {
   return isRecord(value) && isRange(value['range']) && isAboutDocument(value);
+}
+
+/** The client's answer to `bandkeep/readFile`. */
+export function isReadFileResult(value: unknown): value is ReadFileResult {
+  return isRecord(value) && (isText(value['text']) || (isText(value['fault']) && fileFaults.has(value['fault'])));
+}
+
+const fileFaults: ReadonlySet<string> = new Set(['missing', 'unreadable', 'too-large', 'outside', 'folder', 'not-text']);
+
+/** Whether the client has said that it answers `bandkeep/readFile`. */
+export function readsFilesOf(options: unknown): boolean {
+  return isRecord(options) && options['readsFiles'] === true;
 }
 
 /** The server's options as the client may hand them over. */

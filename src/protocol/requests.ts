@@ -59,8 +59,25 @@ export type CountsResult = {
   readonly channelsAnalysed: number;
 } | null;
 
+/** Server → extension, when a spec names a file that the server cannot reach itself: in a browser, or in a workspace that is on no disk. */
+export const readFileRequest = 'bandkeep/readFile';
+
+/** Files with more bytes than this are not sent; no table that large is read. */
+export const largestFile = 64 * 1024 * 1024;
+
+/** Parameters of `bandkeep/readFile`. */
+export interface ReadFileParams {
+  readonly uri: string;
+}
+
+/** The file's text, or why there is none. */
+export type ReadFileResult =
+  { readonly text: string } | { readonly fault: 'missing' | 'unreadable' | 'too-large' | 'outside' | 'folder' | 'not-text' };
+
 /** What the extension hands the server in `initializationOptions`. */
 export interface ServerOptions {
   /** URI of the folder that holds a page for every finding code; null: no links. */
   readonly docsBase: string | null;
+  /** Whether it answers `bandkeep/readFile`. */
+  readonly readsFiles: boolean;
 }

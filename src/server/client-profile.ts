@@ -1,7 +1,7 @@
 /** What the client said about itself when it connected. */
 import type { InitializeParams } from 'vscode-languageserver';
 import type { ClientAbilities } from '../language';
-import { docsBaseOf } from '../protocol/request-guards';
+import { docsBaseOf, readsFilesOf } from '../protocol/request-guards';
 import type { ServerOptions } from '../protocol/requests';
 
 /** The client's abilities and wishes; before `initialize` it is taken to have none. */
@@ -11,6 +11,14 @@ export interface ClientProfile {
   readonly hierarchicalSymbols: boolean;
   readonly abilities: ClientAbilities;
   readonly options: ServerOptions;
+  /** URIs of the workspace's folders. */
+  readonly folders: readonly string[];
+  /** It tells of changed files when it is asked to. */
+  readonly watchesFiles: boolean;
+  /** It asks for diagnostics again when it is told that they may have changed. */
+  readonly refreshesDiagnostics: boolean;
+  /** It tells when the workspace has other folders. */
+  readonly tellsFolders: boolean;
 }
 
 /** A client that can do nothing special. */
@@ -25,11 +33,17 @@ export const plainClient: ClientProfile = {
     disabledActions: false,
     markdown: false,
   },
-  options: { docsBase: null },
+  options: { docsBase: null, readsFiles: false },
+  folders: [],
+  watchesFiles: false,
+  refreshesDiagnostics: false,
+  tellsFolders: false,
 };
 
 /** Reads the profile from the first request. */
-export function profileOf({ capabilities, initializationOptions }: InitializeParams): ClientProfile {
+export function profileOf(params: InitializeParams): ClientProfile {
+  const { capabilities } = params;
+  const given: unknown = params.initializationOptions;
   const { textDocument, workspace } = capabilities;
   return {
     pullsDiagnostics: textDocument?.diagnostic !== undefined,
@@ -43,6 +57,18 @@ export function profileOf({ capabilities, initializationOptions }: InitializePar
       disabledActions: textDocument?.codeAction?.disabledSupport === true,
       markdown: textDocument?.hover?.contentFormat?.includes('markdown') === true,
     },
-    options: { docsBase: docsBaseOf(initializationOptions) },
+    options: { docsBase: docsBaseOf(given), readsFiles: readsFilesOf(given) },
+    folders: foldersOf(params),
+    watchesFiles: workspace?.didChangeWatchedFiles?.dynamicRegistration === true,
+    refreshesDiagnostics: workspace?.diagnostics?.refreshSupport === true,
+    tellsFolders: workspace?.workspaceFolders === true,
   };
+}
+
+/** The folders, or the one root of a client that knows no folders. */
+function foldersOf(params: InitializeParams): readonly string[] {
+  const folders = params.workspaceFolders?.map(({ uri }) => uri) ?? [];
+  // What older clients send; the protocol keeps it for them.
+  const root = (params as { readonly rootUri?: string | null }).rootUri ?? null;
+  return folders.length > 0 || root === null ? folders : [root];
 }

@@ -9,6 +9,7 @@ const turns = new MessageChannel();
 
 startServer(createConnection(new BrowserMessageReader(self), new BrowserMessageWriter(self)), {
   version: BANDKEEP_VERSION,
+  loadFile: null,
   now: () => performance.now(),
   yieldControl: () =>
     new Promise((resolve) => {

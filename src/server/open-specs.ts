@@ -2,11 +2,14 @@
 import { runInSlices } from '../jobs';
 import { openSpec, type LiveSpec, type SpecDocument } from '../language';
 import type { Platform } from './platform';
+import type { WorkspaceFiles } from './workspace-files';
 
 /** The open specs by the URI that the client gave them. */
 export interface OpenSpecs {
   /** Opens a spec or takes its newer text. */
   change(uri: string, version: number, text: string): void;
+  /** Has a spec judged anew, since a file that it leans on has changed. */
+  refresh(uri: string): void;
   close(uri: string): void;
   get(uri: string): LiveSpec | undefined;
   all(): readonly LiveSpec[];
@@ -16,24 +19,31 @@ export interface OpenSpecs {
   judged(uri: string): Promise<SpecDocument | null>;
 }
 
-/** None open yet. */
-export function createOpenSpecs(platform: Platform): OpenSpecs {
+/** None open yet; `files` are those that specs name. */
+export function createOpenSpecs(platform: Platform, files: WorkspaceFiles | null = null): OpenSpecs {
   const specs = new Map<string, LiveSpec>();
-  const running = new Map<LiveSpec, { readonly version: number; readonly end: Promise<unknown> }>();
+  const running = new Map<LiveSpec, { readonly revision: number; readonly end: Promise<unknown> }>();
+
+  /** Reading tells which files are needed; one of them may need more. */
+  const loadFiles = async (spec: LiveSpec, cancelled: () => boolean): Promise<void> => {
+    if (files === null) return;
+    while (!cancelled() && (await files.load(spec.uri, spec.read()))) continue;
+  };
 
   const judgeNewest = async (spec: LiveSpec): Promise<void> => {
-    const { version } = spec;
-    const cancelled = (): boolean => specs.get(spec.uri) !== spec || spec.version !== version;
+    const { revision } = spec;
+    const cancelled = (): boolean => specs.get(spec.uri) !== spec || spec.revision !== revision;
+    await loadFiles(spec, cancelled);
     await runInSlices(spec.judging(), { ...platform, cancelled });
   };
 
   const judge = async (spec: LiveSpec): Promise<void> => {
     const already = running.get(spec);
-    if (already?.version === spec.version) {
+    if (already?.revision === spec.revision) {
       await already.end;
       return;
     }
-    const run = { version: spec.version, end: judgeNewest(spec) };
+    const run = { revision: spec.revision, end: judgeNewest(spec) };
     running.set(spec, run);
     try {
       await run.end;
@@ -45,9 +55,10 @@ export function createOpenSpecs(platform: Platform): OpenSpecs {
   return {
     change(uri, version, text) {
       const spec = specs.get(uri);
-      if (spec === undefined) specs.set(uri, openSpec(uri, version, text));
+      if (spec === undefined) specs.set(uri, openSpec(uri, version, text, files?.sourceFor(uri)));
       else spec.change(version, text);
     },
+    refresh: (uri) => specs.get(uri)?.refresh(),
     close: (uri) => void specs.delete(uri),
     get: (uri) => specs.get(uri),
     all: () => [...specs.values()],

@@ -22,6 +22,7 @@ import {
 import { plainClient, profileOf, type ClientProfile } from './client-profile';
 import type { Platform } from './platform';
 import type { Services } from './services';
+import { watchFiles } from './watched-files';
 
 /** Registers everything the server answers and starts listening. */
 export function startServer(connection: Connection, platform: Platform): void {
@@ -38,7 +39,10 @@ export function startServer(connection: Connection, platform: Platform): void {
     }
     return whatWeOffer(profile, platform.version);
   });
-  connection.onInitialized(() => void loaded());
+  connection.onInitialized(() => {
+    void loaded();
+    listenForFiles(connection, profile, loaded);
+  });
   keepDocuments(connection, loaded);
   answerRequests(connection, loaded);
   connection.listen();
@@ -55,7 +59,7 @@ function whatWeOffer(profile: ClientProfile, version: string): InitializeResult 
       documentSymbolProvider: true,
       codeActionProvider: { codeActionKinds: [CodeActionKind.QuickFix] },
       ...(profile.pullsDiagnostics
-        ? { diagnosticProvider: { identifier: 'bandkeep', interFileDependencies: false, workspaceDiagnostics: false } }
+        ? { diagnosticProvider: { identifier: 'bandkeep', interFileDependencies: true, workspaceDiagnostics: false } }
         : {}),
     },
   };
@@ -78,7 +82,22 @@ function keepDocuments(connection: Connection, loaded: () => Promise<Services>):
   documents.listen(connection);
 }
 
+function listenForFiles(connection: Connection, profile: ClientProfile, loaded: () => Promise<Services>): void {
+  if (profile.watchesFiles) void watchFiles(connection);
+  if (!profile.tellsFolders) return;
+  connection.workspace.onDidChangeWorkspaceFolders(() => {
+    void Promise.all([loaded(), connection.workspace.getWorkspaceFolders()]).then(([services, folders]) => {
+      services.foldersChanged(folders?.map(({ uri }) => uri) ?? []);
+    });
+  });
+}
+
 function answerRequests(connection: Connection, loaded: () => Promise<Services>): void {
+  connection.onDidChangeWatchedFiles(({ changes }) => {
+    void loaded().then((services) => {
+      services.filesChanged(changes.map(({ uri }) => uri));
+    });
+  });
   connection.onHover(async (params, token) => (await loaded()).hover(params, token));
   connection.onCompletion(async (params, token) => (await loaded()).completion(params, token));
   connection.onDocumentSymbol(async (params, token) => (await loaded()).documentSymbol(params, token));

@@ -24,7 +24,7 @@ describe('the server process', () => {
     assert.deepEqual(capabilities.textDocumentSync, { openClose: true, change: 2 });
     assert.deepEqual(capabilities.diagnosticProvider, {
       identifier: 'bandkeep',
-      interFileDependencies: false,
+      interFileDependencies: true,
       workspaceDiagnostics: false,
     });
     assert.deepEqual(serverInfo, { name: 'bandkeep', version: '0.0.0-test' });

@@ -9,7 +9,12 @@ const uri = 'file:///lagoon/many.bandkeep.yaml';
 /** A clock that makes every slice one step. */
 function slowly(): Platform {
   let time = 0;
-  return { version: 'test', now: () => (time += 100), yieldControl: () => new Promise((resolve) => setImmediate(resolve)) };
+  return {
+    version: 'test',
+    loadFile: null,
+    now: () => (time += 100),
+    yieldControl: () => new Promise((resolve) => setImmediate(resolve)),
+  };
 }
 
 describe('open specs', () => {

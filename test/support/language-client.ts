@@ -146,8 +146,13 @@ export class LanguageClient {
     this.connection.listen();
   }
 
-  async initialize(capabilities: ClientCapabilities, initializationOptions: unknown = null): Promise<InitializeResult> {
-    const params = { processId: process.pid, rootUri: null, capabilities, initializationOptions };
+  async initialize(
+    capabilities: ClientCapabilities,
+    initializationOptions: unknown = null,
+    workspaceFolders: readonly string[] = [],
+  ): Promise<InitializeResult> {
+    const folders = workspaceFolders.map((uri) => ({ uri, name: uri }));
+    const params = { processId: process.pid, rootUri: null, capabilities, initializationOptions, workspaceFolders: folders };
     const result: InitializeResult = await this.connection.sendRequest('initialize', params);
     await this.connection.sendNotification('initialized', {});
     return result;
@@ -179,6 +184,16 @@ export class LanguageClient {
   async sent(document: ClientDocument, version: number | undefined): Promise<Diagnostic[]> {
     for (;;) {
       const found = this.published.find((params) => params.uri === document.uri && params.version === version);
+      if (found !== undefined) return found.diagnostics;
+      await new Promise<void>((resolve) => this.waiting.push(resolve));
+    }
+  }
+
+  /** The next diagnostics that the server sends for a document, whatever its version. */
+  async nextSent(document: ClientDocument): Promise<Diagnostic[]> {
+    const before = this.published.length;
+    for (;;) {
+      const found = this.published.slice(before).find((params) => params.uri === document.uri);
       if (found !== undefined) return found.diagnostics;
       await new Promise<void>((resolve) => this.waiting.push(resolve));
     }
