@@ -1,6 +1,9 @@
 /** What a pulsed gate makes of the copies before any filter acts: its own loss and the weight of each copy, at its own width and at others. */
 import { relativeGateWeight } from '../signal/pulses/gate';
 import { pulseArea } from '../signal/pulses/pulse-area';
+import { pulseResponse } from '../signal/pulses/pulse-response';
+import { constantResponse, product } from '../signal/response-algebra';
+import type { Response } from '../signal/response';
 import type { Pulse, PulseWidth } from '../spec/channel';
 import { toDb } from './decibels';
 import { pulseShape } from './pulse-shape';
@@ -27,6 +30,12 @@ export function gateFigures(gate: Pulse, rateHz: number, copies: number): GateFi
     ownDb: toDb(Math.log(c0)),
     copiesDb: weights.map((weight) => toDb(Math.log(weight))),
   };
+}
+
+/** The gate's spectrum: its gain at k times the rate is |c_k|; null for `instant`. */
+export function gateResponse(gate: Pulse, rateHz: number): Response | null {
+  const shape = pulseShape(gate, rateHz);
+  return shape === null ? null : product([constantResponse(Math.log(pulseArea(shape) * rateHz)), pulseResponse(shape)]);
 }
 
 /** The same gate with every length of it longer by a factor. */

@@ -39,7 +39,7 @@ export { halfPowerHz } from './half-power';
 export { halfPowerPoints } from './half-power-points';
 export { noiseBandwidthHz } from './noise-bandwidth';
 export { noiseWidth, type NoiseWidth } from './noise-width';
-export { gateFigures, stretchedGate, type GateFigures } from './gate-figures';
+export { gateFigures, gateResponse, stretchedGate, type GateFigures } from './gate-figures';
 export { shapeNulls } from './pulse-nulls';
 export { toneLandings } from './tone-landings';
 export { pulseShape, widthSeconds } from './pulse-shape';

@@ -1,6 +1,6 @@
 /** Cuts a source into the stretches that fold onto the protected ranges, each with its strongest level and the part of it that does harm. */
-import { gainDb } from '../analysis';
 import type { Enclosure } from '../analysis';
+import { levelOnto } from './landings';
 import type { Arriving } from './landings';
 
 /** A stretch of the input that lands, as a whole, in a protected range. */
@@ -43,7 +43,7 @@ export function cutAtLimit(
   stretch: FoldStretch,
   limitDb: number,
 ): { readonly part: FoldStretch; readonly over: boolean }[] {
-  const level = (f: number): number => source.levelDb + gainDb(source.response, f);
+  const level = (f: number): number => levelOf(source, stretch, f);
   const points = pointsOf(stretch);
   const cuts = points.slice(1).flatMap((high, index) => {
     const low = points[index] ?? high;
@@ -76,12 +76,19 @@ function cut(source: Arriving, side: Omit<FoldStretch, 'strongestDb' | 'stronges
 function strongestIn(source: Arriving, stretch: FoldStretch): FoldStretch {
   const best = pointsOf(stretch).reduce(
     (best, f) => {
-      const level = source.levelDb + gainDb(source.response, f);
+      const level = levelOf(source, stretch, f);
       return level > best.level ? { level, f } : best;
     },
     { level: -Infinity, f: stretch.lowHz },
   );
   return { ...stretch, strongestDb: best.level, strongestHz: best.f };
+}
+
+/** The level at which a frequency of a stretch lands: copy −k of an upper side, copy k of a lower one. */
+function levelOf(source: Arriving, stretch: Pick<FoldStretch, 'fold' | 'inverted'>, f: number): number {
+  const { fold, inverted } = stretch;
+  const lands = Math.max(0, inverted ? fold * source.rateHz - f : f - fold * source.rateHz);
+  return levelOnto(source, f, inverted ? fold : -fold, lands);
 }
 
 function pointsOf({ lowHz, highHz }: FoldStretch): number[] {

@@ -9,9 +9,28 @@ export interface Arriving {
   /** Where it may stand, without the wanted bands. */
   readonly ranges: readonly Enclosure[];
   readonly levelDb: number;
+  /** From the source to the sampler. */
   readonly response: Response;
   readonly rateHz: number;
+  /** What comes after the sampler; null in capture, where that is nothing. */
+  readonly behind: Behind | null;
 }
+
+/** What a copy passes behind the sampler of a relay: its weight and the output filter, in ln. */
+export interface Behind {
+  /** Of copy k, whose input stands at x − k·rate, where it leaves on x. */
+  logAt(copy: number, x: number): number;
+  /** What bounds every copy with |k| ≥ first, first ≥ 1. */
+  boundAt(first: number, x: number): number;
+}
+
+/** The level in dBFS at which a frequency of a source ends up as copy k on x. */
+export function levelOnto({ levelDb, response, behind }: Arriving, frequencyHz: number, copy: number, x: number): number {
+  const log = response.logGain(frequencyHz) + (behind === null ? 0 : behind.logAt(copy, x));
+  return levelDb + log * dbPerNeper;
+}
+
+const dbPerNeper = 20 / Math.LN10;
 
 /** A landing of one input frequency. */
 export interface Landed {
@@ -24,23 +43,29 @@ const mostFolds = 4000;
 
 /** The strongest that lands exactly on x; null where nothing does. */
 export function landingAt(source: Arriving, x: number): Landed | null {
-  const { rateHz, ranges, response, levelDb } = source;
+  const { rateHz, ranges, response, levelDb, behind } = source;
   let bestLog = -Infinity;
   let fromHz = NaN;
-  const look = (frequencyHz: number): void => {
+  const look = (frequencyHz: number, copy: number): void => {
     if (!stands(ranges, frequencyHz)) return;
-    const logGain = response.logGain(frequencyHz);
+    const logGain = response.logGain(frequencyHz) + (behind === null ? 0 : behind.logAt(copy, x));
     if (logGain > bestLog || Number.isNaN(fromHz)) [bestLog, fromHz] = [logGain, frequencyHz];
   };
   const first = firstFold(source);
   const last = Math.min(first + mostFolds, (highestOf(ranges) + x) / rateHz);
   for (let fold = first; fold <= last; fold += 1) {
     // All that is still to come is weaker: what lies further out is bounded as one interval, now and then.
-    if (fold > first && isPowerOfTwo(fold - first) && response.bounds(fold * rateHz - x, Infinity).high <= bestLog) break;
-    if (fold > 0) look(fold * rateHz - x);
-    look(fold * rateHz + x);
+    if (fold > first && isPowerOfTwo(fold - first) && boundFrom(source, fold, x) <= bestLog) break;
+    if (fold > 0) look(fold * rateHz - x, fold);
+    look(fold * rateHz + x, -fold);
   }
-  return Number.isNaN(fromHz) ? null : { levelDb: levelDb + bestLog * (20 / Math.LN10), fromHz };
+  return Number.isNaN(fromHz) ? null : { levelDb: levelDb + bestLog * dbPerNeper, fromHz };
+}
+
+/** What no frequency from a fold on can pass, in ln. */
+function boundFrom({ response, rateHz, behind }: Arriving, fold: number, x: number): number {
+  const { high } = response.bounds(fold * rateHz - x, Infinity);
+  return high + (behind === null ? 0 : behind.boundAt(fold, x));
 }
 
 /** The curves of a source's landings, one for each stretch that it reaches without a gap. */

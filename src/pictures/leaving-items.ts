@@ -1,13 +1,14 @@
-/** Every copy twice: pale as the hold leaves it, solid as the path leaves it, so that the eye sees who did the work. */
-import { gainDb, pulseNulls } from '../analysis';
-import type { Response } from '../analysis';
+/** Every copy twice: pale as hold or gate leave it, solid as the path leaves it, so that the eye sees who did the work. */
+import { pulseNulls } from '../analysis';
 import type { Item, Points, Shape } from '../protocol/picture';
 import { formatCount } from '../units/format';
 import { item } from './items';
 import { imageLimitAt } from './leaving-view';
-import type { CopyView, LeavingView } from './leaving-view';
+import type { LeavingView } from './leaving-view';
+import type { CopyView } from './leaving-copies';
 import { overLimit } from './over-limit';
 import { sampleCurve } from './sample-curve';
+import { filterPlace, pulseKey } from './subject';
 import { levelWords, sentences, stretchWords } from './words';
 
 /** The section's only pane. */
@@ -21,79 +22,19 @@ export function copyItems(view: LeavingView): Item[] {
   });
 }
 
-/** The envelopes: what the hold leaves of a tone at the wanted level, and what hold and path leave. */
-export function envelopeItems(view: LeavingView): Item[] {
-  const { subject, topDb } = view;
-  const hold = curveOf(view, subject.path.pulse, topDb, 0, view.output.highHz);
-  const both = curveOf(view, subject.largest, topDb, 0, view.output.highHz);
-  const items = [
-    envelope(view, {
-      id: 'hold',
-      name: 'hold',
-      points: hold,
-      stroke: 'dashed',
-      place: ['hold'],
-      words: 'What the hold leaves of a tone at the wanted level',
-    }),
-    envelope(view, {
-      id: 'hold-and-path',
-      name: 'hold and path',
-      points: both,
-      stroke: 'dotted',
-      place: ['filter'],
-      words: 'What hold and path leave of it, at the worst of the tolerances',
-    }),
-  ];
-  // Where there is no filter, hold and path are one curve; where there is no hold, the path is all there is.
-  if (subject.path.stages.length === 0) return items.slice(0, 1);
-  return subject.channel.pulse.shape === 'instant' ? items.slice(1) : items;
-}
-
-interface EnvelopeParts {
-  readonly id: 'hold' | 'hold-and-path';
-  readonly name: string;
-  readonly points: Points;
-  readonly stroke: 'dashed' | 'dotted';
-  readonly place: readonly string[];
-  readonly words: string;
-}
-
-function envelope(view: LeavingView, { id, name, points, stroke, place, words }: EnvelopeParts): Item {
-  // The hold is named on its first lobe beyond the rate, hold and path where they part.
-  const nameHz = (id === 'hold' ? 1.43 : 0.42) * view.subject.channel.rate.hz;
-  const index = points.x.findIndex((x) => x >= nameHz);
-  return item({
-    id: `envelope-${id}`,
-    series: id,
-    pane: leavingPane,
-    role: id === 'hold' ? 'pulse' : 'path',
-    name,
-    words: sentences(words),
-    place: view.subject.placeOf(place),
-    shapes: [{ kind: 'curve', points, stroke, weight: 'thin' }],
-    label: {
-      text: name,
-      frequencyHz: points.x[index] ?? 0,
-      level: points.y[index] ?? 0,
-      prefer: id === 'hold' ? 'above' : 'right',
-      priority: 4,
-    },
-  });
-}
-
 function beforeItem(view: LeavingView, copy: CopyView): Item {
-  const points = copyCurve(view, copy, view.subject.path.pulse);
+  const points = copyCurve(view, copy, copy.beforeDb);
   const side = sideWords(copy);
   return item({
     id: `${idOf(copy)}-before`,
     series: copy.wanted ? 'wanted' : 'copies',
     pane: leavingPane,
     role: copy.wanted ? 'wanted' : 'copy',
-    name: `${nameOf(copy)}, as the hold leaves it`,
+    name: `${nameOf(copy)}, as the ${pulseKey(view.subject.channel)} leaves it`,
     words: sentences(
-      `${nameOf(copy)}${side} at ${stretchWords(copy.range.low, copy.range.high)} as the hold leaves it, at most ${levelWords(Math.max(...points.y))}`,
+      `${nameOf(copy)}${side} at ${stretchWords(copy.range.low, copy.range.high)} as the ${pulseKey(view.subject.channel)} leaves it, at most ${levelWords(Math.max(...points.y))}`,
     ),
-    place: view.subject.placeOf(copy.wanted ? ['wanted', copy.index] : ['hold']),
+    place: view.subject.placeOf(copy.wanted ? ['wanted', copy.index] : [pulseKey(view.subject.channel)]),
     joins: [idOf(copy)],
     shapes: [{ kind: 'area', upper: points, lower: null, tone: 'pale' }],
     label: beforeLabel(view, copy, points),
@@ -126,7 +67,7 @@ function namesPair({ copies }: LeavingView, { copy, index }: CopyView): boolean 
 }
 
 function afterItem(view: LeavingView, copy: CopyView): Item {
-  const points = copyCurve(view, copy, view.subject.largest);
+  const points = copyCurve(view, copy, copy.afterDb);
   const figure = view.subject.figures.images.find(
     (image) => image.copy === copy.copy.fold && (image.side === copy.copy.side || image.side === 'baseband'),
   );
@@ -143,7 +84,7 @@ function afterItem(view: LeavingView, copy: CopyView): Item {
     words: sentences(
       `${nameOf(copy)}${sideWords(copy)} at ${stretchWords(copy.range.low, copy.range.high)} as the path leaves it, at most ${levelWords(Math.max(...points.y))}${relative}`,
     ),
-    place: view.subject.placeOf(copy.wanted ? ['wanted', copy.index] : ['filter']),
+    place: copy.wanted ? view.subject.placeOf(['wanted', copy.index]) : filterPlace(view.subject),
     shapes: [
       { kind: 'area', upper: points, lower: null, tone: 'solid' },
       { kind: 'curve', points, stroke: 'solid', weight: 'bold' },
@@ -173,16 +114,17 @@ function harmItems(view: LeavingView, copy: CopyView, after: Item): Item[] {
   ];
 }
 
-function copyCurve(view: LeavingView, copy: CopyView, response: Response): Points {
-  const points = curveOf(view, response, copy.band.levelDb, copy.range.low, copy.range.high);
+function copyCurve(view: LeavingView, copy: CopyView, levelAt: (outputHz: number) => number): Points {
+  const points = curveOf(view, levelAt, copy.range.low, copy.range.high);
   return { ...points, from: points.x.map(copy.wantedHz) };
 }
 
-function curveOf(view: LeavingView, response: Response, levelDb: number, lowHz: number, highHz: number): Points {
+/** A level over output frequencies, exact at the worst image and at the nulls of the hold. */
+export function curveOf(view: LeavingView, levelAt: (outputHz: number) => number, lowHz: number, highHz: number): Points {
   const { channel, figures } = view.subject;
   const worst = figures.image === null || !Number.isFinite(figures.image.frequency) ? [] : [figures.image.frequency];
   const through = [...worst, ...pulseNulls(channel.pulse, channel.rate.hz, view.lastFold + 1)];
-  return sampleCurve((f) => levelDb + gainDb(response, f), {
+  return sampleCurve(levelAt, {
     lowHz,
     highHz,
     through,

@@ -1,11 +1,14 @@
-/** Generate: what leaves – the wanted bands and every copy, with the hold's envelope, before and after the path, and the image limit. */
+/** Generate and relay: what leaves – the wanted bands and every copy, with the envelope of hold or gate, before and after the path, and the image limit or mask. */
 import { gainDb } from '../analysis';
 import type { Item, Plot, Points, Section, Table } from '../protocol/picture';
 import { flat, item, joinedBothWays, seriesOf } from './items';
-import { copyItems, envelopeItems, leavingPane } from './leaving-items';
+import { copiesUpTo } from './leaving-copies';
+import { envelopeItems } from './leaving-envelopes';
+import { copyItems, leavingPane } from './leaving-items';
+import { maskItems, masksOf } from './mask-items';
 import { imageLimitAt, leavingView } from './leaving-view';
 import type { LeavingView } from './leaving-view';
-import { limitFigure } from './subject';
+import { limitFigure, pulseKey } from './subject';
 import type { Subject } from './subject';
 import { answerWith, levelWords, marginWords, sentences, stretchWords } from './words';
 
@@ -16,7 +19,7 @@ export function leavingSection(subject: Subject): Section {
     id: 'leaving',
     title: 'What leaves',
     answer: answerWith(answerText(subject), subject.channel, limit),
-    place: subject.placeOf(limit === null ? ['hold'] : ['limits', 'image']),
+    place: subject.placeOf(limit === null ? [pulseKey(subject.channel)] : ['limits', 'image']),
     plots: [leavingPlot(leavingView(subject))],
   };
 }
@@ -38,6 +41,9 @@ function worstWords(subject: Subject): string {
 function leavingPlot(view: LeavingView): Plot {
   const { subject } = view;
   const items = joinedBothWays([
+    ...masksOf(subject, 'output').flatMap((mask) =>
+      maskItems(subject, mask, { pane: leavingPane, x: view.output, shiftDb: 0, joins: [] }),
+    ),
     ...copyItems(view),
     ...envelopeItems(view),
     ...limitItems(view),
@@ -52,7 +58,7 @@ function leavingPlot(view: LeavingView): Plot {
     id: 'leaving',
     title: 'What leaves',
     words: sentences(
-      `The wanted band and its copies about every multiple of the rate of ${stretchWords(subject.channel.rate.hz, subject.channel.rate.hz)}, pale as the hold leaves them and solid as the path leaves them`,
+      `The wanted band and its copies about every multiple of the rate of ${stretchWords(subject.channel.rate.hz, subject.channel.rate.hz)}, pale as the ${pulseKey(subject.channel)} leaves them and solid as the path leaves them`,
       answerText(subject),
     ),
     shown: 'always',
@@ -167,14 +173,15 @@ function markItems(view: LeavingView): Item[] {
   ];
 }
 
-function tableOf({ subject, copies, output }: LeavingView): Table {
+function tableOf({ subject, lastFold, output }: LeavingView): Table {
   const { figures, channel } = subject;
+  const copies = copiesUpTo(subject, Math.max(lastFold, ...figures.images.map(({ copy }) => copy)));
   const wanted = channel.wanted.map((band, index) => ({
     item: `wanted-${index}`,
     cells: [
       band.name === null ? 'wanted' : `wanted, ${band.name}`,
       stretchWords(band.lowHz, band.highHz),
-      band.levelDb + gainDb(subject.path.pulse, band.highHz),
+      copies.find((copy) => copy.wanted && copy.index === index)?.beforeDb(band.highHz) ?? null,
       band.levelDb + gainDb(subject.nominal, band.highHz),
       null,
       null,
@@ -184,9 +191,9 @@ function tableOf({ subject, copies, output }: LeavingView): Table {
     const copy = copies.find(
       (candidate) => candidate.copy.fold === image.copy && (candidate.copy.side === image.side || image.side === 'baseband'),
     );
-    const before = (copy?.band.levelDb ?? 0) + gainDb(subject.path.pulse, image.frequency);
+    const before = copy?.beforeDb(image.frequency) ?? null;
     const name = image.side === 'baseband' ? 'baseband copy' : `copy ${image.copy}, ${image.side}`;
-    const shown = copy !== undefined && image.frequency <= output.highHz;
+    const shown = copy !== undefined && image.copy <= lastFold && image.frequency <= output.highHz;
     return {
       item: shown ? `copy-${copy.index}-${copy.copy.fold}-${copy.copy.side}` : null,
       cells: [name, stretchWords(image.frequency, image.frequency), before, image.level, image.relative, image.margin],
@@ -197,7 +204,7 @@ function tableOf({ subject, copies, output }: LeavingView): Table {
     columns: [
       { title: 'what', unit: null },
       { title: 'leaves at', unit: null },
-      { title: 'behind the hold', unit: 'dBFS' },
+      { title: `behind the ${pulseKey(channel)}`, unit: 'dBFS' },
       { title: 'behind the path', unit: 'dBFS' },
       { title: 'against wanted', unit: 'dBc' },
       { title: 'margin', unit: 'dB' },

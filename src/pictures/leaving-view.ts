@@ -1,26 +1,12 @@
-/** What the section "what leaves" needs to know of a generate channel, worked out once. */
+/** What the section "what leaves" needs to know of a generate or relay channel, worked out once. */
 import { gainDb } from '../analysis';
-import type { Enclosure } from '../analysis';
-import { copiesOf, leavesAt } from '../analysis/copies';
-import type { Copy } from '../analysis/copies';
 import type { FrequencyAxis, LevelAxis } from '../protocol/picture';
-import type { WantedBand } from '../spec/channel';
 import { levelAxis } from './axes';
+import { copiesUpTo } from './leaving-copies';
+import type { CopyView } from './leaving-copies';
+import { axisWith, boundsWithin, farthestOf, masksOf } from './mask-items';
 import { limitFigure } from './subject';
 import type { Subject } from './subject';
-
-/** One copy of a wanted band, the wanted one included. */
-export interface CopyView {
-  readonly band: WantedBand;
-  /** Index into `wanted`. */
-  readonly index: number;
-  readonly copy: Copy;
-  /** Where it leaves. */
-  readonly range: Enclosure;
-  readonly wanted: boolean;
-  /** The wanted frequency that leaves at an output frequency. */
-  readonly wantedHz: (outputHz: number) => number;
-}
 
 /** The section's common ground. */
 export interface LeavingView {
@@ -45,21 +31,31 @@ export function leavingView(subject: Subject): LeavingView {
   const rateHz = channel.rate.hz;
   const highest = Math.max(...channel.wanted.map((band) => band.highHz));
   const worst = figures.image?.copy ?? 0;
+  const masks = masksOf(subject, 'output');
+  const masked = Math.max(0, ...masks.map((mask) => Math.ceil(farthestOf(mask) / rateHz)));
   const lastFold = Math.min(
-    Math.max(fewestFolds, worst, Math.ceil(highest / rateHz) + 2),
+    Math.max(fewestFolds, worst, masked, Math.ceil(highest / rateHz) + 2),
     Math.max(mostFolds, Math.ceil(highest / rateHz) + 2),
   );
-  const copies = channel.wanted.flatMap((band, index) => copiesOfBand(band, index, rateHz, lastFold));
   const levels = channel.wanted.map((band) => band.levelDb);
   const limit = limitFigure(subject, 'image');
-  const limitDb = limit === null ? null : limit.unit === 'dBc' ? limit.at + Math.min(...levels) : limit.at;
-  const axis = levelAxis(Math.max(...levels), 18, [limitDb, figures.image?.level ?? null, figures.noise.total]);
+  const wantedDb = Math.min(...levels) + gainDb(subject.nominal, channel.referenceHz);
+  const limitDb = limit === null ? null : limit.unit === 'dBc' ? limit.at + wantedDb : limit.at;
+  const plain = levelAxis(Math.max(...levels), 18, [limitDb, figures.image?.level ?? null, figures.noise.total]);
   const low = Math.min(...channel.wanted.map((band) => band.lowHz).filter((f) => f > 0), rateHz / 20);
+  const output = {
+    title: 'Hz at the output',
+    lowHz: 0,
+    highHz: rateHz * (lastFold + 0.3),
+    logLowHz: low / 2,
+    scale: 'linear',
+  } as const;
+  const axis = masks.reduce((grown, mask) => axisWith(grown, [boundsWithin(mask, output)], 0), plain);
   return {
     subject,
-    copies,
+    copies: copiesUpTo(subject, lastFold),
     lastFold,
-    output: { title: 'Hz at the output', lowHz: 0, highHz: rateHz * (lastFold + 0.3), logLowHz: low / 2, scale: 'linear' },
+    output,
     levels: axis,
     topDb: Math.max(...levels),
     tolerance: (axis.high - axis.low) / 3000,
@@ -71,23 +67,4 @@ export function imageLimitAt({ subject }: LeavingView, copy: CopyView, outputHz:
   const limit = limitFigure(subject, 'image');
   if (limit === null) return null;
   return limit.unit === 'dBc' ? limit.at + copy.band.levelDb + gainDb(subject.nominal, copy.wantedHz(outputHz)) : limit.at;
-}
-
-function copiesOfBand(band: WantedBand, index: number, rateHz: number, lastFold: number): CopyView[] {
-  const { baseband, wanted } = copiesOf({ low: band.lowHz, high: band.highHz }, rateHz);
-  const folds = Array.from({ length: lastFold + 1 }, (_, fold) => fold);
-  const every = folds.flatMap((fold): Copy[] =>
-    fold === 0
-      ? [{ fold, side: 'upper' }]
-      : [
-          { fold, side: 'lower' },
-          { fold, side: 'upper' },
-        ],
-  );
-  return every.map((copy) => {
-    const ends = [leavesAt(copy, rateHz, baseband.low), leavesAt(copy, rateHz, baseband.high)];
-    const wantedHz = (outputHz: number): number => leavesAt(wanted, rateHz, Math.abs(outputHz - copy.fold * rateHz));
-    const isWanted = copy.fold === wanted.fold && copy.side === wanted.side;
-    return { band, index, copy, range: { low: Math.min(...ends), high: Math.max(...ends) }, wanted: isWanted, wantedHz };
-  });
 }

@@ -57,14 +57,12 @@ export function closeUpPlot(subject: Subject): Plot {
 }
 
 function bandAxis({ channel }: Subject): FrequencyAxis {
-  const lows = channel.wanted.map((band) => band.lowHz);
   const high = Math.max(...channel.wanted.map((band) => band.highHz));
-  const low = Math.min(...lows);
-  return frequencyAxis(
-    'Hz',
-    low > 0 ? low : Math.min(high / 1000, channel.referenceHz > 0 ? channel.referenceHz : high),
-    high * (low > high / 4 ? 1 + (high - low) / high / 4 : 1.3),
-  );
+  const low = Math.min(...channel.wanted.map((band) => band.lowHz));
+  // A band far above 0 Hz has room to both sides; the others begin where they begin.
+  if (low > high / 4) return frequencyAxis('Hz', low - (high - low) / 4, high + (high - low) / 4);
+  const lowest = low > 0 ? low : Math.min(high / 1000, channel.referenceHz > 0 ? channel.referenceHz : high);
+  return frequencyAxis('Hz', lowest, high * 1.3);
 }
 
 function curvesOf(subject: Subject, x: FrequencyAxis, tolerance: number, floor: number): Curves {

@@ -63,7 +63,9 @@ export function wholePathAxis(subject: Subject): FrequencyAxis {
   const lows = channel.wanted.map((band) => band.lowHz).filter((f) => f > 0);
   const masked = masksOf(subject, 'response', 'through').map((mask) => 1.2 * farthestOf(mask));
   const high = Math.max(10 * channel.rate.hz, ...channel.wanted.map((band) => 4 * band.highHz), ...masked);
-  const axis = frequencyAxis('Hz', Math.min(...lows, high / 1e4), high);
+  // A band above half the rate is far from 0 Hz, where nothing happens.
+  const lowest = channel.wanted.every((band) => band.lowHz > channel.rate.hz / 2) ? channel.rate.hz / 4 : high / 1e4;
+  const axis = frequencyAxis('Hz', Math.min(...lows, lowest), high);
   return { ...axis, lowHz: 0 };
 }
 

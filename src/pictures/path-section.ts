@@ -1,5 +1,5 @@
 /** The analogue path: its magnitude stage by stage over all that matters, and the wanted band close up. */
-import { halfPowerHz, pathDelay } from '../analysis';
+import { halfPowerPoints, pathDelay } from '../analysis';
 import { flatnessOf } from '../analysis/flatness';
 import type { Section } from '../protocol/picture';
 import { formatDb, formatFrequency } from '../units/format';
@@ -26,15 +26,14 @@ export function pathSection(subject: Subject): Section {
   };
 }
 
+function powerWords(points: readonly number[]): string {
+  if (points.length === 0) return 'never falls to half power';
+  return `half power ${points.map((hz) => formatFrequency(hz)).join(' and ')}`;
+}
+
 function answerText(subject: Subject): string {
   const { channel, path } = subject;
-  const half = channel.stages.length === 0 ? null : halfPowerHz(path.analogue);
-  const power =
-    channel.stages.length === 0
-      ? 'no filter'
-      : half === null
-        ? 'never falls to half power'
-        : `half power ${formatFrequency(half)}`;
+  const power = channel.stages.length === 0 ? 'no filter' : powerWords(halfPowerPoints(path.analogue));
   const limit = limitFigure(subject, 'flatness');
   const value = limit?.value ?? flatnessOf(channel, path)?.valueDb ?? null;
   if (value === null) return power;

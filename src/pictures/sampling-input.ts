@@ -174,28 +174,30 @@ function arrivingShapes(view: SamplingView, tone: ToneView): Shape[] {
 }
 
 function pathItem(view: SamplingView): Item {
-  const { subject, input } = view;
-  const points = sampleCurve((f) => gainDb(subject.nominal, f), { lowHz: 0, highHz: input.highHz, ...precision(view) });
-  const aperture = subject.channel.pulse.shape === 'instant' ? '' : ' and aperture';
+  const { subject, input, across } = view;
+  const { direction, pulse } = subject.channel;
+  const points = sampleCurve((f) => gainDb(across, f), { lowHz: 0, highHz: input.highHz, ...precision(view) });
+  const filter = direction === 'relay' ? 'input filter' : 'filter';
+  const name = direction === 'relay' || pulse.shape === 'instant' ? filter : `${filter} and aperture`;
   return item({
     id: 'path-across',
     series: 'path',
     pane: inputPane,
     role: 'path',
-    name: `filter${aperture}`,
-    words: sentences(`Response of the filter${aperture} across the input, at nominal values`),
-    place: filterPlace(subject),
+    name,
+    words: sentences(`Response of the ${name} across the input, at nominal values`),
+    place: direction === 'relay' ? subject.placeOf(['input-filter']) : filterPlace(subject),
     shapes: [{ kind: 'curve', points, stroke: 'dashed', weight: 'thin' }],
-    label: { text: 'path', ...pathLabelPoint(view), prefer: 'right', priority: 4 },
+    label: { text: direction === 'relay' ? filter : 'path', ...pathLabelPoint(view), prefer: 'right', priority: 4 },
   });
 }
 
 /** Where the path has fallen by a fifth of what is shown. */
-function pathLabelPoint({ subject, input, levels }: SamplingView): { readonly frequencyHz: number; readonly level: number } {
+function pathLabelPoint({ across, input, levels }: SamplingView): { readonly frequencyHz: number; readonly level: number } {
   const wanted = levels.high + (levels.low - levels.high) / 4;
   const steps = Array.from({ length: 121 }, (_, index) => input.logLowHz * (input.highHz / input.logLowHz) ** (index / 120));
-  const found = steps.find((f) => gainDb(subject.nominal, f) < wanted) ?? input.highHz / 2;
-  return { frequencyHz: found, level: Math.max(levels.low, gainDb(subject.nominal, found)) };
+  const found = steps.find((f) => gainDb(across, f) < wanted) ?? input.highHz / 2;
+  return { frequencyHz: found, level: Math.max(levels.low, gainDb(across, found)) };
 }
 
 function precision(view: SamplingView): {

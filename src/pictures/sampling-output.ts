@@ -4,7 +4,7 @@ import type { Enclosure } from '../analysis';
 import type { AliasFigure, WantedFigure } from '../analysis/figures';
 import type { Item, Points, Shape } from '../protocol/picture';
 import { flat, item } from './items';
-import { landingCurves } from './landings';
+import { landingCurves, levelOnto } from './landings';
 import { overLimit } from './over-limit';
 import { sampleCurve } from './sample-curve';
 import { sourceSeries } from './sampling-input';
@@ -79,8 +79,8 @@ function toneShapes(view: SamplingView, tone: ToneView): Shape[] {
   if (tone.ranges.length === 0) return [];
   const { low, high } = tone.range;
   if (low === high) {
-    const top = tone.levelDb + gainDb(tone.response, low);
-    const { landsHz } = foldFrequency(low, tone.rateHz);
+    const { landsHz, fold, inverted } = foldFrequency(low, tone.rateHz);
+    const top = levelOnto(tone, low, inverted ? fold : -fold, landsHz);
     return Number.isFinite(top) ? [{ kind: 'stem', frequencyHz: landsHz, top, tone: 'solid' }] : [];
   }
   const through = [...view.protect.flatMap((range) => [range.low, range.high]), ...worstLandings(view)];

@@ -1,4 +1,4 @@
-/** Capture: what arrives and, on the same scale of levels, where each thing lands; the ribbons between them show which fold hurts. */
+/** Capture and relay: what arrives and, on the same scale of levels, where each thing lands; the ribbons between them show which fold hurts. */
 import type { Item, Plot, Section, Table } from '../protocol/picture';
 import { joinedBothWays, seriesOf } from './items';
 import { inputItems, inputPane, sourceSeries } from './sampling-input';
@@ -13,13 +13,22 @@ import { answerWith, levelWords, sentences, stretchWords } from './words';
 /** The section. */
 export function samplingSection(subject: Subject): Section {
   const limit = limitFigure(subject, 'alias');
+  const plot = samplingPlot(samplingView(subject));
   return {
     id: 'sampling',
     title: 'Before and after sampling',
     answer: answerWith(answerText(subject), subject.channel, limit),
     place: subject.placeOf(limit === null ? ['rate'] : ['limits', 'alias']),
-    plots: [samplingPlot(samplingView(subject))],
+    plots: [subject.channel.direction === 'relay' ? withOwnIds(plot) : plot],
   };
+}
+
+/** In relay another section has items of the same names. */
+function withOwnIds(plot: Plot): Plot {
+  const own = (id: string): string => `arrival-${id}`;
+  const items = plot.items.map((item) => ({ ...item, id: own(item.id), joins: item.joins.map(own) }));
+  const rows = plot.table.rows.map((row) => ({ ...row, item: row.item === null ? null : own(row.item) }));
+  return { ...plot, items, table: { ...plot.table, rows } };
 }
 
 function answerText({ figures, channel }: Subject): string {

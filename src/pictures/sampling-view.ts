@@ -1,5 +1,5 @@
 /** What the section "before and after sampling" needs to know of a channel, worked out once. */
-import { gainDb, inSeries } from '../analysis';
+import { gainDb, inSeries, relayPath, weightResponse } from '../analysis';
 import type { Enclosure, Response } from '../analysis';
 import { arrivalsOf } from '../analysis/arrivals';
 import type { Arrival } from '../analysis/arrivals';
@@ -9,7 +9,8 @@ import { without } from '../analysis/intervals';
 import type { FrequencyAxis, LevelAxis } from '../protocol/picture';
 import type { Channel, Source } from '../spec/channel';
 import { frequencyAxis, levelAxis } from './axes';
-import type { Arriving } from './landings';
+import type { Arriving, Behind } from './landings';
+import { relayGains } from './leaving-copies';
 import { limitFigure } from './subject';
 import type { Subject } from './subject';
 
@@ -34,6 +35,8 @@ export interface SourceView {
 /** The section's common ground. */
 export interface SamplingView {
   readonly subject: Subject;
+  /** What the input meets before the sampler, at nominal values. */
+  readonly across: Response;
   readonly sources: readonly SourceView[];
   readonly input: FrequencyAxis;
   readonly output: FrequencyAxis;
@@ -57,9 +60,10 @@ export function samplingView(subject: Subject): SamplingView {
   const tolerance = (levels.high - levels.low) / 3000;
   return {
     subject,
+    across: channel.direction === 'relay' ? relayGains(subject).input : subject.nominal,
     sources,
     input: inputAxis(subject, sources, levels),
-    output: frequencyAxisTo(figures.outputRate / 2),
+    output: frequencyAxisTo(channel.direction, figures.outputRate / 2),
     levels,
     protect: figures.protected.map(({ low, high }) => ({ low, high: Math.min(high, figures.halfRate) })),
     limitDb,
@@ -71,32 +75,52 @@ export function samplingView(subject: Subject): SamplingView {
 /** Tones of a source that are drawn; the weaker ones beyond them would only cover one another. */
 const mostTones = 200;
 
-function sourceViews({ channel }: Subject): readonly SourceView[] {
+function sourceViews(subject: Subject): readonly SourceView[] {
+  const { channel } = subject;
   // Levels that hold at the sampler are measured from the reference, so the path counts from there.
-  const viewAt = captureViews(channel, channel.levelsAt === 'sampler' ? channel.referenceHz : null);
+  const before = channel.direction === 'relay' ? relayPath(channel).input.channel : channel;
+  const viewAt = captureViews(before, channel.levelsAt === 'sampler' ? channel.referenceHz : null);
+  const behind = channel.direction === 'relay' ? behindSampler(subject) : null;
   return channel.unwanted.map((source, index): SourceView => {
     const { response } = viewAt(source.enters).worst.worst;
     const tones = [...arrivalsOf(source)]
       .sort((a, b) => b.levelDb - a.levelDb)
       .slice(0, mostTones)
-      .map((arrival) => toneView(channel, arrival, response));
+      .map((arrival) => toneView(channel, arrival, response, behind));
     return { source, index, range: sourceRange(source), tones };
   });
 }
 
-function toneView(channel: Channel, { harmonic, range, levelDb, envelope }: Arrival, path: Response): ToneView {
+function toneView(
+  channel: Channel,
+  { harmonic, range, levelDb, envelope }: Arrival,
+  path: Response,
+  behind: Behind | null,
+): ToneView {
   const response = envelope === null ? path : inSeries([path, envelope]);
   const ranges = without([range], wantedRanges(channel));
-  return { harmonic, range, ranges, levelDb, response, envelope, rateHz: channel.rate.hz };
+  return { harmonic, range, ranges, levelDb, response, envelope, rateHz: channel.rate.hz, behind };
 }
 
-function frequencyAxisTo(highHz: number): FrequencyAxis {
-  return { title: 'Hz after sampling, to half the rate', lowHz: 0, highHz, logLowHz: highHz / 1e4, scale: 'linear' };
+/** The weights of a relay's copies and its output filter. */
+function behindSampler(subject: Subject): Behind {
+  const { weights } = relayPath(subject.channel);
+  const { largestOutput, weightDb } = relayGains(subject);
+  return {
+    logAt: (copy, x) => (weightDb(copy, x) * Math.LN10) / 20 + largestOutput.logGain(x),
+    boundAt: (first, x) => weightResponse(weights.boundFrom(first)).logGain(x) + largestOutput.logGain(x),
+  };
+}
+
+function frequencyAxisTo(direction: Channel['direction'], highHz: number): FrequencyAxis {
+  const title = direction === 'relay' ? 'Hz at the output, to half the rate' : 'Hz after sampling, to half the rate';
+  return { title, lowHz: 0, highHz, logLowHz: highHz / 1e4, scale: 'linear' };
 }
 
 function inputAxis(subject: Subject, sources: readonly SourceView[], levels: LevelAxis): FrequencyAxis {
   const { channel } = subject;
-  const wanted = channel.wanted.flatMap((band) => [band.lowHz, band.highHz]);
+  // Of a band from 0 Hz a decade shows on a logarithmic axis.
+  const wanted = channel.wanted.flatMap((band) => [band.lowHz > 0 ? band.lowHz : band.highHz / 10, band.highHz]);
   const tones = sources.flatMap((source) => source.tones);
   const edges = tones.flatMap(({ range }) => [range.low, range.high]);
   const finite = [...wanted, ...edges].filter((f) => f > 0 && Number.isFinite(f));

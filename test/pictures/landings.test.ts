@@ -15,6 +15,7 @@ const hash: Arriving = {
   levelDb: -55,
   response: channelPath(channel).total,
   rateHz: 51_200,
+  behind: null,
 };
 
 describe('landings', () => {
@@ -34,6 +35,26 @@ describe('landings', () => {
   it('leaves a source that has no end once all further folds are weaker', () => {
     const endless = { ...hash, ranges: [{ low: 40_000, high: Infinity }] };
     assert.equal(landingAt(endless, 10_000)?.fromHz, 41_200);
+  });
+
+  it('weighs each copy of a relay by its own weight, and by the output filter where it leaves', () => {
+    // A gate of 40 % and one pole at 20 kHz, by hand: |c_k| = 0.4·|sinc(0.4·k)|.
+    const logWeight = (copy: number): number => {
+      const x = Math.PI * 0.4 * copy;
+      return Math.log(0.4 * (copy === 0 ? 1 : Math.abs(Math.sin(x) / x)));
+    };
+    const logPole = (f: number): number => -0.5 * Math.log(1 + (f / 20_000) ** 2);
+    const relayed: Arriving = {
+      ...hash,
+      behind: { logAt: (copy, x) => logWeight(copy) + logPole(x), boundAt: (_, x) => Math.log(0.4) + logPole(x) },
+    };
+    const expected = (f: number, copy: number, x: number): number =>
+      -55 + guardDb(f) + (20 / Math.LN10) * (logWeight(copy) + logPole(x));
+    // 41.2 kHz leaves on 10 kHz as copy 1; it is stronger than 61.2 kHz as copy −1 and all others.
+    assert.equal(landingAt(relayed, 10_000)?.fromHz, 41_200);
+    assert.ok(Math.abs((landingAt(relayed, 10_000)?.levelDb ?? 0) - expected(41_200, 1, 10_000)) < 1e-6);
+    const [strongest] = foldStretches(relayed, [{ low: 9000, high: 10_000 }]);
+    assert.ok(Math.abs((strongest?.strongestDb ?? 0) - expected(41_200, 1, 10_000)) < 1e-6);
   });
 
   it('draws the landing as curves that break where the source ends', () => {
