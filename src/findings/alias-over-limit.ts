@@ -17,7 +17,10 @@ const help: Help = {
 than \`limits.alias\` allows. The level is the largest over the whole source, over every fold up to infinity and over all
 tolerances; it is proved, not sampled. There is one finding for each source that breaks the limit. A source with \`harmonics\`
 or a table of lines is judged by the strongest of them. A limit in the form \`{ sum: -90 dBFS }\` counts everything that lands
-together, as powers, each at its own worst; there is then one finding, at the limit, which names the strongest.`,
+together, as powers, each at its own worst; there is then one finding, at the limit, which names the strongest.
+
+In a relay every source leaves again at |f + k·fs|: gate or hold weigh each copy, and the filter behind weighs it once more, at the
+frequency where it leaves. The levels are those at the output.`,
   matters: `Nothing behind the sampler can tell the landed tone from a real one. It looks like a bearing fault, a tide, a word: it is
 in the data for good.`,
   cure: `Keep it out before the sampler: a higher order or a lower corner takes more of it away, a higher rate moves the frequency that
@@ -65,7 +68,8 @@ function landingWords(figures: Figures, alias: AliasFigure, value: string): stri
   const from = alias.frequency === null ? '' : ` at ${frequencyWords(figures, alias.frequency)}`;
   const onto =
     Number.isFinite(alias.frequency) && alias.lands !== null ? frequencyWords(figures, alias.lands) : 'the protected range';
-  return `${sourceWords(alias)}${from} lands on ${onto} at ${value}`;
+  if (figures.direction !== 'relay') return `${sourceWords(alias)}${from} lands on ${onto} at ${value}`;
+  return `${sourceWords(alias)}${from} leaves ${alias.lands === null ? 'in' : 'at'} ${onto} at ${value}`;
 }
 
 /** "`switcher`", or "`switcher`, harmonic 5". */
@@ -91,7 +95,7 @@ function sumOver({ channel, figures }: Subject, limit: LimitFigure): Finding {
     code: 'alias-over-limit',
     severity: 'error',
     message:
-      `All that lands in the protected ranges adds up to ${formatDb(limit.value ?? 0, limit.unit, decimals)}, ` +
+      `All that ${channel.direction === 'relay' ? 'leaves' : 'lands'} in the protected ranges adds up to ${formatDb(limit.value ?? 0, limit.unit, decimals)}, ` +
       `${formatDb(-margin, 'dB', decimals)} over the limit of ${limitWords(limit)} for the sum of all aliases` +
       `${worstCaseWords(worst)}; strongest ${named.join(', then ')}${more > 0 ? ` and ${more} more` : ''}.`,
     path: limitPath(channel, limit),

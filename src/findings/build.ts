@@ -55,8 +55,16 @@ export function limitPath(channel: Channel, figure: Pick<LimitFigure, 'limit'>):
 
 /** The limit and the filter, as places that a broken limit points to. */
 export function limitAndFilter(channel: Channel, figure: Pick<LimitFigure, 'limit'>): readonly { path: Path; message: string }[] {
-  const filter = channel.stages.length === 0 ? [] : [{ path: ['filter'], message: 'the filter' }];
-  return [{ path: limitPath(channel, figure), message: 'the limit' }, ...filter];
+  return [{ path: limitPath(channel, figure), message: 'the limit' }, ...filtersOf(channel)];
+}
+
+/** The filters that a channel has, by their keys. */
+function filtersOf({ direction, stages, inputStages, outputStages }: Channel): readonly { path: Path; message: string }[] {
+  if (direction !== 'relay') return stages.length === 0 ? [] : [{ path: ['filter'], message: 'the filter' }];
+  return [
+    ...(inputStages.length === 0 ? [] : [{ path: ['input-filter'], message: 'the filter before the sampling' }]),
+    ...(outputStages.length === 0 ? [] : [{ path: ['output-filter'], message: 'the filter behind the sampling' }]),
+  ];
 }
 
 const noFigures: FindingFigures = {

@@ -11,6 +11,8 @@ export type JudgedCode =
   | 'headroom-short'
   | 'overdriven'
   | 'image-over-limit'
+  | 'output-over-mask'
+  | 'crosstalk-over-limit'
   | 'flatness-over-limit'
   | 'response-over-mask'
   | 'delay-over-limit'

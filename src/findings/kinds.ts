@@ -2,6 +2,7 @@
 import { aliasOverLimit } from './alias-over-limit';
 import { beyondData } from './beyond-data';
 import { contradiction } from './contradiction';
+import { crosstalkOverLimit } from './crosstalk-over-limit';
 import { delayOverLimit } from './delay-over-limit';
 import { delaySpreadOverLimit } from './delay-spread-over-limit';
 import { duplicateName } from './duplicate-name';
@@ -19,6 +20,7 @@ import { notAQuantity } from './not-a-quantity';
 import { notJudged } from './not-judged';
 import { nothingUnwanted } from './nothing-unwanted';
 import { outOfRange } from './out-of-range';
+import { outputOverMask } from './output-over-mask';
 import { overdriven } from './overdriven';
 import { overlapsWanted } from './overlaps-wanted';
 import { rateUnavailable } from './rate-unavailable';
@@ -57,6 +59,8 @@ export const kinds: readonly FindingKind[] = [
   headroomShort,
   overdriven,
   imageOverLimit,
+  outputOverMask,
+  crosstalkOverLimit,
   flatnessOverLimit,
   responseOverMask,
   delayOverLimit,

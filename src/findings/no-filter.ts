@@ -1,10 +1,12 @@
 /** `no-filter`: a channel without an analogue path. */
+import type { Channel } from '../spec/channel';
 import { findingIn } from './build';
 import type { FindingKind, Help } from './kind';
 
 const help: Help = {
   summary: 'The channel has no filter: its analogue path is taken as flat.',
-  means: `The channel has no \`filter\`, so every frequency, however high, reaches the sampler (or leaves the hold) at full strength.`,
+  means: `The channel has no \`filter\`, or a relay lacks one of its two, so every frequency, however high, reaches the sampler (or leaves the
+hold) at full strength.`,
   matters: `No real path is flat to infinity. Without one in the spec every source that can land does so unweakened, and every copy
 leaves as the hold makes it.`,
   cure: `State the filter; where there is none, state what really limits the path, such as the amplifier: \`filter: { bandwidth: 400 kHz }\`.`,
@@ -31,15 +33,22 @@ export const noFilter: FindingKind = {
   help,
   remedies: [],
   check: ({ channel }) => {
-    if (channel.stages.length > 0) return [];
-    return [
-      findingIn(channel, {
-        code: 'no-filter',
-        severity: 'hint',
-        message: `\`${channel.name}\` has no \`filter\`, so its path is taken as flat at every frequency. State at least what limits it.`,
-        path: [],
-        part: 'key',
-      }),
-    ];
+    const message = channel.direction === 'relay' ? relayWords(channel) : plainWords(channel);
+    return message === null ? [] : [findingIn(channel, { code: 'no-filter', severity: 'hint', message, path: [], part: 'key' })];
   },
 };
+
+function plainWords({ name, stages }: Channel): string | null {
+  if (stages.length > 0) return null;
+  return `\`${name}\` has no \`filter\`, so its path is taken as flat at every frequency. State at least what limits it.`;
+}
+
+/** A relay has two filters, and each keeps out what the other cannot. */
+function relayWords({ name, inputStages, outputStages }: Channel): string | null {
+  if (inputStages.length > 0 && outputStages.length > 0) return null;
+  if (inputStages.length > 0)
+    return `\`${name}\` has no \`output-filter\`, so every copy leaves as the sampling makes it. State at least what limits its output.`;
+  if (outputStages.length > 0)
+    return `\`${name}\` has no \`input-filter\`, so everything that arrives is sampled as it is. State at least what limits its input.`;
+  return `\`${name}\` has neither \`input-filter\` nor \`output-filter\`, so its path is taken as flat at every frequency. State at least what limits it.`;
+}

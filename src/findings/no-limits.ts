@@ -32,7 +32,7 @@ export const noLimits: FindingKind = {
   remedies: [],
   check: ({ channel }) => {
     if (channel.limits.length > 0 || channel.levelLimit !== null || channel.masks.length > 0) return [];
-    const usual = channel.direction === 'capture' ? '`alias` and `flatness`' : '`image` and `flatness`';
+    const usual = usualLimits[channel.direction];
     return [
       findingIn(channel, {
         code: 'no-limits',
@@ -44,3 +44,9 @@ export const noLimits: FindingKind = {
     ];
   },
 };
+
+const usualLimits = {
+  capture: '`alias` and `flatness`',
+  generate: '`image` and `flatness`',
+  relay: '`alias`, `image` and `flatness`',
+} as const;

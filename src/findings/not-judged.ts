@@ -68,24 +68,29 @@ function missing(channel: Channel, figure: LimitFigure, folded: boolean): string
         ? 'nothing unwanted is given. Name what arrives under `unwanted`'
         : 'no part of what is unwanted can land in a protected range';
     case 'snr':
-      return 'the channel has no noise. Give it `bits`, or `jitter`';
+      return `the channel has no noise. Give it ${channel.direction === 'relay' ? '`jitter`' : '`bits`, or `jitter`'}`;
     case 'flatness':
-      return folded ? foldsFirst : 'a path without a filter is flat by nature. Give it its `filter`';
+      return folded ? foldsFirst : `a path without a filter is flat by nature. Give it its ${filterKey(channel)}`;
+    case 'output':
+      return 'no segment of its mask says `below`';
     case 'crosstalk':
       return 'the channel has no time slots. Give it `slots`';
     case 'delay':
     case 'delay-spread':
       if (hasTable(channel)) return 'a measured stage has no phase. Give its table a phase column';
-      return 'a path without a filter delays nothing. Give it its `filter`';
+      return `a path without a filter delays nothing. Give it its ${filterKey(channel)}`;
     case 'response':
     case 'through':
-      return 'a path without a filter is flat by nature, and that is inside the mask. Give it its `filter`';
+      return `a path without a filter is flat by nature, and that is inside the mask. Give it its ${filterKey(channel)}`;
     case 'image':
     case 'headroom':
     case 'level':
-    case 'output':
       return folded ? foldsFirst : 'the channel has nothing that could break it';
   }
+}
+
+function filterKey({ direction }: Channel): string {
+  return direction === 'relay' ? '`input-filter` and `output-filter`' : '`filter`';
 }
 
 function hasTable({ stages }: Channel): boolean {

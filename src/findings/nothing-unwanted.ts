@@ -1,10 +1,10 @@
-/** `nothing-unwanted`: a capture channel that says nothing of what must be kept out. */
+/** `nothing-unwanted`: a capture or relay channel that says nothing of what must be kept out. */
 import { findingIn } from './build';
 import type { FindingKind, Help } from './kind';
 
 const help: Help = {
   summary: 'The channel says nothing of what must be kept out.',
-  means: `A capture channel has no \`unwanted\`, so nothing can land in its protected range and no alias can be judged.`,
+  means: `A capture or relay channel has no \`unwanted\`, so nothing can land in its protected range and no alias can be judged.`,
   matters: `Every input has something beyond its band: a switcher, a drive, a radio, the noise of what comes before it.`,
   cure: `Name each source with its frequencies and its level. Where nothing is known, \`unwanted: anything\` takes a full-scale tone
 anywhere outside the wanted band, and \`unwanted: { anything: -40 dBFS }\` a weaker one.`,
@@ -31,7 +31,7 @@ export const nothingUnwanted: FindingKind = {
   help,
   remedies: [],
   check: ({ channel }) => {
-    if (channel.direction !== 'capture' || channel.unwanted.length > 0) return [];
+    if (channel.direction === 'generate' || channel.unwanted.length > 0) return [];
     return [
       findingIn(channel, {
         code: 'nothing-unwanted',
