@@ -24,6 +24,7 @@ function bench(): Bench {
   const platform: Platform = {
     version: 'test',
     now: () => (time += 100),
+    loadFile: null,
     yieldControl: () => new Promise((resolve) => setImmediate(resolve)),
   };
   const specs = createOpenSpecs(platform);
