@@ -31,6 +31,11 @@ export const examples: readonly Example[] = [
     label: 'Ice echo receiver',
     detail: 'Capture: an intermediate frequency of 4.2 to 4.5 MHz sampled near 1 MHz, whole and the right way round.',
   },
+  {
+    file: 'strain-link.bandkeep.yaml',
+    label: 'Strain link',
+    detail: 'Relay: strain across a rotating shaft by pulses, time slots, and one resistor and one capacitor on each side.',
+  },
 ];
 
 /** Lets the reader choose an example and opens a copy of it. */
