@@ -1,7 +1,9 @@
 /** Every frequency at which a response crosses half the power of its largest value: one of a low-pass, two of a band-pass or a band-stop. */
 import type { Response } from '../signal/response';
 import { largestOverBands } from '../signal/search';
-import { halfPowerLog } from './half-power';
+
+/** ln of the amplitude ratio at half power; a hair below it, so that a ripple which just touches half power does not count. */
+const halfPowerLog = -0.5 * Math.LN2 - 4e-9;
 
 /** How often the end of the search may double before all beyond counts as one. */
 const doublings = 200;

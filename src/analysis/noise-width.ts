@@ -16,6 +16,8 @@ export function noiseWidth(stages: readonly StagePath[]): NoiseWidth {
   if (known.length < filters.length) return { kind: 'unknown' };
   const found = noiseBandwidth(known);
   if (found.kind === 'endless') return found;
-  const most = largestOverBands(product(stages.map(({ response }) => response)), [{ low: 0, high: Infinity }]);
-  return most === null ? { kind: 'unknown' } : { kind: 'finite', hz: found.value / Math.exp(2 * most.logGain) };
+  const response = product(stages.map((stage) => stage.response));
+  const most = largestOverBands(response, [{ low: 0, high: Infinity }]);
+  if (most === null) return { kind: 'unknown' };
+  return { kind: 'finite', hz: found.value / Math.exp(2 * response.logGain(most.frequencyHz)) };
 }

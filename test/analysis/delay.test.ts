@@ -19,7 +19,8 @@ function spreadOnGrid(channel: Channel, lowHz: number, highHz: number): number {
   const path = channelPath(channel);
   const delays = Array.from({ length: 2001 }, (_, index) => {
     const f = lowHz + ((highHz - lowHz) * index) / 2000;
-    return -(pathPhaseRad(path, f + 0.5) - pathPhaseRad(path, f - 0.5)) / (2 * Math.PI);
+    const phase = (at: number): number => pathPhaseRad(path, at) ?? NaN;
+    return -(phase(f + 0.5) - phase(f - 0.5)) / (2 * Math.PI);
   });
   return Math.max(...delays) - Math.min(...delays);
 }
