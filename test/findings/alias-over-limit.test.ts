@@ -85,4 +85,57 @@ describe('alias-over-limit', () => {
     });
     assert.match(messages('alias-over-limit', channel, hair)[0] ?? '', /at −95\.98 dBFS, 0\.02 dB over/);
   });
+
+  it('says which harmonic it is', () => {
+    const fifth = figures({
+      limits: broken.limits,
+      aliases: [aliasFigure({ source: 'sump-pump switcher', harmonic: 5, frequency: 1.55e6, lands: 9e3 })],
+    });
+    assert.match(
+      messages('alias-over-limit', channel, fifth)[0] ?? '',
+      /^`sump-pump switcher`, harmonic 5 at 1\.55 MHz lands on 9 kHz at /,
+    );
+  });
+
+  describe('for a limit of the sum', () => {
+    const sources = [band(40e3, 3e6, -55, 'drive hash'), anything(), band(1e6, 2e6, 0, 'pump'), band(2e6, 3e6, 0, 'hum')];
+    const summed = bearing({ unwanted: sources, limits: [limit('alias', -96, { sum: true, ref: 'R-7' })] });
+    const open = { limit: null, margin: null };
+    const all = figures({
+      limits: [limitFigure('alias', -96, -90.5, { nominal: -92, where, worstAt: corner, ref: 'R-7' })],
+      aliases: [
+        aliasFigure({ ...open, level: -95, sum: -95 }),
+        aliasFigure({ ...open, source: 'anything', index: 1, level: -98, sum: -98 }),
+        // Weaker than the others by its strongest tone, but not by all of its tones.
+        aliasFigure({ ...open, source: 'pump', index: 2, level: -99, sum: -94, harmonic: 3 }),
+        aliasFigure({ ...open, source: 'hum', index: 3, level: null, sum: null }),
+      ],
+    });
+
+    it('is one finding at the limit, which names the strongest contributors in order', () => {
+      const [finding, ...more] = found('alias-over-limit', summed, all);
+      assert.equal(
+        finding?.message,
+        'All that lands in the protected ranges adds up to −90.5 dBFS, 5.5 dB over the limit of −96 dBFS for the sum of all aliases ' +
+          '(worst case, corner +4 %; nominal −92); strongest `pump` with −94 dBFS, then `drive hash` with −95 dBFS, then `anything` with −98 dBFS.',
+      );
+      assert.deepEqual(more, []);
+      assert.deepEqual(finding.at, { place: { channel: 'bearing-x', path: ['limits', 'alias', 'sum'] } });
+      assert.equal(finding.ref, 'R-7');
+      assert.deepEqual(
+        finding.related.map(({ place }) => place.path),
+        [['unwanted', 2, 'band'], ['unwanted', 0, 'band'], ['unwanted', 1], ['filter']],
+      );
+    });
+
+    it('counts what is not named', () => {
+      const five = figures({ ...all, aliases: [...all.aliases, aliasFigure({ ...open, index: 3, sum: -120, level: -120 })] });
+      assert.match(messages('alias-over-limit', summed, five)[0] ?? '', / and 1 more\.$/);
+    });
+
+    it('keeps quiet while the sum holds, whatever a single source does', () => {
+      const held = figures({ ...all, limits: [limitFigure('alias', -90, -90.5)] });
+      assert.deepEqual(found('alias-over-limit', summed, held), []);
+    });
+  });
 });

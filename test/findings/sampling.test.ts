@@ -110,10 +110,22 @@ describe('rate-unavailable', () => {
 describe('overlaps-wanted', () => {
   it('names the stretch and stands on the source', () => {
     const channel = bearing({ unwanted: [band(9e3, 3e6, -55, 'drive hash')] });
-    const [finding] = found('overlaps-wanted', channel, figures({ overlaps: [{ index: 0, harmonic: 1, lowHz: 9e3, highHz: 10e3 }] }));
+    const [finding] = found(
+      'overlaps-wanted',
+      channel,
+      figures({ overlaps: [{ index: 0, harmonic: 1, lowHz: 9e3, highHz: 10e3 }] }),
+    );
     assert.match(finding?.message ?? '', /^`drive hash` lies inside the wanted band over 9 kHz \.\. 10 kHz\./);
     assert.deepEqual(finding?.at, { place: { channel: 'bearing-x', path: ['unwanted', 0, 'band'] } });
     assert.deepEqual(found('overlaps-wanted', channel, figures()), []);
+  });
+
+  it('says which harmonic it is', () => {
+    const overlaps = [{ index: 0, harmonic: 3, lowHz: 6e3, highHz: 6e3 }];
+    assert.match(
+      messages('overlaps-wanted', bearing(), figures({ overlaps }))[0] ?? '',
+      /^`drive hash`, harmonic 3 lies inside the wanted band at 6 kHz\./,
+    );
   });
 });
 
