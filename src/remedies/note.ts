@@ -1,7 +1,7 @@
 /** What a search says beside its fixes: why no corner alone does it, what comes nearest, or that no rate there is can help. */
 import { decimalsFor, type Code, type Finding } from '../findings';
 import type { Channel } from '../spec';
-import { formatDb } from '../units/format';
+import { formatDb, formatTime } from '../units/format';
 import type { Blocked } from './fix';
 import type { KnobConflict } from './knob';
 import { rateOptions } from './rate-options';
@@ -18,7 +18,7 @@ export function noteOf(channel: Channel, finding: Finding, { cornerConflict, blo
   const words = [
     ...(cornerConflict === null ? [] : [conflictWords(cornerConflict)]),
     ...(!isCured && aboutRates.has(finding.code) && !hasRates(channel) ? [noRateWords(channel)] : []),
-    ...(blockedBy === null ? [] : [blockedWords(blockedBy)]),
+    ...(blockedBy === null ? [] : [blockedWords(blockedBy, channel)]),
   ];
   return words.length === 0 ? null : words.join(' ');
 }
@@ -40,6 +40,8 @@ function conflictWords({ own, other }: KnobConflict): string {
   return `No corner alone does it: the ${own.limit} limit asks for ${own.words}, the ${other.limit} limit for ${other.words}.`;
 }
 
-function blockedWords({ limit, misses, candidate }: Blocked): string {
-  return `Nothing simple works. What comes nearest (${candidate}) misses the ${limit} limit by ${formatDb(misses, 'dB', decimalsFor(limit, misses))}.`;
+function blockedWords({ limit, misses, candidate }: Blocked, { limits }: Channel): string {
+  const isTime = limits.some(({ key, unit }) => key === limit && unit === 's');
+  const by = isTime ? formatTime(misses) : formatDb(misses, 'dB', decimalsFor(limit, misses));
+  return `Nothing simple works. What comes nearest (${candidate}) misses the ${limit} limit by ${by}.`;
 }

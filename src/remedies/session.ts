@@ -39,7 +39,7 @@ function sessionOf(start: Start, store: Store): Session {
   const { reading } = judgement;
   const tried = new Map<string, Trial>();
   const before = store.analysed;
-  let nearest: Blocked | null = null;
+  let nearest: Nearest | null = null;
   return {
     ...start,
     reading,
@@ -47,7 +47,7 @@ function sessionOf(start: Start, store: Store): Session {
       return store.analysed - before;
     },
     get nearest() {
-      return nearest;
+      return nearest === null ? null : { limit: nearest.limit, misses: nearest.misses, candidate: nearest.candidate };
     },
     *attempt(changes) {
       const made = changes.filter((change) => change !== null);
@@ -72,19 +72,27 @@ export function ownMargin(finding: Finding, figures: Figures | null): number | n
   return figures?.limits.find((figure) => figure.limit === finding.limit)?.margin ?? null;
 }
 
+/** What stood in the way, with its size as `sizeOf` has it. */
+interface Nearest extends Blocked {
+  readonly size: number;
+}
+
 /** Keeps whichever misses by less: the miss known so far or that of this trial. */
-function nearer(known: Blocked | null, trial: Trial, channel: Channel): Blocked | null {
+function nearer(known: Nearest | null, trial: Trial, channel: Channel): Nearest | null {
   if (works(trial) || trial.figures === null) return known;
   const misses = [...trial.remaining, ...trial.newErrors].map((finding) => missOf(finding, trial.figures, channel));
-  const worst = misses.reduce<Miss | null>((most, miss) => (most !== null && most.by >= miss.by ? most : miss), null);
-  if (worst === null || !Number.isFinite(worst.by)) return known;
-  if (known !== null && known.misses <= worst.by) return known;
-  return { limit: worst.limit, misses: worst.by, candidate: changesWords(trial.changes) };
+  const worst = misses.reduce<Miss | null>((most, miss) => (most !== null && most.size >= miss.size ? most : miss), null);
+  if (worst === null || !Number.isFinite(worst.size)) return known;
+  if (known !== null && known.size <= worst.size) return known;
+  return { limit: worst.limit, misses: worst.by, size: worst.size, candidate: changesWords(trial.changes) };
 }
 
 interface Miss {
   readonly limit: string;
+  /** In the limit's unit. */
   readonly by: number;
+  /** In dB, so that times and levels compare. */
+  readonly size: number;
 }
 
 /** By how much a finding of a trial misses being none; infinite where it has no number. */
@@ -92,5 +100,7 @@ function missOf(finding: Finding, figures: Figures | null, channel: Channel): Mi
   const margin = finding.figures?.margin ?? null;
   const figure = figures?.limits.find(({ limit }) => limit === finding.limit);
   const needed = finding.code === 'thin-margin' && figure !== undefined ? thinBelow(channel, figure) : 0;
-  return { limit: finding.limit ?? finding.code, by: margin === null ? Infinity : needed - margin };
+  const by = margin === null ? Infinity : needed - margin;
+  const size = figure?.unit === 's' ? 20 * Math.log10(1 + Math.max(0, by) / Math.max(figure.at, Number.MIN_VALUE)) : by;
+  return { limit: finding.limit ?? finding.code, by, size };
 }

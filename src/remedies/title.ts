@@ -40,7 +40,8 @@ function isMoved(figure: LimitFigure, before: Figures, channel: Channel): boolea
   const was = before.limits.find(({ limit }) => limit === figure.limit)?.margin ?? null;
   if (was === null || figure.margin === null) return false;
   if (figure.limit === 'flatness') return Math.abs(figure.margin - was) >= 0.005;
-  return figure.margin <= was - 0.05 && figure.margin < 3 * thinBelow(channel, figure);
+  const noticeable = figure.unit === 's' ? 0.05 * figure.at : 0.05;
+  return figure.margin <= was - noticeable && figure.margin < 3 * thinBelow(channel, figure);
 }
 
 function marginWords({ limit, margin, unit }: LimitFigure): string {
