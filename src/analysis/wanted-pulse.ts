@@ -1,8 +1,8 @@
 /** What the wanted path passes where it is sampled: the aperture, the hold, or of a relay's gate the part that is no copy. */
-import { trackAndHoldDelay, trackAndHoldDelayRange } from '../signal/pulses/track-and-hold';
+import { trackAndHoldDelay, trackAndHoldDelayRange, trackAndHoldWeight } from '../signal/pulses/track-and-hold';
 import type { Enclosure, Response } from '../signal/response';
 import type { Channel } from '../spec/channel';
-import { pulseDelayEnclosure, pulseDelaySeconds, pulseResponse } from './pulse';
+import { pulseDelayEnclosure, pulseDelaySeconds, pulsePhaseRad, pulseResponse } from './pulse';
 import { relayWeights, trackAndHoldOf, weightResponse } from './relay/weights';
 
 /** A channel as far as its sampling goes. */
@@ -30,4 +30,13 @@ export function wantedDelayEnclosure({ pulse, gate }: Sampled, rateHz: number, r
   if (gate === null) return pulseDelayEnclosure(pulse, rateHz, range);
   if (gate.kind === 'pulse') return { low: 0, high: 0 };
   return trackAndHoldDelayRange(trackAndHoldOf(gate.track, rateHz), range.low, range.high);
+}
+
+/** Its phase in radians without the half turns at nulls: nothing where a gate lets the signal itself through. */
+export function wantedPhaseRad({ pulse, gate }: Sampled, rateHz: number, frequencyHz: number): number {
+  if (gate === null) return pulsePhaseRad(pulse, rateHz, frequencyHz);
+  if (gate.kind === 'pulse') return 0;
+  // The imaginary part never rises above 0, so the angle needs no unwrapping.
+  const { re, im } = trackAndHoldWeight(trackAndHoldOf(gate.track, rateHz), 0, frequencyHz);
+  return Math.atan2(im, re);
 }

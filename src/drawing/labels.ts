@@ -18,7 +18,12 @@ export function placedLabels(plot: Plot, frame: Frame, theme: Theme, widthOf: (t
   const occupancy = createOccupancy();
   for (const item of plot.items) addInk(item, frame, occupancy.add);
   const lineHeight = Math.ceil(theme.fontPx * 1.35);
-  return placeLabels(requests, { widthOf, lineHeight, inkUnder: occupancy.under, taken: markBoxes(plot, frame) });
+  return placeLabels(requests, {
+    widthOf,
+    lineHeight,
+    inkUnder: occupancy.under,
+    taken: [...markBoxes(plot, frame), ...titleBoxes(plot, frame, widthOf)],
+  });
 }
 
 /** The labels as texts; those of harm and limits take their colour, the rest the theme's text. */
@@ -123,6 +128,15 @@ function markBoxes(plot: Plot, frame: Frame): Box[] {
       const [x, y] = pixelOf(shape.frequencyHz, shape.level, pane);
       return [{ left: x - 6, right: x + 6, top: y - (shape.mark === 'over' ? 12 : 5), bottom: y + 5 }];
     });
+  });
+}
+
+/** Where the titles of the frequency axes stand, between panes. */
+function titleBoxes(plot: Plot, frame: Frame, widthOf: (text: string) => number): Box[] {
+  return plot.panes.flatMap((pane) => {
+    const box = frame.panes.find(({ id }) => id === pane.id)?.box;
+    if (box === undefined) return [];
+    return [{ left: box.right - widthOf(pane.x.title) - 4, right: box.right, top: box.bottom + 25, bottom: box.bottom + 40 }];
   });
 }
 

@@ -5,7 +5,7 @@ import { flat, item, joinedBothWays, seriesOf } from './items';
 import { copiesUpTo } from './leaving-copies';
 import { envelopeItems } from './leaving-envelopes';
 import { copyItems, leavingPane } from './leaving-items';
-import { maskItems, masksOf } from './mask-items';
+import { maskItems, maskNames, masksOf } from './mask-items';
 import { imageLimitAt, leavingView } from './leaving-view';
 import type { LeavingView } from './leaving-view';
 import { limitFigure, pulseKey } from './subject';
@@ -50,10 +50,7 @@ function leavingPlot(view: LeavingView): Plot {
     ...noiseItems(view),
     ...markItems(view),
   ]);
-  const names = new Map([
-    ['wanted', 'wanted'],
-    ['copies', 'copies'],
-  ]);
+  const names = new Map<string, string>([['wanted', 'wanted'], ['copies', 'copies'], ...maskNames(masksOf(subject, 'output'))]);
   return {
     id: 'leaving',
     title: 'What leaves',

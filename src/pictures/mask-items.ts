@@ -24,6 +24,11 @@ export function masksOf({ channel }: Subject, ...keys: readonly MaskLimit['key']
   return channel.masks.filter(({ key }) => keys.includes(key));
 }
 
+/** What the legend calls the masks, by their series. */
+export function maskNames(masks: readonly MaskLimit[]): [string, string][] {
+  return masks.map((mask) => [`mask-${mask.key}`, nameOf(mask)]);
+}
+
 /** All segments of a mask that lie on the pane, with the mask's worst point. */
 export function maskItems(subject: Subject, mask: MaskLimit, pane: MaskPane): Item[] {
   const shown = mask.segments.flatMap((segment, index) => {

@@ -9,7 +9,7 @@ import type { FrequencyAxis, Item, LevelAxis, Plot, Points, Shape } from '../pro
 import { formatDb, formatFrequency } from '../units/format';
 import { frequencyAxis } from './axes';
 import { flat, item, joinedBothWays, seriesOf } from './items';
-import { boundsWithin, maskItems, masksOf } from './mask-items';
+import { boundsWithin, maskItems, maskNames, masksOf } from './mask-items';
 import { sampleCurve } from './sample-curve';
 import { filterPlace, limitFigure, pulseKey } from './subject';
 import type { Subject } from './subject';
@@ -50,7 +50,7 @@ export function closeUpPlot(subject: Subject): Plot {
     ),
     shown: 'always',
     panes: [{ id: closeUpPane, x, y }],
-    series: seriesOf(items, new Map()),
+    series: seriesOf(items, new Map(maskNames(closeUpMasks(subject)))),
     items,
     table: tableOf(subject, limit),
   };

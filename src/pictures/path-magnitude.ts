@@ -1,5 +1,5 @@
 /** The whole path over all that matters: the total, every stage, aperture or hold, and the tolerances' envelope. */
-import { gainDb, lossDb, pulseNulls, worstPath } from '../analysis';
+import { gainDb, hasPulse, lossDb, pulseNulls, worstPath } from '../analysis';
 import type { Response } from '../analysis';
 import { partsVary } from '../analysis/tolerances';
 import type { FrequencyAxis, Item, LevelAxis, Plot, Points, Stroke } from '../protocol/picture';
@@ -7,7 +7,7 @@ import { stagePath } from '../spec';
 import { formatFrequency } from '../units/format';
 import { frequencyAxis } from './axes';
 import { item, joinedBothWays, seriesOf } from './items';
-import { axisWith, boundsWithin, farthestOf, maskItems, masksOf } from './mask-items';
+import { axisWith, boundsWithin, farthestOf, maskItems, maskNames, masksOf } from './mask-items';
 import { sampleCurve } from './sample-curve';
 import { filterPlace, pulseKey } from './subject';
 import type { Subject } from './subject';
@@ -50,7 +50,7 @@ export function magnitudePlot(subject: Subject): Plot {
     panes: [{ id: magnitudePane, x, y }],
     series: seriesOf(
       [...items].sort((a, b) => rankOf(a) - rankOf(b)),
-      new Map(),
+      new Map(maskNames(masks)),
     ),
     items,
     table: tableOf(subject),
@@ -149,7 +149,7 @@ function stageItems(subject: Subject, draw: (response: Response) => Points, x: F
 
 function pulseItems(subject: Subject, draw: (response: Response) => Points): Item[] {
   const { channel } = subject;
-  if (channel.pulse.shape === 'instant') return [];
+  if (!hasPulse(channel)) return [];
   const name = pulseKey(channel);
   return [
     item({
@@ -159,7 +159,9 @@ function pulseItems(subject: Subject, draw: (response: Response) => Points): Ite
       role: 'pulse',
       name,
       words: sentences(
-        `Gain of the ${name} alone, ${channel.direction === 'capture' ? 'at the input frequency' : 'at the output frequency'}`,
+        name === 'gate'
+          ? 'What the gate leaves of the wanted path'
+          : `Gain of the ${name} alone, at the ${name === 'aperture' ? 'input' : 'output'} frequency`,
       ),
       place: subject.placeOf([name]),
       shapes: [{ kind: 'curve', points: draw(subject.path.pulse), stroke: 'dotted', weight: 'thin' }],

@@ -1,5 +1,5 @@
 /** The analogue path: its magnitude stage by stage over all that matters, and the wanted band close up. */
-import { halfPowerPoints, pathDelay } from '../analysis';
+import { halfPowerPoints, hasPulse, pathDelay } from '../analysis';
 import { flatnessOf } from '../analysis/flatness';
 import type { Section } from '../protocol/picture';
 import { formatDb, formatFrequency } from '../units/format';
@@ -14,7 +14,7 @@ import { standingOf } from './words';
 export function pathSection(subject: Subject): Section {
   const limit = limitFigure(subject, 'flatness');
   const closeUp = subject.channel.wanted.length === 0 ? [] : [closeUpPlot(subject)];
-  const plain = subject.channel.stages.length === 0 && subject.channel.pulse.shape === 'instant';
+  const plain = subject.channel.stages.length === 0 && !hasPulse(subject.channel);
   const timed = !plain && pathDelay(subject.path, subject.channel.referenceHz) !== null;
   const timing = timed ? [phasePlot(subject), delayPlot(subject)] : [];
   return {

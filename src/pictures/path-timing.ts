@@ -1,5 +1,5 @@
 /** Phase and group delay of the whole path, drawn when the reader asks for them; only for a path whose stages all have a phase. */
-import { pathDelay, pathPhaseRad, pulsePhaseRad } from '../analysis';
+import { pathDelay, pathPhaseRad, wantedPhaseRad } from '../analysis';
 import type { Item, LevelUnit, Plot, Points } from '../protocol/picture';
 import { formatDb, formatFrequency, formatTime } from '../units/format';
 import { item } from './items';
@@ -12,7 +12,7 @@ import { sentences } from './words';
 /** Phase in degrees, the pulse's included as far as it is a delay. */
 export function phasePlot(subject: Subject): Plot {
   const { channel, path } = subject;
-  const pulse = (f: number): number => pulsePhaseRad(channel.pulse, channel.rate.hz, f);
+  const pulse = (f: number): number => wantedPhaseRad(channel, channel.rate.hz, f);
   const degrees = (f: number): number => (((pathPhaseRad(path, f) ?? NaN) + pulse(f)) * 180) / Math.PI;
   const words = `Phase, ${formatDb(degrees(channel.referenceHz), 'degrees')} at ${formatFrequency(channel.referenceHz)}`;
   return timingPlot(subject, { id: 'phase', title: 'Phase', unit: 'deg', curve: degrees, words });

@@ -111,16 +111,18 @@ export class Panel {
       view.destroy();
       this.sections.delete(id);
     }
-    for (const section of picture.sections) this.drawSection(section);
+    // From the last one up, so that a new section can be put before the one that follows it and none that is there has to move.
+    picture.sections.reduceRight<Element | null>((next, section) => this.drawSection(section, next), null);
   }
 
-  private drawSection(section: Section): void {
-    const view = this.sections.get(section.id) ?? this.addSection(section.id);
+  private drawSection(section: Section, next: Element | null): Element {
+    const view = this.sections.get(section.id) ?? this.addSection(section.id, next);
     view.show(section, this.foldOf(section.id), this.theme);
     view.light(this.place);
+    return view.element;
   }
 
-  private addSection(id: string): SectionView {
+  private addSection(id: string, next: Element | null): SectionView {
     const view = new SectionView(id, {
       fold: (section) => {
         this.toggleFold(section);
@@ -129,9 +131,7 @@ export class Panel {
       targetOf: (plotId) => this.targetOf(plotId),
     });
     this.sections.set(id, view);
-    // `path` stands in every picture and comes last.
-    if (id === 'path') this.main.append(view.element);
-    else this.main.prepend(view.element);
+    this.main.insertBefore(view.element, next);
     return view;
   }
 

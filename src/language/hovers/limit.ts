@@ -1,10 +1,11 @@
 /** Hover of a limit: how it stands, and what contributes, strongest first. */
 import type { Figures, LimitFigure, NoiseFigures } from '../../analysis';
-import { formatAmount, formatDb, formatSignedPercent } from '../../units/format';
+import type { LevelLimit } from '../../spec';
+import { formatAmount, formatDb } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { levelRows } from './level';
 import type { Subject } from './subject';
-import { decimalsOf, frequencyOr, marginWords } from './words';
+import { decimalsOf, frequencyOr, marginWords, worstAtWords } from './words';
 
 /** How many contributions are listed. */
 const listed = 5;
@@ -16,7 +17,7 @@ export function limitHover({ channel, figures, path }: Subject): Answer | null {
   return {
     headline: headlineOf(limit),
     rows: [
-      ...standingRows(limit),
+      ...standingRows(limit, limit.limit === 'level' ? rangeWords(channel.levelLimit) : null),
       ...contributions(limit, figures),
       ...(limit.unit === 'dBFS' ? levelRows(channel, limit.at).map(([unit, value]): Row => [`the limit, ${unit}`, value]) : []),
     ],
@@ -45,14 +46,21 @@ function headlineOf(limit: LimitFigure): string {
   return `\`${limit.limit}\` ${level(limit, limit.value)}, ${marginWords({ ...limit, margin: limit.margin })}`;
 }
 
-function standingRows(limit: LimitFigure): Row[] {
-  const worst = Object.entries(limit.worstAt ?? {}).map(([label, deviation]) => `${label} ${formatSignedPercent(deviation)}`);
+function standingRows(limit: LimitFigure, range: string | null): Row[] {
   return knownRows(
-    ['limit', level(limit, limit.at)],
+    ['limit', range ?? level(limit, limit.at)],
     ['nominal', limit.nominal === null ? null : level(limit, limit.nominal)],
     ['reached at', limit.where === null ? null : frequencyOr(limit.where.frequency, '')],
-    ['worst case at', worst.length === 0 ? null : worst.join(', ')],
+    ['worst case at', worstAtWords(limit.worstAt)],
   );
+}
+
+/** Both ends of a range of levels; one that was left out is open. */
+function rangeWords(range: LevelLimit | null): string | null {
+  if (range === null) return null;
+  if (range.highDb === Infinity) return `${formatDb(range.lowDb, 'dBFS', 2)} or more`;
+  const high = formatDb(range.highDb, 'dBFS', 2);
+  return range.lowDb === -Infinity ? `${high} or less` : `${formatDb(range.lowDb, 'dBFS', 2)} .. ${high}`;
 }
 
 function level(limit: LimitFigure, value: number): string {

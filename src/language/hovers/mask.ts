@@ -1,10 +1,10 @@
 /** Hover of a mask or one of its segments: the worst value, the bound there and the margin. */
 import type { Figures, LimitFigure, MaskFigure } from '../../analysis';
 import type { MaskEdge, MaskLimit, MaskSegment, Path } from '../../spec';
-import { formatDb, formatFrequency, formatSignedPercent } from '../../units/format';
+import { formatDb, formatFrequency } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import type { Subject } from './subject';
-import { bandWords, marginWords } from './words';
+import { bandWords, marginWords, worstAtWords } from './words';
 
 /** The segment at the subject's path, or the whole mask; null where the channel has no such mask. */
 export function maskHover({ channel, figures, path }: Subject): Answer | null {
@@ -98,6 +98,5 @@ function edgeWords({ fromDb, toDb }: MaskEdge, unit: string): string {
 }
 
 function worstRows(worstAt: MaskFigure['worstAt']): Row[] {
-  const worst = Object.entries(worstAt ?? {}).map(([label, deviation]) => `${label} ${formatSignedPercent(deviation)}`);
-  return knownRows(['worst case at', worst.length === 0 ? null : worst.join(', ')]);
+  return knownRows(['worst case at', worstAtWords(worstAt)]);
 }

@@ -1,5 +1,6 @@
 /** Phrases that several hovers share. */
-import { formatAmount, formatDb, formatFrequency } from '../../units/format';
+import type { WorstAt } from '../../analysis';
+import { formatAmount, formatDb, formatFrequency, formatSignedPercent } from '../../units/format';
 
 /** What a limit's margin depends on for its wording. */
 interface Margin {
@@ -48,4 +49,10 @@ export function frequencyOr(hz: number | null | undefined, none: string): string
 /** How a band or a landing lies after folding. */
 export function turnWords(inverted: boolean): string {
   return inverted ? 'inverted' : 'upright';
+}
+
+/** Which tolerances a worst case is reached at, those that are at nominal left out; null where none is at work. */
+export function worstAtWords(worstAt: WorstAt | null): string | null {
+  const moved = Object.entries(worstAt ?? {}).filter(([, deviation]) => deviation !== 0);
+  return moved.length === 0 ? null : moved.map(([label, deviation]) => `${label} ${formatSignedPercent(deviation)}`).join(', ');
 }
