@@ -33,7 +33,8 @@ export function keywordsOf(lines: readonly Line[]): Keyed | TableFault {
     if (key !== null) current = (key[1] ?? '').toLowerCase().replace(/-/g, ' ').replace(/\s+/g, ' ').trim();
     const own = sections.get(current) ?? [];
     const rest = key === null ? text : (key[2] ?? '');
-    sections.set(current, rest === '' ? own : [...own.slice(0, own.length), { text: rest, line }]);
+    if (rest !== '') own.push({ text: rest, line });
+    sections.set(current, own);
     if (current === 'end') break;
   }
   return keyed(sections);

@@ -6,6 +6,7 @@ import { delays, holdValues, narrowGates, pulses, trains } from './holds';
 import { orders } from './orders';
 import { prototypes } from './prototypes';
 import { kinds, responses } from './responses';
+import { touchstone } from './touchstone';
 import { brickWalls, toOrderTwenty } from './to-order-twenty';
 
 export const groups: readonly OutsideGroup[] = [
@@ -24,4 +25,5 @@ export const groups: readonly OutsideGroup[] = [
   bandwidths,
   passive,
   orders,
+  touchstone,
 ];
