@@ -32,7 +32,8 @@ export function gateHover({ channel, figures }: Subject): Answer | null {
   return gate.kind === 'track' ? trackAnswer(gate.track, figures) : pulseAnswer(gate.pulse, figures);
 }
 
-function pulseAnswer(gate: Pulse, { rate }: Figures): Answer | null {
+function pulseAnswer(gate: Pulse, figures: Figures): Answer | null {
+  const { rate } = figures;
   const shape = pulseShape(gate, rate);
   const own = gateFigures(gate, rate, listedCopies);
   if (shape === null || own === null) return null;
@@ -45,11 +46,19 @@ function pulseAnswer(gate: Pulse, { rate }: Figures): Answer | null {
       ...otherWidths.flatMap((factor) => widthRow(gate, factor, rate)),
       ...knownRows(
         ['its spectrum is nothing at', nulls.length === 0 ? null : nulls.join(', ')],
+        ['copy 1 as it leaves', leavingWords(figures)],
         ['the wanted band', 'stays flat and undelayed: a gate weighs each copy as a whole'],
       ),
     ],
     formula: 'c_k = (area/T)·P(k·fs): copy k leaves by |c_k|/c_0 weaker than the wanted band, whatever its frequency',
   };
+}
+
+/** What gate and filters leave of the first copy. */
+function leavingWords({ images }: Figures): string | null {
+  const first = images.filter(({ copy }) => copy === 1).sort((a, b) => b.relative - a.relative)[0];
+  if (first === undefined || !Number.isFinite(first.relative)) return null;
+  return `${formatDb(first.relative, 'dBc')} at ${formatFrequency(first.frequency)}, ${first.side} side`;
 }
 
 function headlineOf(gate: Pulse, { share, ownDb, copiesDb }: GateFigures): string {

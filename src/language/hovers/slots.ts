@@ -18,7 +18,7 @@ export function slotsHover({ channel, figures }: Subject): Answer | null {
       ['the pulse in it', formatTime(pulseOf(channel, figures))],
       ['guard', formatTime(slots.guardSeconds)],
       ['time constant of the link', `${formatTime(1 / (2 * Math.PI * slots.linkHz))}, from ${formatFrequency(slots.linkHz)}`],
-      ['6 dB less for each', `${formatTime((Math.LN10 * 0.3) / (2 * Math.PI * slots.linkHz))} of guard`],
+      ['6 dB less for each', `${formatTime(Math.LN2 / (2 * Math.PI * slots.linkHz))} of guard`],
     ),
     formula: 'A first-order link of corner B falls by 20·log10(e)·2π·B·guard before the next slot opens',
   };
