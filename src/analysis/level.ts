@@ -5,6 +5,7 @@ import type { Channel } from '../spec/channel';
 import type { ChannelPath } from './channel-path';
 import { toDb } from './decibels';
 import type { WorstAt } from './figures';
+import { fromSampler } from './relay/wanted-output';
 import { levelReference } from './test-tone';
 import { partsVary } from './tolerances';
 import { nominalPath, worstPath } from './worst-path';
@@ -37,13 +38,19 @@ export function levelRangeOf(channel: Channel, path: ChannelPath): LevelRange | 
 type Sense = 'largest' | 'smallest';
 
 function endOf(channel: Channel, path: ChannelPath, sense: Sense): LevelEnd & { readonly evaluations: number } {
-  const referenceHz = levelReference(channel);
-  const nominal = extreme(channel, nominalPath(path, referenceHz), sense);
+  const nominal = extreme(channel, outputOf(channel, path, null), sense);
   if (!partsVary(channel)) return { ...nominal, nominalDb: nominal.valueDb };
-  const worst = extreme(channel, worstPath(path, { sense, referenceHz, axis: 'hertz' }), sense);
+  const worst = extreme(channel, outputOf(channel, path, sense), sense);
   // The proved bounds of nominal and worst may cross by the gap.
   const nominalDb = sense === 'largest' ? Math.min(nominal.valueDb, worst.valueDb) : Math.max(nominal.valueDb, worst.valueDb);
   return { ...worst, nominalDb, evaluations: nominal.evaluations + worst.evaluations };
+}
+
+/** From the stated level to the output: nominally without a sense. */
+function outputOf(channel: Channel, path: ChannelPath, sense: Sense | null): WorstPath {
+  if (channel.direction === 'relay' && channel.levelsAt === 'sampler') return fromSampler(channel, sense);
+  const referenceHz = levelReference(channel);
+  return sense === null ? nominalPath(path, referenceHz) : worstPath(path, { sense, referenceHz, axis: 'hertz' });
 }
 
 /** The furthest that any wanted band goes in one direction, each with its own level. */
