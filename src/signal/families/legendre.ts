@@ -1,8 +1,8 @@
 /** Legendre (optimum-L) low-pass filters: the steepest edge of all that fall everywhere. */
-import { complexProduct, complexScaled, complexSum, type Complex } from '../complex';
+import { complexProduct, complexScaled, type Complex } from '../complex';
 import type { Filter } from '../filter';
 import { allPole } from './all-pole';
-import { gaussPoints, legendrePolynomials, type GaussPoint } from './legendre-polynomials';
+import { gaussPoints, type GaussPoint } from './legendre-polynomials';
 import { checkFamily } from './low-pass';
 import { simultaneousRoots } from './simultaneous-roots';
 
@@ -37,26 +37,37 @@ export function legendre(order: number, cornerHz: number): Filter {
 /** ∫ g from −1 to x along the straight line. */
 function integral(order: number, points: readonly GaussPoint[], x: Complex): Complex {
   const half = { re: 0.5 * (x.re + 1), im: 0.5 * x.im };
-  const sum = points.reduce<Complex>(
-    (total, { at, weight }) => {
-      const along = { re: -1 + half.re * (1 + at), im: half.im * (1 + at) };
-      return complexSum(total, complexScaled(integrand(order, along), weight));
-    },
-    { re: 0, im: 0 },
-  );
-  return complexProduct(sum, half);
+  let re = 0;
+  let im = 0;
+  for (const { at, weight } of points) {
+    const value = integrand(order, { re: -1 + half.re * (1 + at), im: half.im * (1 + at) });
+    re += weight * value.re;
+    im += weight * value.im;
+  }
+  return complexProduct({ re, im }, half);
 }
 
+/** g, its sum of polynomials made along with their recurrence in plain numbers: a design asks for it some ten thousand times. */
 function integrand(order: number, x: Complex): Complex {
   const k = Math.floor((order - 1) / 2);
   const odd = order % 2 === 1;
+  let [beforeRe, beforeIm, nowRe, nowIm] = [0, 0, 1, 0];
   let re = 0;
   let im = 0;
-  legendrePolynomials(k, x).forEach((polynomial, i) => {
-    if (!odd && (k - i) % 2 !== 0) return;
-    re += (2 * i + 1) * polynomial.re;
-    im += (2 * i + 1) * polynomial.im;
-  });
+  for (let m = 0; m <= k; m += 1) {
+    if (odd || (k - m) % 2 === 0) {
+      re += (2 * m + 1) * nowRe;
+      im += (2 * m + 1) * nowIm;
+    }
+    const a = (2 * m + 1) / (m + 1);
+    const b = m / (m + 1);
+    const nextRe = a * (x.re * nowRe - x.im * nowIm) - b * beforeRe;
+    const nextIm = a * (x.re * nowIm + x.im * nowRe) - b * beforeIm;
+    beforeRe = nowRe;
+    beforeIm = nowIm;
+    nowRe = nextRe;
+    nowIm = nextIm;
+  }
   const sum: Complex = { re, im };
   const square = complexProduct(sum, sum);
   return odd ? square : complexProduct(square, { re: x.re + 1, im: x.im });
