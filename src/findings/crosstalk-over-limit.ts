@@ -41,7 +41,7 @@ export const crosstalkOverLimit: FindingKind = {
   severity: 'error',
   group: 'copies',
   help,
-  remedies: ['guard'],
+  remedies: ['pulse', 'guard'],
   check: (subject) => {
     const limit = brokenLimit(subject.figures, 'crosstalk');
     const { slots } = subject.channel;

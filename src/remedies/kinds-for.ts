@@ -16,6 +16,8 @@ export function kindsFor(finding: Finding, channel: Channel): readonly RemedyKin
 const brokenCodes: Readonly<Partial<Record<JudgedKey, Code>>> = {
   alias: 'alias-over-limit',
   image: 'image-over-limit',
+  output: 'output-over-mask',
+  crosstalk: 'crosstalk-over-limit',
   flatness: 'flatness-over-limit',
   response: 'response-over-mask',
   through: 'response-over-mask',

@@ -1,11 +1,11 @@
 /** The change of a rate into the best window that keeps the wanted bands whole: for each window near by the allowed rate nearest its middle. */
 import { rateWindowsOf, type RateWindow } from '../analysis';
-import { rateChange } from './rate';
+import { rateChange, settles } from './rate';
 import { rateOptions, type RateOption } from './rate-options';
 import { roundedMiddle } from './rounded-middle';
 import { ownMargin, type Session } from './session';
 import type { Channel } from '../spec';
-import { works, worksCleanly, type Trial } from './trial';
+import { works, type Trial } from './trial';
 
 /** A window further away than this factor asks for another converter. */
 const farthest = 2;
@@ -25,7 +25,8 @@ export function* windowTrial(session: Session): Generator<void, Trial | null> {
     const score = session.finding.limit === null ? room : (ownMargin(session.finding, trial.figures) ?? -Infinity);
     best.push({ trial, score });
   }
-  best.sort((a, b) => Number(worksCleanly(b.trial)) - Number(worksCleanly(a.trial)) || b.score - a.score);
+  const good = settles(session);
+  best.sort((a, b) => Number(good(b.trial)) - Number(good(a.trial)) || b.score - a.score);
   return best[0]?.trial ?? null;
 }
 

@@ -65,12 +65,21 @@ function shareEdits({ reading, channel }: Session, share: Share): readonly (Edit
   return keys.map((key) => editValue(reading, { channel: channel.name, path: ['rate', key] }, String(share[key])));
 }
 
+/**
+ * Whether a rate is one to stop at: where the finding is about the rate itself, one at which the whole channel passes, since such a
+ * channel has been judged at a rate that it could not run at.
+ */
+export function settles({ finding }: Session): (trial: Trial) => boolean {
+  return finding.limit === null ? (trial) => worksCleanly(trial) && trial.passes : worksCleanly;
+}
+
 /** The first rate above that works without a new warning; where each rate has been chosen by somebody, also the first that works at all. */
 function* upwards(session: Session, { above, chosen }: RateOptions, base: readonly Change[]): Generator<void, readonly Trial[]> {
   const attemptAt = attempting(session, above, base);
   const first = yield* firstThatWorks(above.length, attemptAt, works);
-  if (first === null || worksCleanly(first.trial)) return first === null ? [] : [first.trial];
-  const clean = yield* firstThatWorks(above.length, attemptAt, worksCleanly, first.index + 1);
+  const good = settles(session);
+  if (first === null || good(first.trial)) return first === null ? [] : [first.trial];
+  const clean = yield* firstThatWorks(above.length, attemptAt, good, first.index + 1);
   if (clean === null) return [first.trial];
   return chosen ? [first.trial, clean.trial] : [clean.trial];
 }
@@ -84,7 +93,7 @@ function* downwards(session: Session, { below }: RateOptions, base: readonly Cha
   const attemptAt = attempting(session, below, base);
   for (let index = 0; index < below.length; index += stride) {
     const trial = yield* attemptAt(index);
-    if (trial !== null && worksCleanly(trial)) return [trial];
+    if (trial !== null && settles(session)(trial)) return [trial];
   }
   return [];
 }

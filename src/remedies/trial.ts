@@ -17,6 +17,8 @@ export interface Trial {
   readonly newWarnings: readonly Finding[];
   /** Errors that were there before, with a margin that has become smaller. */
   readonly worsened: readonly Finding[];
+  /** Whether the channel of the finding has no error left, whatever its code. */
+  readonly passes: boolean;
 }
 
 /** Whether the changes clear the finding's code in its channel and add no error anywhere. */
@@ -45,6 +47,7 @@ export function* trying(
     remaining: after.findings.filter((found) => isSameTarget(found, finding)),
     newErrors: fresh.filter((found) => found.severity === 'error'),
     newWarnings: fresh.filter((found) => found.severity === 'warning'),
+    passes: after.channels.some(({ entry, passes }) => entry.name === finding.channel && passes === true),
     worsened: after.findings.filter((found) => counts(found) && isWorse(found, known.get(identity(found)))),
   };
 }

@@ -11,6 +11,7 @@ function trialOf(index: number): Trial {
     remaining: [],
     newErrors: [],
     newWarnings: [],
+    passes: true,
     worsened: [],
   };
 }
