@@ -1,4 +1,4 @@
-/** The outline: clocks, filters and channels with what stands in them. */
+/** The outline: clocks, filters, sources, masks and channels with what stands in them. */
 import { SymbolKind, type DocumentSymbol, type SymbolInformation } from 'vscode-languageserver-types';
 import { symbolsOf, type Reading, type SpecSymbol } from '../spec';
 import type { SpecDocument } from './spec-document';
@@ -9,9 +9,11 @@ const symbolKinds: Readonly<Record<SpecSymbol['kind'], SymbolKind>> = {
   section: SymbolKind.Namespace,
   clock: SymbolKind.Event,
   filter: SymbolKind.Interface,
+  mask: SymbolKind.Interface,
   channel: SymbolKind.Class,
   stage: SymbolKind.Field,
   source: SymbolKind.Field,
+  segment: SymbolKind.Field,
   key: SymbolKind.Property,
 };
 

@@ -17,6 +17,7 @@ import { slotsHover } from './hovers/slots';
 import { sourceHover } from './hovers/source';
 import { stageHover } from './hovers/stage';
 import type { Subject } from './hovers/subject';
+import { usedFileHover } from './hovers/used-file';
 import { pathForUser } from './hovers/user-path';
 import { wantedHover } from './hovers/wanted';
 import type { SpecDocument } from './spec-document';
@@ -51,6 +52,7 @@ function answerAt(document: SpecDocument, at: PlaceAt): Answer | null {
   const { place, part } = at;
   if (place.channel !== null) return nameIn(document, at) ?? answerIn(document, place.channel, place.path);
   const [space, name, ...rest] = place.path;
+  if (space === 'use') return part === 'value' ? usedFileHover(document.reading, written(document, at)) : null;
   const defined = document.reading.names.find((entry) => entry.space === space && entry.name === name);
   if (defined === undefined) return null;
   if (rest.length === 0 && part === 'key') return nameHover(document, defined);
@@ -60,8 +62,7 @@ function answerAt(document: SpecDocument, at: PlaceAt): Answer | null {
 /** Where a channel names a clock or another channel: what that is. */
 function nameIn(document: SpecDocument, { place: { path }, part, span }: PlaceAt): Answer | null {
   if (part === 'key') return null;
-  const { reading } = document;
-  const name = reading.text.slice(span.start, span.end).replace(/^(["'])(.*)\1$/, '$2');
+  const name = written(document, { span });
   switch (path.at(-1)) {
     case 'like':
       return answerIn(document, name, []);
@@ -70,6 +71,11 @@ function nameIn(document: SpecDocument, { place: { path }, part, span }: PlaceAt
     default:
       return null;
   }
+}
+
+/** The text there, without quotes around it. */
+function written({ reading }: SpecDocument, { span }: Pick<PlaceAt, 'span'>): string {
+  return reading.text.slice(span.start, span.end).replace(/^(["'])(.*)\1$/, '$2');
 }
 
 function definition(document: SpecDocument, space: DefinedName['space'], name: string): Answer | null {

@@ -17,4 +17,6 @@ export type { Key } from './shape';
 export { completionsAt } from './completion';
 export type { Completion } from './completion';
 export { symbolsOf } from './symbols';
+export { namesOffered } from './used-file';
+export type { OfferedName } from './used-file';
 export type { SpecSymbol } from './symbols';

@@ -8,7 +8,7 @@ import type { Pair, TreeNode } from './tree';
 /** One entry of the outline. Its span holds its selection and the spans of its children. */
 export interface SpecSymbol {
   readonly name: string;
-  readonly kind: 'section' | 'clock' | 'filter' | 'channel' | 'stage' | 'source' | 'key';
+  readonly kind: 'section' | 'clock' | 'filter' | 'mask' | 'channel' | 'stage' | 'source' | 'segment' | 'key';
   readonly span: Span;
   /** The key or item that the entry is named after. */
   readonly selection: Span;
@@ -30,7 +30,7 @@ const kinds: Readonly<Record<string, SpecSymbol['kind']>> = {
   clocks: 'clock',
   filters: 'filter',
   sources: 'source',
-  masks: 'key',
+  masks: 'mask',
   channels: 'channel',
 };
 
@@ -60,6 +60,7 @@ function withChildren(symbol: SpecSymbol, children: readonly SpecSymbol[]): Spec
 
 function entryOf(pair: Pair, kind: SpecSymbol['kind'], base: number): SpecSymbol {
   if (kind === 'filter') return symbolOf(pair, kind, base, items(pair.value, 'stage', base));
+  if (kind === 'mask') return symbolOf(pair, kind, base, items(pair.value, 'segment', base));
   const keys = pair.value?.form === 'map' ? pair.value.pairs : [];
   return symbolOf(
     pair,
@@ -77,12 +78,12 @@ function keySymbol(pair: Pair, base: number): SpecSymbol {
 const filterKeys: ReadonlySet<string> = new Set(['filter', 'input-filter', 'output-filter']);
 
 /** The items of a list, or the one map that stands for a list. */
-function items(node: TreeNode | null, kind: 'stage' | 'source', base: number): readonly SpecSymbol[] {
+function items(node: TreeNode | null, kind: 'stage' | 'source' | 'segment', base: number): readonly SpecSymbol[] {
   const nodes = node?.form === 'list' ? node.items : node?.form === 'map' ? [node] : [];
   return nodes.flatMap((item) => (item === null ? [] : [itemSymbol(item, kind, base)]));
 }
 
-function itemSymbol(node: TreeNode, kind: 'stage' | 'source', base: number): SpecSymbol {
+function itemSymbol(node: TreeNode, kind: 'stage' | 'source' | 'segment', base: number): SpecSymbol {
   const span = { start: base + node.start, end: base + node.end };
   return { name: nameOf(node), kind, span, selection: span, children: [] };
 }

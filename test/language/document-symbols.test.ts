@@ -18,6 +18,37 @@ describe('the outline', () => {
     }
   });
 
+  it('lists masks with their segments, shared sources, and both filters of a relay channel', () => {
+    const { document } = opened(`bandkeep: 1
+sources:
+  inverter: { tone: 8.2 kHz, level: -30 dBFS }
+masks:
+  ear:
+    - { band: 0 Hz .. 400 Hz, within: ± 1 dB }
+    - { band: 6 kHz .., below: -40 dB }
+channels:
+  strain:
+    direction: relay
+    wanted: { band: 0 Hz .. 400 Hz }
+    rate: 8 kHz
+    gate: 12 %
+    input-filter: { bandwidth: 3 kHz }
+    output-filter: [{ bandwidth: 2 kHz, name: far side }]
+`);
+    const found = outline(documentSymbols(document));
+    for (const line of [
+      '  inverter',
+      '  ear',
+      '    0 Hz .. 400 Hz',
+      '    6 kHz ..',
+      '    gate',
+      '      3 kHz',
+      '      far side',
+    ]) {
+      assert.ok(found.includes(line), `no “${line}” in:\n${found.join('\n')}`);
+    }
+  });
+
   it('selects the name, inside the range of the whole', () => {
     const { document, text } = opened(passingSpec);
     const inside = (inner: Range, outer: Range): boolean =>
