@@ -47,7 +47,7 @@ interface Measured {
   readonly worstAt: WorstAt | null;
 }
 
-/** A limit that is met to within this, in dB, is met: what lies below is rounding. */
+/** A limit that is met to within this, in dB, is met: what lies below is rounding. Of a time it is the same share of the limit. */
 const rounding = 1e-9;
 
 function measured(channel: Channel, limit: Limit, judged: Judged): Measured | null {
@@ -86,7 +86,7 @@ function figureOf(limit: Limit, found: Measured | null): LimitFigure {
     margin,
     gap: found === null ? null : found.gap,
     judged: found !== null,
-    passes: margin !== null && margin >= -rounding,
+    passes: margin !== null && margin >= (limit.unit === 's' ? -rounding * limit.at : -rounding),
     where: found === null ? null : found.where,
     worstAt: found === null ? null : found.worstAt,
   };

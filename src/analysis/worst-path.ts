@@ -11,8 +11,9 @@ import type { Corners } from './corners';
 import type { WorstAt } from './figures';
 import type { StageSetting } from './stage-setting';
 import type { WorstQuestion } from './stretched-from';
-import { gainLabel, joinWorst, partsVary, varies } from './tolerances';
+import { deviation, gainLabel, joinWorst, partsVary, rateLabel, varies } from './tolerances';
 import { worstPulse } from './worst-pulse';
+import type { WorstPulse } from './worst-pulse';
 import { movedStage } from './worst-stage';
 
 /** A path at its worst. */
@@ -22,7 +23,10 @@ export interface WorstPath {
   readonly gainLog: number;
   /** What each stage is set to, in order, where the worst is reached at a frequency. */
   cornersAt(frequencyHz: number): Corners;
-  /** What deviates, and how far, where the worst is reached at a frequency; null where nothing can. The rate is the caller's. */
+  /**
+   * What deviates, and how far, where the worst is reached at a frequency; null where nothing can. The rate is named as far as it moves the
+   * pulse; where it also moves the frequency, or is the axis, it is the caller's.
+   */
   worstAt(frequencyHz: number): WorstAt | null;
 }
 
@@ -30,13 +34,15 @@ export interface WorstPath {
 export function worstPath(path: ChannelPath, question: WorstQuestion): WorstPath {
   if (!partsVary(path.channel)) return nominalPath(path, question.referenceHz);
   const stages = path.stages.map((stage) => worstStage(stage, path.channel, question));
-  const response = inSeries([...worstPulse(path, question), ...stages.flatMap((stage) => stage.responses)]);
+  const pulse = worstPulse(path, question);
+  const response = inSeries([...pulse.responses, ...stages.flatMap((stage) => stage.responses)]);
   const withGain = question.referenceHz === null;
   return {
     response,
     gainLog: stages.reduce((sum, stage) => sum + stage.gainLog, 0),
     cornersAt: (frequencyHz) => stages.map((stage) => stage.settingAt(frequencyHz)),
-    worstAt: (frequencyHz) => describe(stages, frequencyHz, withGain ? question.sense : null),
+    worstAt: (frequencyHz) =>
+      joinWorst(describe(stages, frequencyHz, withGain ? question.sense : null), rateOf(path.channel, pulse, frequencyHz)),
   };
 }
 
@@ -48,6 +54,10 @@ export function nominalPath(path: ChannelPath, referenceHz: number | null): Wors
     cornersAt: () => path.stages.map(() => 1),
     worstAt: () => null,
   };
+}
+
+function rateOf({ rate }: Channel, { rateFactorAt }: WorstPulse, frequencyHz: number): WorstAt | null {
+  return rateFactorAt === null ? null : { [rateLabel(rate)]: deviation(rateFactorAt(frequencyHz), rate.tolerance) };
 }
 
 interface WorstStage {

@@ -70,6 +70,7 @@ describe('flatness', () => {
     });
     const x = (9 / 20 / 0.99) * Math.PI;
     assertWithin(flatness(channel)?.value ?? NaN, -20 * Math.log10(Math.sin(x) / x), provedGapDb);
+    assert.deepEqual(flatness(channel)?.worstAt, { rate: -0.01 });
   });
 
   it('covers every wanted band from one reference', () => {

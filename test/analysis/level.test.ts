@@ -59,7 +59,9 @@ describe('the level of the wanted output', () => {
       pulse: rectangleSeconds(4e-6),
     });
     assertWithin(level(fixed, -100, -8).value ?? NaN, dB(0.44), provedGapDb);
+    assert.deepEqual(level(fixed, -100, -8).worstAt, { rate: 0.1 });
     assertWithin(level(fixed, -9, 8).value ?? NaN, dB(0.36) + sincDb(0.004), provedGapDb);
+    assert.deepEqual(level(fixed, -9, 8).worstAt, { rate: -0.1 });
     const following = generate({ wanted: [wanted(0, 20e3)], rate: rate(100e3, { tolerance: plusMinus(0.1) }) });
     assertWithin(level(following, -1, 8).value ?? NaN, sincDb(20 / 90), provedGapDb);
   });

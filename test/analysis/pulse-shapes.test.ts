@@ -1,6 +1,7 @@
 /** Every pulse shape as aperture and as hold, against plain formulas on a dense grid. */
 import assert from 'node:assert/strict';
-import { analyse, channelPath, pulseNulls, pulsePhaseRad } from '../../src/analysis';
+import { analyse, channelPath, pulseNulls } from '../../src/analysis';
+import { pulsePhaseRad } from '../../src/analysis/pulse';
 import { wholePulse } from '../../src/analysis/whole-pulse';
 import type { Channel, Pulse } from '../../src/spec/channel';
 import { band, butterworthForm, capture, generate, limit, plusMinus, rate, stage, wanted } from '../support/channel-builder';
