@@ -1,10 +1,12 @@
 /** What a generate channel lets out in some bands outside its wanted ones: the copies of everything that it makes, to infinity. */
 import { product } from '../signal/response-algebra';
 import { largestOverFolds } from '../signal/search';
+import type { FoldExtreme, FoldQuestion } from '../signal/search';
 import type { Channel, WantedBand } from '../spec/channel';
 import { onAxis } from './axis';
 import type { ChannelPath } from './channel-path';
 import { copiesOf, leavesAt } from './copies';
+import type { Copy } from './copies';
 import { toDb } from './decibels';
 import { assumptions, rateScale } from './image';
 import type { Assumption } from './image';
@@ -38,6 +40,23 @@ export function strongest(all: readonly (Leaving | null)[]): Leaving | null {
   return { ...best, evaluations: found.reduce((sum, one) => sum + one.evaluations, 0) };
 }
 
+/** Every copy but the wanted one, which only touches the bands that are looked at. */
+function allBut({ fold, side }: Copy): readonly Pick<FoldQuestion, 'firstFold' | 'lastFold' | 'sides'>[] {
+  return [
+    { firstFold: 0, lastFold: fold - 1, sides: 'both' },
+    { firstFold: fold, lastFold: fold, sides: side === 'upper' ? 'lower' : 'upper' },
+    { firstFold: fold + 1, lastFold: Infinity, sides: 'both' },
+  ];
+}
+
+function largestOf(all: readonly (FoldExtreme | null)[]): FoldExtreme | null {
+  const found = all.filter((one) => one !== null);
+  const [first, ...others] = found;
+  if (first === undefined) return null;
+  const best = others.reduce((most, one) => (one.logGain > most.logGain ? one : most), first);
+  return { ...best, evaluations: found.reduce((sum, one) => sum + one.evaluations, 0) };
+}
+
 interface Question {
   readonly channel: Channel;
   readonly band: WantedBand;
@@ -50,16 +69,12 @@ function leavingOf({ channel, band, segment, at }: Question, { path, copies }: A
   const worst =
     at === 'nominal' ? nominalPath(path, null) : worstPath(path, { sense: 'largest', referenceHz: null, axis: 'periods' });
   const within = at === 'nominal' ? segment.leaves : segment.leaves.map((range) => onAxis(path.channel, 'periods', range));
-  const found = largestOverFolds({
-    rateHz: { low: rateHz, high: rateHz },
-    outer: product([worst.response, segment.overBound(path.channel, at)]),
-    inner: null,
-    bands: [copies.baseband],
-    within,
-    firstFold: 0,
-    lastFold: Infinity,
-    sides: 'both',
-  });
+  const outer = product([worst.response, segment.overBound(path.channel, at)]);
+  const found = largestOf(
+    allBut(copies.wanted).map((run) =>
+      largestOverFolds({ rateHz: { low: rateHz, high: rateHz }, outer, inner: null, bands: [copies.baseband], within, ...run }),
+    ),
+  );
   if (found === null) return null;
   const wantedHz = leavesAt(copies.wanted, rateHz, found.landsHz);
   const scale = at === 'nominal' ? 1 : rateScale(path.channel, band, wantedHz);

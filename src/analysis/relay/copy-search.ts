@@ -2,9 +2,10 @@
 import { alongCopy } from '../../signal/copy-axis';
 import { constantResponse, product } from '../../signal/response-algebra';
 import type { Enclosure, Response } from '../../signal/response';
-import { largestOverCopies } from '../../signal/search';
+import { largestOverBands, largestOverCopies } from '../../signal/search';
 import type { CopyBound, CopyExtreme } from '../../signal/search';
 import type { RelayPath } from './relay-path';
+import { weightResponse } from './weights';
 import type { Weight } from './weights';
 
 /** What is searched over the frequencies that leave. */
@@ -14,14 +15,27 @@ export interface LeavingQuestion {
   readonly leaves: readonly Enclosure[];
   /** Ranges of the input frequency. */
   readonly arrives: readonly Enclosure[];
+  /** Where both are the same frequency: what is sampled and leaves where it was, copy 0. No clock moves that apart. */
+  readonly stays: readonly Enclosure[];
   readonly input: Response;
   readonly output: Response;
-  readonly firstCopy: number;
 }
 
 /** The strongest of everything that leaves in some ranges from what arrives in others; the copy's x is where it leaves, F where it arrives. */
 export function strongestLeaving(question: LeavingQuestion): CopyExtreme | null {
-  const { relay, leaves, arrives, input, output, firstCopy } = question;
+  const moved = strongestMoved(question);
+  const stayed = strongestStayed(question);
+  if (moved === null || stayed === null) return moved ?? stayed;
+  const best = moved.logGain > stayed.logGain ? moved : stayed;
+  return { ...best, evaluations: moved.evaluations + stayed.evaluations };
+}
+
+function strongestStayed({ relay, stays, input, output }: LeavingQuestion): CopyExtreme | null {
+  const found = largestOverBands(product([weightResponse(relay.weights.copy(0)), input, output]), stays);
+  return found === null ? null : { ...found, nearHz: found.frequencyHz, farHz: found.frequencyHz, copy: 0 };
+}
+
+function strongestMoved({ relay, leaves, arrives, input, output }: LeavingQuestion): CopyExtreme | null {
   const near = responses(output);
   const boundOf = (weight: Weight): CopyBound => ({ logWeight: weight.log, near: near(weight.atOutput), far: input });
   return largestOverCopies({
@@ -29,7 +43,7 @@ export function strongestLeaving(question: LeavingQuestion): CopyExtreme | null 
     bands: leaves,
     within: arrives,
     signs: 'both',
-    firstCopy,
+    firstCopy: 1,
     lastCopy: relay.weights.lastCopy,
     // x = f_o stands at F = |f_o + j·rate|, so that it is copy −j of the input.
     gainOf: (copy, { axis }) => {

@@ -18,7 +18,7 @@ import { wantedRanges } from '../source-range';
 import { joinWorst } from '../tolerances';
 import type { WorstPath } from '../worst-path';
 import { strongestLeaving } from './copy-search';
-import { inView, sideOf } from './views';
+import { inView, sideOf, staysIn } from './views';
 import type { RelayView } from './views';
 import { weightResponse } from './weights';
 
@@ -106,13 +106,15 @@ export function weakestWantedDb(channel: Channel): number {
 function landedOf(view: RelayView, sides: Sides, arrival: Arrival, measure: Measure): Landed | null {
   const { channel, relay } = view;
   const envelope = envelopeIn(view, arrival);
+  const leaves = protectedAt(channel, relay.rateHz);
+  const arrives = without([arrival.range], wantedRanges(channel));
   const extreme = strongestLeaving({
     relay,
-    leaves: protectedAt(channel, relay.rateHz).map((range) => inView(view, range)),
-    arrives: without([arrival.range], wantedRanges(channel)).map((range) => inView(view, range)),
+    leaves: leaves.map((range) => inView(view, range)),
+    arrives: arrives.map((range) => inView(view, range)),
+    stays: staysIn(view, arrives, leaves),
     input: envelope === null ? sides.input.response : product([sides.input.response, envelope]),
     output: product([sides.output.response, constantResponse(-sides.againstLog)]),
-    firstCopy: 0,
   });
   if (extreme === null) return null;
   const levels = levelsOf(view, sides, arrival.levelDb + toDb(extreme.logGain), measure, extreme);

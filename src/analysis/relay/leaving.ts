@@ -13,7 +13,7 @@ import type { Leaving, LeavingPair, OutputSegment } from '../output-mask';
 import { wantedRanges } from '../source-range';
 import { joinWorst } from '../tolerances';
 import { strongestLeaving } from './copy-search';
-import { inView, rateDeviation, rateScale, relayViews, sideOf } from './views';
+import { inView, rateDeviation, rateScale, relayViews, sideOf, staysIn } from './views';
 import type { RelayView } from './views';
 
 /** The strongest of what leaves, nominally and at the worst of the tolerances. */
@@ -26,26 +26,24 @@ export function leavingOfRelay(channel: Channel, segment: OutputSegment): Leavin
 
 /** Something that arrives and leaves again. */
 interface Arriving {
-  /** Null for the wanted band. */
+  /** Null for the wanted band, of which only copies count. */
   readonly source: string | null;
   readonly enters: Entrance;
   readonly levelDb: number;
   readonly ranges: readonly Enclosure[];
   readonly envelope: Response | null;
-  /** 1 where its own place is what is wanted. */
-  readonly firstCopy: 0 | 1;
 }
 
 function arriving(channel: Channel, at: 'nominal' | 'worst'): readonly Arriving[] {
   const wanted = channel.wanted.map((band): Arriving => {
     const ranges = [{ low: band.lowHz, high: band.highHz }];
-    return { source: null, enters: 'input', levelDb: band.levelDb, ranges, envelope: null, firstCopy: 1 };
+    return { source: null, enters: 'input', levelDb: band.levelDb, ranges, envelope: null };
   });
   const unwanted = channel.unwanted.flatMap((source) =>
     (at === 'nominal' ? nominalArrivals(source) : arrivalsOf(source)).map(({ range, levelDb, envelope }): Arriving => {
       // `anything` means everything outside the wanted band.
       const ranges = source.kind === 'anything' ? without([range], wantedRanges(channel)) : [range];
-      return { source: source.name, enters: source.enters, levelDb, ranges, envelope, firstCopy: 0 };
+      return { source: source.name, enters: source.enters, levelDb, ranges, envelope };
     }),
   );
   return [...wanted, ...unwanted];
@@ -61,9 +59,9 @@ function leavingOf(channel: Channel, view: RelayView, segment: OutputSegment, ar
     relay,
     leaves: segment.leaves.map((range) => inView(view, range)),
     arrives: arriving.ranges.map((range) => inView(view, range)),
+    stays: arriving.source === null ? [] : staysIn(view, arriving.ranges, segment.leaves),
     input: envelope === null ? input.response : product([input.response, envelope]),
     output: product([output.response, segment.overBound(view.channel, view.parts)]),
-    firstCopy: arriving.firstCopy,
   });
   if (found === null) return null;
   const scale = rateScale(view, [

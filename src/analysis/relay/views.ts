@@ -3,6 +3,7 @@ import type { Enclosure } from '../../signal/response';
 import type { Channel } from '../../spec/channel';
 import { onAxis } from '../axis';
 import type { ChannelPath } from '../channel-path';
+import { intersection } from '../intervals';
 import { followsRate } from '../pulse';
 import type { Sense } from '../../signal/stretched';
 import { deviation, partsVary, rateLabel, rateRange, varies } from '../tolerances';
@@ -48,6 +49,18 @@ export function relayViews(channel: Channel): RelayViews {
 /** A range of frequencies of the spec as a view counts them. */
 export function inView(view: RelayView, range: Enclosure): Enclosure {
   return view.parts === 'nominal' ? range : onAxis(view.channel, 'periods', range);
+}
+
+/** Where something both arrives and leaves, as a view counts it. Bands that only touch share nothing: one may begin where another ends. */
+export function staysIn(view: RelayView, arrives: readonly Enclosure[], leaves: readonly Enclosure[]): readonly Enclosure[] {
+  const isWide = ({ low, high }: Enclosure): boolean => low < high;
+  return arrives.flatMap((one) =>
+    leaves.flatMap((other) =>
+      intersection([one], [other])
+        .filter((shared) => isWide(shared) || !isWide(one) || !isWide(other))
+        .map((shared) => inView(view, shared)),
+    ),
+  );
 }
 
 /** One side of a relay at its nominal or worst gain. */

@@ -3,7 +3,18 @@ import assert from 'node:assert/strict';
 import fc from 'fast-check';
 import { analyse } from '../../../src/analysis';
 import type { Channel, Gate } from '../../../src/spec/channel';
-import { band, limit, plusMinus, rate, rectangleShare, relay, stage, tone, wanted } from '../../support/channel-builder';
+import {
+  anything,
+  band,
+  limit,
+  plusMinus,
+  rate,
+  rectangleShare,
+  relay,
+  stage,
+  tone,
+  wanted,
+} from '../../support/channel-builder';
 import { plainGainDb, plainPole, plainWeight, type PlainRelay } from '../../support/plain-relay';
 import { assertClose, assertWithin } from '../../support/tolerance';
 
@@ -113,6 +124,37 @@ describe('the wanted band of a relay', () => {
   });
 });
 
+describe('a clock that varies', () => {
+  it('moves copies, but not what leaves where it arrives: what stands beside the wanted band is no alias', () => {
+    const alias = (tolerance: number): number =>
+      analyse(
+        relay({ ...base, gate: open(0.3), rate: rate(10e3, { tolerance: plusMinus(tolerance) }), unwanted: [anything(-10)] }),
+      ).alias?.level ?? NaN;
+    assert.ok(alias(1e-4) >= alias(0) - 1e-9);
+    assertWithin(alias(1e-4), alias(0), 0.01);
+    // Beside the band the same tone would leave more than 5 dB stronger.
+    assert.ok(-10 + plainGainDb(natural, 0, 901) > alias(1e-4) + 5);
+  });
+
+  it('leaves an output mask that begins at the wanted band to what is not wanted', () => {
+    const segment = {
+      lowHz: 900,
+      highHz: 4e3,
+      sense: 'below',
+      lower: null,
+      upper: { fromDb: -20, toDb: -20 },
+      along: 'linear',
+    } as const;
+    const masks = [{ key: 'output', mask: null, segments: [segment], ref: null, margin: null }] as const;
+    const varying = rate(10e3, { tolerance: plusMinus(1e-3) });
+    const nothing = analyse(relay({ ...base, gate: open(0.3), rate: varying, masks }));
+    assert.equal(nothing.masks[0]?.value, -Infinity);
+    const beside = analyse(relay({ ...base, gate: open(0.3), rate: varying, masks, unwanted: [tone(1e3, -30)] }));
+    assertWithin(beside.masks[0]?.value ?? NaN, -30 + plainGainDb(natural, 0, 1e3), 0.02);
+    assert.deepEqual(beside.masks[0]?.from?.source, 'tone at 1000 Hz');
+  });
+});
+
 describe('scaling every frequency of a relay', () => {
   it('scales its frequencies and delays, and leaves its levels as they are', () => {
     fc.assert(
@@ -141,7 +183,9 @@ describe('scaling every frequency of a relay', () => {
           });
           assertClose(other.delay ?? NaN, (one.delay ?? NaN) / scale, 1e-9);
           assertWithin(other.droop ?? NaN, one.droop ?? NaN, 1e-9);
-          one.copyWeights?.forEach((weight, k) => assertWithin(other.copyWeights?.[k] ?? NaN, weight, 1e-9));
+          one.copyWeights?.forEach((weight, k) => {
+            assertWithin(other.copyWeights?.[k] ?? NaN, weight, 1e-9);
+          });
         },
       ),
       { seed: 3, numRuns: 25 },
