@@ -1,15 +1,17 @@
-/** What follows a key when it is completed: a choice of its words, the fields it cannot do without, or nothing. */
+/** What follows a key when it is completed: a choice of its words, the fields it cannot do without, or nothing where it may be more than one form. */
 import type { Key } from '../spec';
 
 /** The snippet behind `key: `; null where there is nothing to fill in. */
 export function snippetAfter(key: Key): string | null {
   const { scalar, map } = key.shape;
   if (map !== undefined && 'fields' in map) {
+    if (scalar !== undefined) return null;
     const needed = Object.entries(map.fields).filter(([, field]) => field.required === true && field.with === undefined);
     return needed.length === 0 ? null : `{ ${needed.map(([name], index) => `${name}: $${index + 1}`).join(', ')} }$0`;
   }
   const words = Object.keys(scalar?.words ?? {});
-  const onlyWords = scalar?.quantity === undefined && scalar?.range === undefined && scalar?.name === undefined;
+  const { quantity, range, name, text } = scalar ?? {};
+  const onlyWords = quantity === undefined && range === undefined && name === undefined && text === undefined;
   return onlyWords && words.length > 1 ? `\${1|${words.join(',')}|}$0` : null;
 }
 

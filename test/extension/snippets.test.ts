@@ -18,7 +18,7 @@ function expanded(prefix: string): string {
 }
 
 describe('the snippets', () => {
-  for (const direction of ['capture', 'generate']) {
+  for (const direction of ['capture', 'generate', 'relay']) {
     it(`offer a ${direction} channel that is whole as it stands`, () => {
       const head = expanded('bandkeep').trimEnd();
       const channel = expanded(direction).trimEnd().replace(/^/gm, '  ');
@@ -29,4 +29,30 @@ describe('the snippets', () => {
       assert.ok(entries[0].channel !== null);
     });
   }
+
+  it('offer a mask and a source with harmonics that a channel can take', () => {
+    const mask = expanded('mask').trimEnd().replace(/^/gm, '  ');
+    const source = expanded('harmonics').trimEnd().replace(/^/gm, '      ');
+    const text = `bandkeep: 1
+masks:
+${mask}
+channels:
+  bearing:
+    direction: capture
+    wanted: { band: 5 Hz .. 1 kHz }
+    unwanted:
+${source}
+    rate: 64 kHz
+    limits: { response: guard mask }
+`;
+    const { entries, problems } = read(text);
+    assert.deepEqual(problems, []);
+    const channel = entries[0]?.channel;
+    assert.equal(channel?.masks[0]?.segments.length, 3);
+    assert.deepEqual(channel.unwanted[0]?.kind === 'tone' && channel.unwanted[0].harmonics, {
+      to: 25,
+      slopeDbPerDecade: -20,
+      odd: true,
+    });
+  });
 });

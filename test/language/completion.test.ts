@@ -64,6 +64,34 @@ describe('completion', () => {
     assert.match(taken(marked, 'wanted'), /^ {4}wanted: \{ band: \$1 \}\$0$/m);
   });
 
+  it('leaves a key open that may be more than one form', () => {
+    const relay = passingSpec.replace('direction: capture', 'direction: relay').replace('    aperture: 300 ns\n', '    ¦\n');
+    assert.match(taken(relay, 'gate'), /^ {4}gate: $/m);
+    assert.match(taken(relay, 'hold'), /^ {4}hold: $/m);
+    assert.match(taken(relay, 'slots'), /^ {4}slots: \{ count: \$1, link: \$2 \}\$0$/m);
+  });
+
+  it('offers the stages that a source may enter in front of, by name', () => {
+    const named = passingSpec.replace('order: 4,', 'order: 4, name: first guard,');
+    assert.deepEqual(labels(named.replace('level: -55 dBFS }', 'level: -55 dBFS, enters: ¦ }')), [
+      'input',
+      'sampler',
+      'first guard',
+    ]);
+    const own = named.replace('filter: guard', 'filter: [{ bandwidth: 1 MHz, name: second }, { bandwidth: 2 MHz }]');
+    assert.deepEqual(labels(own.replace('level: -55 dBFS }', 'level: -55 dBFS, enters: ¦ }')), ['input', 'sampler', 'second']);
+  });
+
+  it('offers masks and shared sources by name, and the words of pulses', () => {
+    const named = passingSpec.replace(
+      'channels:',
+      'masks:\n  ear: [{ band: 1 Hz .. 2 Hz, below: 0 dB }]\nsources:\n  hum: { tone: 50 Hz, level: 0 dBFS }\n\nchannels:',
+    );
+    assert.deepEqual(labels(named.replace('alias: -96 dBFS', 'response: ¦')), ['ear']);
+    assert.deepEqual(labels(named.replace(/unwanted:\n.*\n/u, 'unwanted: ¦\n')), ['hum', 'anything']);
+    assert.ok(labels(named.replace('aperture: 300 ns', 'aperture: { shape: ¦ }')).includes('half-sine'));
+  });
+
   it('says of each what it is and what it means', () => {
     const bits = offered(inChannel).find(({ label }) => label === 'bits');
     assert.equal(bits?.kind, CompletionItemKind.Property);

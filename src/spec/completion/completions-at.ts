@@ -10,8 +10,9 @@ import { cursorPlaces, otherKeys } from './cursor-place';
 import type { CursorPlace } from './cursor-place';
 import { cursorText } from './cursor-text';
 import type { CursorText } from './cursor-text';
-import { keyOffers, shapeAt, valueOffers } from './offers';
+import { keyOffers, shapeAt, stageOffer, valueOffers } from './offers';
 import type { Offer } from './offers';
+import { stageNames } from './stage-names';
 
 /** What could be written at an offset of a reading's text; keys that stand already and what is not computed yet are left out. */
 export function completionsAt(reading: Reading, offset: number): readonly Completion[] {
@@ -50,7 +51,10 @@ function offersIn(reading: Reading, place: CursorPlace): readonly Offer[] {
   if (shape === null) return [];
   if (place.as === 'value') {
     const [section, self] = place.path;
-    return valueOffers(shape.scalar, (space) => namesOf(reading, space).filter((name) => !(section === space && name === self)));
+    const offers = valueOffers(shape.scalar, (space) =>
+      namesOf(reading, space).filter((name) => !(section === space && name === self)),
+    );
+    return place.path.at(-1) === 'enters' ? [...offers, ...stageNames(reading, place.channel).map(stageOffer)] : offers;
   }
   const { map } = shape;
   if (place.map === null || map === undefined || !('fields' in map)) return [];

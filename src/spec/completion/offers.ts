@@ -76,3 +76,9 @@ const nameOffer = (name: string, space: NameSpace): Offer => ({
   key: null,
   required: false,
 });
+
+/** The name of a stage, where a source enters. */
+export function stageOffer(name: string): Offer {
+  const about = 'In front of this stage.';
+  return { label: name, kind: 'name', about, text: scalarText(name), key: null, required: false };
+}
