@@ -8,7 +8,7 @@ export function scratchFolder(name) {
   const folder = join(root, 'out', 'scratch', name);
   rmSync(folder, { recursive: true, force: true });
   mkdirSync(folder, { recursive: true });
-  const specs = readdirSync(join(root, 'examples')).filter((file) => file.endsWith('.bandkeep.yaml'));
+  const specs = readdirSync(join(root, 'examples'), { recursive: true }).filter((file) => file.endsWith('.bandkeep.yaml'));
   for (const file of specs) cpSync(join(root, 'examples', file), join(folder, file));
   return folder;
 }

@@ -36,6 +36,21 @@ export const examples: readonly Example[] = [
     label: 'Strain link',
     detail: 'Relay: strain across a rotating shaft by pulses, time slots, and one resistor and one capacitor on each side.',
   },
+  {
+    file: 'standards/bt601-video.bandkeep.yaml',
+    label: 'Component video',
+    detail: 'Masks: the filter templates of ITU-R BT.601, and filters that meet them.',
+  },
+  {
+    file: 'standards/g712-speech.bandkeep.yaml',
+    label: 'Speech at 8 kHz',
+    detail: 'Masks: loss, image and roll-off of ITU-T G.712, and filters that meet them.',
+  },
+  {
+    file: 'standards/aes17-measurement.bandkeep.yaml',
+    label: 'Audio measurement low-pass',
+    detail: 'Masks: the measurement filter of AES17, and a filter that meets it.',
+  },
 ];
 
 /** Lets the reader choose an example and opens a copy of it. */

@@ -66,7 +66,8 @@ describe('the manifest', () => {
 describe('the list of examples', () => {
   it('names every example in the folder and no other', () => {
     const listed = [...text('src/extension/examples.ts').matchAll(/file: '([^']+)'/g)].map(([, name]) => name);
-    const present = readdirSync(new URL('examples', root)).filter((name) => name.endsWith('.bandkeep.yaml'));
+    const all = readdirSync(new URL('examples', root), { recursive: true, encoding: 'utf8' });
+    const present = all.map((name) => name.replaceAll('\\', '/')).filter((name) => name.endsWith('.bandkeep.yaml'));
     assert.deepEqual(listed.sort(), present.sort());
   });
 });

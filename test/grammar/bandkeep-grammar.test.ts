@@ -129,7 +129,9 @@ describe('the TextMate grammar', () => {
 
   it('gives every number of the examples a number scope', () => {
     const folder = new URL('../../examples/', import.meta.url);
-    for (const file of readdirSync(folder).filter((name) => name.endsWith('.bandkeep.yaml'))) {
+    for (const file of readdirSync(folder, { recursive: true, encoding: 'utf8' }).filter((name) =>
+      name.endsWith('.bandkeep.yaml'),
+    )) {
       const tokens = tokensOf(grammar, readFileSync(new URL(file, folder), 'utf8'));
       const plain = tokens.filter(({ text, scope }) => /^[-−+]?\d/.test(text) && scope === 'string.unquoted');
       assert.deepEqual(plain, [], file);

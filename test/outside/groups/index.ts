@@ -3,6 +3,7 @@ import type { OutsideGroup } from '../group';
 import { bandwidths, passive } from './bandwidths';
 import { folds, windows } from './folding';
 import { delays, holdValues, narrowGates, pulses, trains } from './holds';
+import { masks } from './masks';
 import { orders } from './orders';
 import { prototypes } from './prototypes';
 import { kinds, responses } from './responses';
@@ -26,4 +27,5 @@ export const groups: readonly OutsideGroup[] = [
   passive,
   orders,
   touchstone,
+  masks,
 ];
