@@ -9,6 +9,7 @@ import { decibelsPerNeper, toDb } from './decibels';
 import type { ChannelPath } from './channel-path';
 import type { WorstAt } from './figures';
 import { largestIn } from './largest-in';
+import { shareGapDb } from './share-gap';
 import { levelReference } from './test-tone';
 import { partsVary } from './tolerances';
 import { nominalPath, worstPath } from './worst-path';
@@ -66,11 +67,15 @@ function peaks(channel: Channel, path: WorstPath, at: 'nominal' | 'worst'): Peak
     levelDb: -Infinity,
     worstAt: () => null,
   };
-  const levelsDb = [...wanted, ...sourcesArriving(channel, at)].map(({ levelDb, range, path: passed, envelope }) => {
+  let sum = 0;
+  const arriving = [...wanted, ...sourcesArriving(channel, at)];
+  const levelsDb = arriving.map(({ levelDb, range, path: passed, envelope }) => {
     const response = envelope === null ? passed.response : product([passed.response, envelope]);
-    const extreme = largestIn(response, range);
+    const most = range.low === range.high ? 0 : levelDb + toDb(response.bounds(range.low, range.high).high);
+    const extreme = largestIn(response, range, shareGapDb(sum / amplitudeOf(most), arriving.length));
     evaluations += extreme.evaluations;
     const arrives = levelDb + toDb(extreme.logGain);
+    sum += amplitudeOf(arrives);
     if (arrives > strongest.levelDb) strongest = { levelDb: arrives, worstAt: () => passed.worstAt(extreme.frequencyHz) };
     return arrives;
   });
@@ -96,5 +101,9 @@ function sourcesArriving(channel: Channel, at: 'nominal' | 'worst'): readonly Ar
 
 /** Amplitudes add, since all peaks may fall together. */
 function headroomDb(levelsDb: readonly number[]): number {
-  return -decibelsPerNeper * Math.log(levelsDb.reduce((sum, level) => sum + Math.exp(level / decibelsPerNeper), 0));
+  return -decibelsPerNeper * Math.log(levelsDb.reduce((sum, level) => sum + amplitudeOf(level), 0));
+}
+
+function amplitudeOf(levelDb: number): number {
+  return Math.exp(levelDb / decibelsPerNeper);
 }

@@ -15,6 +15,7 @@ import { widthOf } from './intervals';
 import { jitteredRange } from './jittered-range';
 import { largestIn } from './largest-in';
 import type { DirectionNoise, NoiseParts } from './noise-parts';
+import { shareGapDb } from './share-gap';
 import { jitterSeconds, levelReference, noiseBands, testToneLevelDb } from './test-tone';
 import { partsVary, rateRange } from './tolerances';
 import { worstPath } from './worst-path';
@@ -90,7 +91,13 @@ function unwantedJitter(
   const found = channel.unwanted.flatMap((source) => {
     const { path, nominal, worstOfBands } = viewAt(source.enters);
     const view = at === 'nominal' ? nominal : worstOfBands;
-    return jittered(source, at).map((arrival) => jitterOf(channel, path, view, arrival));
+    const arrivals = jittered(source, at);
+    let power = 0;
+    return arrivals.map((arrival) => {
+      const one = jitterOf({ channel, path, view }, arrival, (mostDb) => shareGapDb(power / powerOf(mostDb), arrivals.length));
+      power += powerOf(one.levelDb);
+      return one;
+    });
   });
   return {
     // jitterNoiseDb(1 Hz) is the factor 2πσ that multiplies each frequency.
@@ -107,19 +114,20 @@ function jittered(source: Source, at: 'nominal' | 'worst'): readonly Arrival[] {
   return at === 'worst' ? arrivalsOf(source) : nominalArrivals(source).filter(({ stillHz }) => stillHz !== null);
 }
 
-/** A tone's level at the sampler times its frequency in Hz, where that is largest. */
+/** A tone's level at the sampler times its frequency in Hz, where that is largest; `gapFor` says how finely, from the most it can be. */
 function jitterOf(
-  channel: Channel,
-  path: ChannelPath,
-  view: View,
+  { channel, path, view }: { readonly channel: Channel; readonly path: ChannelPath; readonly view: View },
   arrival: Arrival,
+  gapFor: (mostDb: number) => number,
 ): { readonly levelDb: number; readonly evaluations: number } {
   const { low, high } = arrival.range;
   const range = low === high ? arrival.range : jitteredRange(arrival.range, path);
   if (range.high === Infinity) return { levelDb: Infinity, evaluations: 0 };
   const envelope = envelopeOn(view, channel, arrival);
   const rising = product([frequencyWeight(), view.worst.response, ...(envelope === null ? [] : [envelope])]);
-  const extreme = largestIn(rising, onAxis(channel, view.axis, range));
+  const on = onAxis(channel, view.axis, range);
+  const gapDb = on.low === on.high ? 0 : gapFor(arrival.levelDb + toDb(rising.bounds(on.low, on.high).high));
+  const extreme = largestIn(rising, on, gapDb);
   return { levelDb: arrival.levelDb + toDb(extreme.logGain), evaluations: extreme.evaluations };
 }
 

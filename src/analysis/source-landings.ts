@@ -7,7 +7,8 @@ import type { Arrival } from './arrivals';
 import { onAxis } from './axis';
 import { arrivesWithin, envelopeOn } from './capture-view';
 import type { View } from './capture-view';
-import { sumOfLevels, toDb } from './decibels';
+import { powerOf, sumOfLevels, toDb } from './decibels';
+import { shareGapDb } from './share-gap';
 import { strongestLanding } from './strongest-landing';
 
 /** One tone of a source where it lands strongest. */
@@ -27,32 +28,36 @@ export interface SourceLandings {
   readonly strongest: Landed | null;
   /** All harmonics and lines that land added as powers, each at its own worst; of a band and of an envelope the one strongest tone. */
   readonly sumDb: number | null;
-  /** The largest gap of those, dB. */
+  /** The gap between the proved bounds of that sum, dB. */
   readonly gapDb: number;
   readonly evaluations: number;
 }
 
 /** A tone is left out of the sum where all that are left together would add less than this to it, in dB of power. */
-const negligibleDb = 100;
+const negligibleDb = 80;
 
 /** The landings of a source's tones in a view. */
 export function sourceLandings(view: View, channel: Channel, arrivals: readonly Arrival[]): SourceLandings {
+  const found: Landed[] = [];
   let strongest: Landed | null = null;
-  const levelsDb: number[] = [];
-  let gapDb = 0;
-  let evaluations = 0;
   const reachDb = negligibleDb + 10 * Math.log10(Math.max(1, arrivals.length));
   for (const { arrival, mostDb } of strongestFirst(view, channel, arrivals)) {
     // All that follow lie lower still.
     if (strongest !== null && mostDb < strongest.levelDb - reachDb) break;
-    const landed = landedOf(view, channel, arrival);
+    const soFar = strongest === null ? 0 : powerOf(strongest.levelDb - mostDb);
+    const landed = landedOf(view, channel, arrival, shareGapDb(soFar, arrivals.length));
     if (landed === null) continue;
-    levelsDb.push(landed.levelDb);
-    gapDb = Math.max(gapDb, landed.extreme.gapDb);
-    evaluations += landed.extreme.evaluations;
+    found.push(landed);
     if (strongest === null || landed.levelDb > strongest.levelDb) strongest = landed;
   }
-  return { strongest, sumDb: sumOfLevels(levelsDb), gapDb, evaluations };
+  const sumDb = sumOfLevels(found.map((landed) => landed.levelDb));
+  const leastDb = sumOfLevels(found.map(({ levelDb, extreme }) => levelDb - extreme.gapDb));
+  return {
+    strongest,
+    sumDb,
+    gapDb: sumDb === null || leastDb === null || sumDb === leastDb ? 0 : sumDb - leastDb,
+    evaluations: found.reduce((sum, { extreme }) => sum + extreme.evaluations, 0),
+  };
 }
 
 /** With what no tone of it can pass, so that the weakest of a thousand harmonics need not be searched. */
@@ -73,7 +78,7 @@ function strongestFirst(view: View, channel: Channel, arrivals: readonly Arrival
   return ranked.sort((a, b) => b.mostDb - a.mostDb);
 }
 
-function landedOf(view: View, channel: Channel, arrival: Arrival): Landed | null {
+function landedOf(view: View, channel: Channel, arrival: Arrival, gapDb: number): Landed | null {
   const within = arrivesWithin(view, channel, arrival);
   const envelope = envelopeOn(view, channel, arrival);
   const { set, rateHz, split } = view;
@@ -82,6 +87,7 @@ function landedOf(view: View, channel: Channel, arrival: Arrival): Landed | null
     set,
     rateHz,
     within,
+    gapDb,
     response: envelope === null ? whole : product([whole, envelope]),
     split: split === null || envelope === null ? split : { ...split, outer: product([split.outer, envelope]) },
   });

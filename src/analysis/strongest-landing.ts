@@ -16,6 +16,8 @@ export interface LandingQuestion {
   readonly response: Response;
   /** The same gain in two parts for k ≥ 1, where there is such a form. */
   readonly split: { readonly outer: Response; readonly inner: Response } | null;
+  /** How finely it is proved. */
+  readonly gapDb: number;
 }
 
 /** The strongest landing; null where the source lands in no protected range. */
@@ -46,13 +48,13 @@ function landingsOfBands(question: LandingQuestion, within: readonly Enclosure[]
   if (within.length === 0) return [];
   const pieces = intersection(question.set.pieces, within);
   return [
-    ...(pieces.length > 0 ? [largestOverBands(question.response, pieces)] : []),
+    ...(pieces.length > 0 ? [largestOverBands(question.response, pieces, { gapDb: question.gapDb })] : []),
     ...question.set.runs.map((run) => landingOfRun(question, run, within)),
   ];
 }
 
 function landingOfRun(question: LandingQuestion, run: FoldRun, within: readonly Enclosure[]): Extreme | null {
-  const { rateHz, response, split } = question;
+  const { rateHz, response, split, gapDb } = question;
   const low = Math.min(...within.map((piece) => piece.low));
   const high = Math.max(...within.map((piece) => piece.high));
   const firstFold = Math.max(run.firstFold, Math.floor(low / rateHz.high) - 1);
@@ -64,7 +66,8 @@ function landingOfRun(question: LandingQuestion, run: FoldRun, within: readonly 
   ): Extreme | null => {
     if (first > last) return null;
     const { outer, inner } = gain;
-    return largestOverFolds({ rateHz, outer, inner, bands: run.bands, within, firstFold: first, lastFold: last, sides: 'both' });
+    const asked = { rateHz, outer, inner, bands: run.bands, within, firstFold: first, lastFold: last };
+    return largestOverFolds({ ...asked, sides: 'both' }, { gapDb });
   };
   const plain = { outer: response, inner: null };
   if (split === null) return over(firstFold, lastFold, plain);
