@@ -79,20 +79,30 @@ interface Spread {
 /** How much of the limit its search may leave open. */
 const openShare = 1e-3;
 
+/** The spread at every end of the corners, with a limit also between them, and at the ends of the rate where the worst of these is. */
 function spreadOf(channel: Channel, path: ChannelPath, limit: Limit | null): Spread | null {
   if (channel.wanted.length === 0) return null;
-  const withinSeconds = limit === null ? null : limit.at * openShare;
   const bands = wantedRanges(channel);
-  // A pulse that delays every frequency alike has no part in the spread, whatever the rate.
-  const rates = wantedDelayCurve(channel, channel.rate.hz, bands) === null ? [channel.rate.hz] : rateEnds(channel);
-  const settings = cornerSets(path).flatMap((corners) => rates.map((rateHz) => ({ corners, rateHz })));
-  const found = settings.flatMap((setting): readonly Found[] => {
-    const { stages } = atCorners(path, setting.corners);
-    const spread = delaySpread({ stages, pulse: wantedDelayCurve(channel, setting.rateHz, bands), bands, withinSeconds });
-    return spread === null ? [] : [{ ...setting, spread }];
-  });
+  const at = (corners: Corners, rateHz: number, withinSeconds: number | null): readonly Found[] => {
+    const { stages } = atCorners(path, corners);
+    const spread = delaySpread({ stages, pulse: wantedDelayCurve(channel, rateHz, bands), bands, withinSeconds });
+    return spread === null ? [] : [{ corners, rateHz, spread }];
+  };
+  const { hz } = channel.rate;
+  const within = limit === null ? null : limit.at * openShare;
+  const ends = cornerSets(path);
+  const between = limit === null ? [] : [worstCorners(path, [], (tried) => at(tried, hz, null)[0]?.spread.reachedSeconds ?? 0)];
+  const found = [...ends, ...between.filter((corners) => !ends.includes(corners))].flatMap((corners) => at(corners, hz, within));
   const [nominal] = found;
-  return nominal === undefined ? null : worstOf(channel, path, nominal, found);
+  if (nominal === undefined) return null;
+  const worst = largestOf(found, nominal);
+  // A pulse that delays every frequency alike has no part in the spread, whatever the rate.
+  const rates = wantedDelayCurve(channel, hz, bands) === null ? [] : rateEnds(channel).slice(1);
+  return worstOf(channel, path, nominal, [...found, ...rates.flatMap((rateHz) => at(worst.corners, rateHz, within))]);
+}
+
+function largestOf(found: readonly Found[], nominal: Found): Found {
+  return found.reduce((best, one) => (one.spread.seconds > best.spread.seconds ? one : best), nominal);
 }
 
 interface Found {
@@ -102,7 +112,8 @@ interface Found {
 }
 
 function worstOf(channel: Channel, path: ChannelPath, nominal: Found, found: readonly Found[]): Spread {
-  const worst = found.reduce((best, one) => (one.spread.seconds > best.spread.seconds ? one : best), nominal);
+  const worst = largestOf(found, nominal);
+  const moves = found.some(({ rateHz }) => rateHz !== channel.rate.hz);
   return {
     reachedSeconds: Math.max(...found.map(({ spread }) => spread.reachedSeconds)),
     judged: {
@@ -110,7 +121,7 @@ function worstOf(channel: Channel, path: ChannelPath, nominal: Found, found: rea
       nominalSeconds: nominal.spread.seconds,
       gapSeconds: worst.spread.seconds - worst.spread.reachedSeconds,
       frequencyHz: worst.spread.atHz,
-      worstAt: joinWorst(deviationsAt(path, worst.corners), rateDeviation(channel, worst.rateHz)),
+      worstAt: joinWorst(deviationsAt(path, worst.corners), moves ? rateDeviation(channel, worst.rateHz) : null),
     },
     evaluations: found.reduce((sum, { spread }) => sum + spread.evaluations, 0),
   };
