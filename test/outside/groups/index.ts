@@ -7,6 +7,7 @@ import { masks } from './masks';
 import { orders } from './orders';
 import { prototypes } from './prototypes';
 import { kinds, responses } from './responses';
+import { systemCases } from './system-cases';
 import { touchstone } from './touchstone';
 import { brickWalls, toOrderTwenty } from './to-order-twenty';
 
@@ -28,4 +29,5 @@ export const groups: readonly OutsideGroup[] = [
   orders,
   touchstone,
   masks,
+  systemCases,
 ];
