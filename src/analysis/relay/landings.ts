@@ -47,7 +47,7 @@ export interface Landings {
 /** The landings in the protected ranges under one view. */
 export function relayLandings(view: RelayView, enters: Entrance, arrivals: readonly Arrival[], measure: Measure): Landings {
   const sides = sidesFor(view, enters, measure);
-  const landed = arrivals.flatMap((arrival) => landedOf(view, sides, arrival, measure) ?? []);
+  const landed = allThatCount(view, sides, arrivals, measure);
   const key = (one: Landed): number => (measure === 'relative' ? one.levels.relativeDb : one.levels.levelDb);
   const [first, ...others] = landed;
   const strongest = first === undefined ? null : others.reduce((best, one) => (key(one) > key(best) ? one : best), first);
@@ -59,6 +59,44 @@ export function relayLandings(view: RelayView, enters: Entrance, arrivals: reado
     evaluations: landed.reduce((sum, one) => sum + one.extreme.evaluations, 0),
     measured: strongest === null ? -Infinity : key(strongest),
   };
+}
+
+/** A tone is left out where all that are left together would add less than this to the strongest, in dB of power. */
+const negligibleDb = 100;
+
+/** The landings, strongest first as far as can be told without a search, so that the weakest of a thousand harmonics need none. */
+function allThatCount(view: RelayView, sides: Sides, arrivals: readonly Arrival[], measure: Measure): readonly Landed[] {
+  const [only] = arrivals;
+  if (arrivals.length === 1 && only !== undefined) return [landedOf(view, sides, only, measure)].flatMap((one) => one ?? []);
+  const passesDb = toDb(mostBehind(view, sides));
+  const ranked = arrivals
+    .map((arrival) => {
+      const { low, high } = inView(view, arrival.range);
+      return { arrival, mostDb: arrival.levelDb + toDb(sides.input.response.bounds(low, high).high) + passesDb };
+    })
+    .sort((a, b) => b.mostDb - a.mostDb);
+  const reachDb = negligibleDb + powerDb(arrivals.length);
+  const landed: Landed[] = [];
+  let strongestDb = -Infinity;
+  for (const { arrival, mostDb } of ranked) {
+    if (mostDb < strongestDb - reachDb) break;
+    const one = landedOf(view, sides, arrival, measure);
+    if (one === null) continue;
+    landed.push(one);
+    strongestDb = Math.max(strongestDb, arrival.levelDb + toDb(one.extreme.logGain));
+  }
+  return landed;
+}
+
+/** What weight and output filter pass at most in the protected ranges, ln. */
+function mostBehind(view: RelayView, { output, againstLog }: Sides): number {
+  const { relay, channel } = view;
+  const weights = weightResponse(relay.weights.most);
+  const bounds = protectedAt(channel, relay.rateHz).map((range) => {
+    const { low, high } = inView(view, range);
+    return output.response.bounds(low, high).high + weights.bounds(low, high).high;
+  });
+  return Math.max(-Infinity, ...bounds) - againstLog;
 }
 
 /** The landings of the view in which the strongest is strongest, with the work of all. */

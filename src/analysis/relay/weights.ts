@@ -24,6 +24,8 @@ export interface RelayWeights {
   copy(k: number): Weight;
   /** What bounds every copy with |k| ≥ first. */
   boundFrom(first: number): Weight;
+  /** What bounds every copy, the wanted path included. */
+  readonly most: Weight;
   /** What the weights come to as k grows without end; null where they come to nothing. */
   readonly limit: Weight | null;
   /** 0 where the gate never closes, so that there are no copies; else Infinity. */
@@ -54,11 +56,14 @@ export function neverCloses(shape: PulseShape, rateHz: number): boolean {
 
 const nothing: Weight = { log: -Infinity, atOutput: null };
 
+const unweakened: Weight = { log: 0, atOutput: null };
+
 /** A gate that never closes passes everything as it is. */
 const open: RelayWeights = {
   kind: 'natural',
-  copy: (k) => (k === 0 ? { log: 0, atOutput: null } : nothing),
+  copy: (k) => (k === 0 ? unweakened : nothing),
   boundFrom: () => nothing,
+  most: unweakened,
   limit: null,
   lastCopy: 0,
 };
@@ -70,6 +75,8 @@ function natural(shape: PulseShape, rateHz: number): RelayWeights {
     kind: 'natural',
     copy: (k) => ({ log: logGateWeight(shape, rateHz, k), atOutput: null }),
     boundFrom: (first) => ({ log: wantedLog + response.bounds(first * rateHz, Infinity).high, atOutput: null }),
+    // No pulse of one sign weighs anything by more than its area.
+    most: { log: wantedLog, atOutput: null },
     limit: null,
     lastCopy: Infinity,
   };
@@ -78,7 +85,7 @@ function natural(shape: PulseShape, rateHz: number): RelayWeights {
 function flatTop(shape: PulseShape | null, rateHz: number): RelayWeights {
   const weight: Weight =
     shape === null ? { log: 0, atOutput: null } : { log: Math.log(pulseArea(shape) * rateHz), atOutput: pulseResponse(shape) };
-  return { kind: 'flat-top', copy: () => weight, boundFrom: () => weight, limit: weight, lastCopy: Infinity };
+  return { kind: 'flat-top', copy: () => weight, boundFrom: () => weight, most: weight, limit: weight, lastCopy: Infinity };
 }
 
 function trackAndHold(gate: TrackAndHold): RelayWeights {
@@ -87,6 +94,8 @@ function trackAndHold(gate: TrackAndHold): RelayWeights {
     kind: 'track-and-hold',
     copy: (k) => ({ log: 0, atOutput: trackAndHoldCopy(gate, k) }),
     boundFrom: (first) => ({ log: 0, atOutput: trackAndHoldRemainder(gate, first) }),
+    // What is tracked and what is held fill a period, each at most as high as the input.
+    most: unweakened,
     limit: { log: Math.log(held), atOutput: rectangleResponse(held * gate.periodSeconds) },
     lastCopy: Infinity,
   };

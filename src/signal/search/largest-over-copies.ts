@@ -44,6 +44,9 @@ export interface CopyExtreme extends Extreme {
   readonly copy: number;
 }
 
+/** So many copies are looked at one by one. */
+const fewCopies = 3;
+
 /** A bound over a band is found this closely, in dB, so that a run of equal copies is settled by its first. */
 const nearGapDb = 2e-4;
 
@@ -85,7 +88,10 @@ class CopySearch {
     const lowest = Math.min(...within.map((one) => one.low)) - Math.max(...bands.map((band) => band.high));
     const highest = Math.max(...within.map((one) => one.high)) + Math.max(...bands.map((band) => band.high));
     const first = Math.max(firstCopy, Number.isFinite(lowest) ? Math.floor(lowest / rateHz) : 0);
-    this.openRun(first, Math.min(lastCopy, Math.ceil(highest / rateHz)), 1);
+    const last = Math.min(lastCopy, Math.ceil(highest / rateHz));
+    // The few copies that a tone at one frequency can have need no bound together.
+    if (last - first <= fewCopies) for (let copy = first; copy <= last; copy += 1) this.openBoth(copy);
+    else this.openRun(first, last, 1);
     const logGain = this.frontier.prove();
     const { best, bestHz, bestTag, evaluations } = this.frontier;
     const found = this.opened[bestTag];
@@ -105,9 +111,7 @@ class CopySearch {
   openRun(first: number, last: number, length: number): void {
     if (first > last) return;
     if (first === last || first === 0) {
-      const { signs } = this.question;
-      if (signs !== 'negative') this.openCopy(first);
-      if (signs !== 'positive' && first !== 0) this.openCopy(-first);
+      this.openBoth(first);
       this.openRun(first + 1, last, length);
       return;
     }
@@ -131,6 +135,13 @@ class CopySearch {
           this.tag(Infinity, () => Infinity),
         );
     }
+  }
+
+  /** Opens copy j of both signs, as far as they are asked for; copy 0 has one. */
+  private openBoth(copy: number): void {
+    const { signs } = this.question;
+    if (signs !== 'negative') this.openCopy(copy);
+    if (signs !== 'positive' && copy !== 0) this.openCopy(-copy);
   }
 
   private openCopy(copy: number): void {

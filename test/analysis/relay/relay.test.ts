@@ -100,6 +100,34 @@ describe('levels of a relay stated at its sampler', () => {
   });
 });
 
+describe('sources of a relay', () => {
+  it('count with every harmonic, each in its own copy, and added as powers where the limit holds the sum', () => {
+    const source = { ...tone(3.5e3, -20), harmonics: { to: 9, slopeDbPerDecade: -20, odd: false } } as const;
+    const limits = [limit('alias', -40, { sum: true })];
+    const found = analyse(relay({ ...base, gate: open(0.3), unwanted: [source], limits }));
+    // In 100 .. 900 Hz only harmonic 3 (10.5 kHz, copy −1) and harmonic 6 (21 kHz) come near; 21 kHz leaves at 1 kHz, outside.
+    const third = -20 - 20 * Math.log10(3) + plainGainDb(natural, -1, 10.5e3);
+    const others = [1, 2, 4, 5, 6, 7, 8, 9].flatMap((m) =>
+      [-4, -3, -2, -1].flatMap((k) => {
+        const out = Math.abs(m * 3.5e3 + k * 10e3);
+        return out >= 100 && out <= 900 ? [-20 - 20 * Math.log10(m) + plainGainDb(natural, k, m * 3.5e3)] : [];
+      }),
+    );
+    const sum = 10 * Math.log10([third, ...others].reduce((power, level) => power + 10 ** (level / 10), 0));
+    assert.equal(found.alias?.harmonic, 3);
+    assertWithin(found.alias.level ?? NaN, third, 1e-9);
+    assertWithin(found.limits[0]?.value ?? NaN, sum, 1e-9);
+    assertWithin(found.aliasSum ?? NaN, sum, 1e-9);
+  });
+
+  it('pass only what stands behind where they enter', () => {
+    const at = (enters: 'input' | 'sampler'): number =>
+      analyse(relay({ ...base, gate: open(0.3), unwanted: [{ ...tone(10.5e3, -30), enters }] })).aliases[0]?.level ?? NaN;
+    assertWithin(at('input'), -30 + plainGainDb(natural, -1, 10.5e3), 1e-9);
+    assertWithin(at('sampler') - at('input'), -dB(plainPole(10.5e3, 4e3)), 1e-9);
+  });
+});
+
 describe('the wanted band of a relay', () => {
   it('stays where it is, and must not lie over its own copies', () => {
     const faults = (low: number, high: number): readonly string[] =>
