@@ -39,7 +39,7 @@ export function* trying(
   store: Store,
 ): Generator<void, Trial> {
   const after = yield* judging(read(changed.text, before.reading), store);
-  const known = new Map(before.findings.map((old) => [identity(old), old]));
+  const known = worstOfEach(before.findings);
   const fresh = after.findings.filter((found) => found.accepted === null && !known.has(identity(found)));
   return {
     changes: changed.changes,
@@ -50,6 +50,17 @@ export function* trying(
     passes: after.channels.some(({ entry, passes }) => entry.name === finding.channel && passes === true),
     worsened: after.findings.filter((found) => counts(found) && isWorse(found, known.get(identity(found)))),
   };
+}
+
+/** Findings by identity; of several at one place, such as the copies that break an image limit, the one with the least margin. */
+function worstOfEach(findings: readonly Finding[]): ReadonlyMap<string, Finding> {
+  const known = new Map<string, Finding>();
+  for (const finding of findings) {
+    const name = identity(finding);
+    const other = known.get(name)?.figures?.margin ?? Infinity;
+    if (!known.has(name) || (finding.figures?.margin ?? Infinity) < other) known.set(name, finding);
+  }
+  return known;
 }
 
 /** What makes a finding of the changed text the same as one before. Spans move, so a finding that has only a span is known by its words. */
@@ -66,8 +77,13 @@ function isSameTarget(found: Finding, finding: Finding): boolean {
 /** Differences below this are rounding, or a proof's own gap. */
 const noticeableDb = 0.01;
 
+/** The same of a time, as a share of its limit. */
+const noticeableShare = 0.002;
+
 function isWorse(found: Finding, old: Finding | undefined): boolean {
   const was = old?.figures?.margin ?? null;
   const is = found.figures?.margin ?? null;
-  return was !== null && is !== null && is < was - noticeableDb;
+  if (was === null || is === null) return false;
+  const timed = found.limit === 'delay' || found.limit === 'delay-spread';
+  return is < was - (timed ? noticeableShare * Math.abs(found.figures?.limit ?? 0) : noticeableDb);
 }
