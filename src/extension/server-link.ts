@@ -5,6 +5,7 @@ import { isPlaceName, isRecord, isText } from '../protocol/guards';
 import { isPicture } from '../protocol/picture-guard';
 import type { PlaceName, Range } from '../protocol/position';
 import {
+  leaningNotification,
   locateRequest,
   pictureRequest,
   placeAtRequest,
@@ -25,11 +26,18 @@ export class ServerLink implements vscode.Disposable {
   /** Fires when the server starts, is ready, or has ended. */
   readonly onDidChangeState = this.changed.event;
 
+  private readonly leaned = new vscode.EventEmitter<readonly string[]>();
+  /** Fires with the URIs of open specs that lean on a file which has changed. */
+  readonly onDidChangeFiles = this.leaned.event;
+
   constructor(private readonly client: BaseLanguageClient) {
     client.onDidChangeState(({ newState }) => {
       this.changed.fire(stateOf(newState));
     });
     client.onRequest(readFileRequest, readFile);
+    client.onNotification(leaningNotification, (params: unknown) => {
+      if (isRecord(params) && isTexts(params['uris'])) this.leaned.fire(params['uris']);
+    });
   }
 
   get state(): ServerState {
@@ -67,6 +75,7 @@ export class ServerLink implements vscode.Disposable {
 
   async dispose(): Promise<void> {
     this.changed.dispose();
+    this.leaned.dispose();
     await this.client.dispose();
   }
 
@@ -101,4 +110,8 @@ function isRange(value: unknown): value is Range {
 
 function isPosition(value: unknown): boolean {
   return isRecord(value) && typeof value['line'] === 'number' && typeof value['character'] === 'number';
+}
+
+function isTexts(value: unknown): value is readonly string[] {
+  return Array.isArray(value) && value.every(isText);
 }

@@ -74,10 +74,18 @@ export interface ReadFileParams {
 export type ReadFileResult =
   { readonly text: string } | { readonly fault: 'missing' | 'unreadable' | 'too-large' | 'outside' | 'folder' | 'not-text' };
 
+/** Server → extension, when a file that open specs lean on has changed on the disk: the panel may have to draw again. */
+export const leaningNotification = 'bandkeep/leaningSpecs';
+
+/** Parameters of `bandkeep/leaningSpecs`: the open specs that are judged anew. */
+export interface LeaningParams {
+  readonly uris: readonly string[];
+}
+
 /** What the extension hands the server in `initializationOptions`. */
 export interface ServerOptions {
   /** URI of the folder that holds a page for every finding code; null: no links. */
   readonly docsBase: string | null;
-  /** Whether it answers `bandkeep/readFile`. */
+  /** Whether it answers `bandkeep/readFile` and listens to `bandkeep/leaningSpecs`. */
   readonly readsFiles: boolean;
 }

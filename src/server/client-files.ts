@@ -11,7 +11,9 @@ import type { LoadFile } from './workspace-files';
 export function fileLoader(connection: Connection, profile: ClientProfile, platform: Platform): LoadFile {
   return async (uri, rootUri) => {
     if (platform.loadFile !== null && /^file:/i.test(uri)) return platform.loadFile(uri, rootUri);
-    return profile.options.readsFiles ? askClient(connection, { uri }) : { fault: 'unreadable' };
+    // A spec that has never been saved stands nowhere, so nothing stands beside it.
+    const nowhere = !/^[a-z][a-z0-9+.-]*:/i.test(uri) || /^untitled:/i.test(uri);
+    return nowhere || !profile.options.readsFiles ? { fault: 'unreadable' } : askClient(connection, { uri });
   };
 }
 

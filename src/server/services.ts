@@ -1,10 +1,11 @@
 /** All that needs the layers of the spec itself; loaded behind the answer to `initialize`, so that this comes at once. */
 import type { Connection } from 'vscode-languageserver';
+import type { LiveSpec } from '../language';
 import type { ClientProfile } from './client-profile';
 import { clear, diagnosticAnswers, push, type DiagnosticAnswers } from './diagnostic-reports';
+import { leaningNotification, type LeaningParams } from '../protocol/requests';
 import { fileLoader } from './client-files';
 import { editorAnswers, type EditorAnswers } from './editor-requests';
-import type { LiveSpec } from '../language';
 import { createOpenSpecs } from './open-specs';
 import { ownAnswers, type OwnAnswers } from './own-requests';
 import type { Platform } from './platform';
@@ -38,6 +39,10 @@ export function createServices(connection: Connection, profile: ClientProfile, p
     if (affected.length > 0 && profile.pullsDiagnostics && profile.refreshesDiagnostics)
       connection.languages.diagnostics.refresh().catch(report);
   };
+  const tell = (uris: readonly string[]): void => {
+    const params: LeaningParams = { uris };
+    connection.sendNotification(leaningNotification, params).catch(report);
+  };
   const usersOf = (uris: readonly string[]): readonly LiveSpec[] =>
     specs.all().filter(({ uri, paths }) => files.leansOn(uri, paths, uris));
   return {
@@ -60,7 +65,9 @@ export function createServices(connection: Connection, profile: ClientProfile, p
     },
     filesChanged(uris) {
       files.forget(uris);
-      refresh(usersOf(uris));
+      const affected = usersOf(uris);
+      refresh(affected);
+      if (affected.length > 0 && profile.options.readsFiles) tell(affected.map(({ uri }) => uri));
     },
     foldersChanged(folders) {
       files.setFolders(folders);

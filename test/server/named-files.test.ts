@@ -104,6 +104,21 @@ describe('files that an open spec names', () => {
       assert.equal(refreshed, 1);
     });
 
+    it('are told of to a panel that may show what leans on them', async () => {
+      await client.exit();
+      client = new LanguageClient(server);
+      client.connection.onRequest('client/registerCapability', () => undefined);
+      client.connection.onRequest('workspace/diagnostic/refresh', () => undefined);
+      const told = new Promise((resolve) => {
+        client.connection.onNotification('bandkeep/leaningSpecs', resolve);
+      });
+      await client.initialize(watchingEditor, { readsFiles: true }, [uri()]);
+      const document = await open();
+      await client.pull(document);
+      await change('tables', 'hash.csv');
+      assert.deepEqual(await told, { uris: [document.uri] });
+    });
+
     it('are not read again for a change of a file that nothing leans on', async () => {
       const document = await open();
       await client.pull(document);
@@ -196,6 +211,13 @@ describe('files that an open spec names', () => {
       'lagoon-vfs://quay/north%20basin/specs/shared.bandkeep.yaml',
       'lagoon-vfs://quay/north%20basin/tables/hash.csv',
     ]);
+  });
+
+  it('do not stand beside a spec that has never been saved', async () => {
+    client.connection.onRequest('bandkeep/readFile', () => assert.fail('asked for a file'));
+    await client.initialize(pullingEditor, { readsFiles: true }, [uri()]);
+    const document = await client.open(spec(), 'untitled:Untitled-1');
+    assert.match(firstMessage(await client.pull(document)), /`shared\.bandkeep\.yaml`: it cannot be read/);
   });
 
   it('cannot be read where neither is possible', async () => {

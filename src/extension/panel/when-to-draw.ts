@@ -34,6 +34,9 @@ export function drawWhenNeeded(panel: PanelHost, link: ServerLink, log: vscode.L
     vscode.window.onDidChangeTextEditorSelection(({ textEditor }) => {
       if (shows(textEditor.document)) done(panel.followCursor());
     }),
+    link.onDidChangeFiles((uris) => {
+      if (panel.spec !== null && uris.includes(panel.spec.toString())) done(panel.redraw());
+    }),
     link.onDidChangeState((state) => {
       if (state === 'ready' && panel.spec !== null) done(panel.redraw());
     }),
