@@ -2,7 +2,7 @@
 import { spanOf } from '../spec';
 import type { Acceptance, Reading } from '../spec/reading';
 import type { Span } from '../spec/place';
-import { formatDb } from '../units/format';
+import { formatAmount } from '../units/format';
 import type { Finding } from './finding';
 import { spanOfFinding } from './span';
 import { staleFinding, type Staleness } from './stale-acceptance';
@@ -31,13 +31,16 @@ function acceptanceOf(reading: Reading, finding: Finding, acceptable: Acceptable
   return candidates.find(({ line }) => start >= line.start && start <= line.end);
 }
 
-/** The finding as accepted, or, where its margin has fallen below the bound, as it was with a word on that. */
-function accepted(finding: Finding, { reason, downTo, span }: Acceptance): Finding {
+/** The finding as accepted, or, where its margin has fallen below the bound or is in no unit of it, as it was with a word on that. */
+function accepted(finding: Finding, { reason, downTo, downToUnit, span }: Acceptance): Finding {
   const margin = finding.figures?.margin ?? null;
-  const lapsed = downTo !== null && margin !== null && margin < downTo;
-  if (!lapsed) return { ...finding, accepted: { reason, downTo, span } };
-  const words = `It was accepted down to a margin of ${formatDb(downTo, 'dB', 3)} (${reason}), which it no longer keeps.`;
-  return { ...finding, message: `${finding.message} ${words}` };
+  const unit = finding.limit === 'delay' || finding.limit === 'delay-spread' ? 's' : 'dB';
+  if (downTo === null || margin === null || (downToUnit === unit && margin >= downTo)) {
+    return { ...finding, accepted: { reason, downTo, span } };
+  }
+  const bound = `It was accepted down to a margin of ${formatAmount(downTo, downToUnit ?? unit, 3)} (${reason})`;
+  const words = downToUnit === unit ? 'which it no longer keeps' : `but its margin is ${unit === 's' ? 'a time' : 'in dB'}`;
+  return { ...finding, message: `${finding.message} ${bound}, ${words}.` };
 }
 
 function stale(reading: Reading, acceptance: Acceptance, acceptable: Acceptable): readonly Finding[] {

@@ -42,7 +42,7 @@ function commentStart(text: string, at: number): number | null {
   return opens ? hash : null;
 }
 
-type Read = { readonly code: string; readonly reason: string; readonly downTo: number | null } | { readonly message: string };
+type Read = Pick<Acceptance, 'code' | 'reason' | 'downTo' | 'downToUnit'> | { readonly message: string };
 
 const form = '`# bandkeep: accept CODE, reason`';
 
@@ -57,19 +57,19 @@ function acceptanceOf(said: string): Read {
   const reason = comma < 0 ? '' : rest.slice(comma + 1).trim();
   const between = (comma < 0 ? rest : rest.slice(0, comma)).trim();
   const bound = boundOf(between);
-  if (typeof bound === 'object' && bound !== null) return bound;
+  if ('message' in bound) return bound;
   if (reason === '')
     return { message: `An acceptance needs its reason: write \`# bandkeep: accept ${code}, \` and why it is acceptable.` };
-  return { code, reason, downTo: bound };
+  return { code, reason, ...bound };
 }
 
-function boundOf(between: string): number | null | { readonly message: string } {
-  if (between === '') return null;
+function boundOf(between: string): Pick<Acceptance, 'downTo' | 'downToUnit'> | { readonly message: string } {
+  if (between === '') return { downTo: null, downToUnit: null };
   const written = /^down[ \t]+to[ \t]+(.+)$/.exec(between)?.[1];
   if (written === undefined) return { message: `A comma is missing behind the code: the form is ${form}.` };
   const read = readQuantity(written, ['decibel', 'time']);
   return 'quantity' in read
-    ? read.quantity.value
+    ? { downTo: read.quantity.value, downToUnit: read.quantity.unit === 's' ? 's' : 'dB' }
     : { message: `\`${written}\` is no margin: write \`down to −1.5 dB\`, in the unit of the finding.` };
 }
 

@@ -41,6 +41,8 @@ export interface Acceptance {
   readonly reason: string;
   /** The margin in the finding's unit below which it lapses; null without a bound. */
   readonly downTo: number | null;
+  /** What that margin is in; null where there is none. */
+  readonly downToUnit: 'dB' | 's' | null;
   /** The comment's own text. */
   readonly span: Span;
   /** The line of text it speaks for, without its line end. */

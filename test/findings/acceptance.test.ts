@@ -38,6 +38,19 @@ describe('an acceptance', () => {
     assert.equal(judged(lapsed).channels[0]?.passes, false);
   });
 
+  it('of a time has a bound that is a time', () => {
+    const late = (bound: string): string =>
+      bearingSpec.replace('flatness: 0.8 dB', `delay: 30 µs # bandkeep: accept delay-over-limit down to ${bound}, agreed`);
+    const delays = (text: string) => judged(text).findings.filter(({ code }) => code === 'delay-over-limit');
+    assert.equal(delays(late('-2 µs'))[0]?.accepted?.downTo, -2e-6);
+    const [lapsed] = delays(late('-1 µs'));
+    assert.equal(lapsed?.accepted, null);
+    assert.match(lapsed.message, /accepted down to a margin of −1 µs \(agreed\), which it no longer keeps\.$/);
+    const [other] = delays(late('-2 dB'));
+    assert.equal(other?.accepted, null);
+    assert.match(other.message, /accepted down to a margin of −2 dB \(agreed\), but its margin is a time\.$/);
+  });
+
   it('of a finding that is not on its line is stale', () => {
     const elsewhere = bearingSpec.replace('    bits: 16\n', '    # bandkeep: accept alias-over-limit, agreed\n    bits: 16\n');
     assert.deepEqual(codes(elsewhere), ['alias-over-limit', 'stale-acceptance']);

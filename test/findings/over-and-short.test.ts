@@ -141,3 +141,37 @@ describe('thin-margin', () => {
     ]);
   });
 });
+
+describe('thin-margin', () => {
+  it('of a delay is a time, a tenth of the limit', () => {
+    const parts = { unit: 's', where: { frequency: 1000 } } as const;
+    const limits = [limitFigure('delay', 30e-6, 28.5e-6, parts)];
+    assert.deepEqual(messages('thin-margin', bearing(), figures({ limits })), [
+      'The limit `delay` of 30 µs holds by only 1.5 µs, at 28.5 µs (at 1 kHz); less than 3 µs is thin.',
+    ]);
+    assert.deepEqual(found('thin-margin', bearing(), figures({ limits: [limitFigure('delay', 30e-6, 26e-6, parts)] })), []);
+  });
+
+  it('of a mask or of the level is what its long form asks for', () => {
+    const inside = { sense: 'inside', margin: 0.3 } as const;
+    const limits = [limitFigure('level', -1, -1.3, { ...inside, unit: 'dBFS' }), limitFigure('response', -40, -40.3, inside)];
+    const mask = { key: 'response', mask: null, segments: [], ref: null, margin: 0.1 } as const;
+    const loose = bearing({ levelLimit: { lowDb: -9, highDb: -1, ref: null, margin: 0.2 }, masks: [mask] });
+    assert.deepEqual(found('thin-margin', loose, figures({ limits })), []);
+    const strict = bearing({ levelLimit: { lowDb: -9, highDb: -1, ref: null, margin: 0.5 }, masks: [{ ...mask, margin: 1 }] });
+    assert.deepEqual(
+      found('thin-margin', strict, figures({ limits })).map(({ limit: key }) => key),
+      ['level', 'response'],
+    );
+  });
+});
+
+describe('not-judged', () => {
+  it('says of a delay and of a mask what is missing', () => {
+    const limits = [unjudgedFigure('delay', 1e-6), unjudgedFigure('through', 1)];
+    assert.deepEqual(messages('not-judged', bearing({ stages: [] }), figures({ limits })), [
+      'The limit `delay` has not been judged: a path without a filter delays nothing. Give it its `filter`.',
+      'The limit `through` has not been judged: a path without a filter is flat by nature, and that is inside the mask. Give it its `filter`.',
+    ]);
+  });
+});

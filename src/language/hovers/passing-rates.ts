@@ -30,8 +30,12 @@ export function passingRates(channel: Channel): PassingRates | null {
   const passing = tried.filter(({ failing }) => failing.length === 0).slice(0, wantedRates);
   return {
     ratesHz: passing.map(({ rate }) => rate.hz).sort((a, b) => a - b),
-    inTheWay: channel.limits.map(({ key }) => key).filter((key) => tried.every(({ failing }) => failing.includes(key))),
+    inTheWay: judgedKeys(channel).filter((key) => tried.every(({ failing }) => failing.includes(key))),
   };
+}
+
+function judgedKeys({ limits, levelLimit, masks }: Channel): readonly JudgedKey[] {
+  return [...limits.map(({ key }) => key), ...(levelLimit === null ? [] : (['level'] as const)), ...masks.map(({ key }) => key)];
 }
 
 /** A rate that may be chosen: a plain one, or a divider of the chosen clock. */
