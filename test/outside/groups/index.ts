@@ -3,6 +3,7 @@ import type { OutsideGroup } from '../group';
 import { bandwidths, passive } from './bandwidths';
 import { folds, windows } from './folding';
 import { delays, holdValues, narrowGates, pulses, trains } from './holds';
+import { holdJitter } from './hold-jitter';
 import { masks } from './masks';
 import { orders } from './orders';
 import { prototypes } from './prototypes';
@@ -17,6 +18,7 @@ export const groups: readonly OutsideGroup[] = [
   trains,
   narrowGates,
   delays,
+  holdJitter,
   folds,
   windows,
   toOrderTwenty,
