@@ -393,3 +393,59 @@ describe('an alias limit for the sum', () => {
     assert.deepEqual([figure?.value, figure?.judged, figure?.passes], [-Infinity, true, true]);
   });
 });
+
+describe('a source under a clock with a tolerance', () => {
+  const share = 0.0005;
+  const rates = Array.from({ length: 41 }, (_, index) => 50e3 * (1 - share + (2 * share * index) / 40));
+  const sincDb = (hz: number, seconds: number): number => {
+    const x = Math.PI * hz * seconds;
+    return x === 0 ? 0 : 20 * Math.log10(Math.abs(Math.sin(x) / x));
+  };
+  /** The strongest landing of levels over frequency, by a grid over rates and frequencies: the aperture lasts a share of each period. */
+  const byGrid = (levelAt: (hz: number) => number, lowHz: number, highHz: number, width: number): number => {
+    let worst = -Infinity;
+    for (const rateHz of rates) {
+      for (let hz = lowHz; hz <= highHz; hz += 4) {
+        if (folded(hz, rateHz) > 10e3) continue;
+        worst = Math.max(worst, levelAt(hz) + butterworthDb(2, hz / 14e3) + sincDb(hz, width / rateHz));
+      }
+    }
+    return worst;
+  };
+  const channel = (unwanted: Source, width: number): Channel =>
+    guarded({
+      rate: rate(50e3, { tolerance: plusMinus(share) }),
+      pulse: { shape: 'rectangle', width: { share: width } },
+      stages: [stage(butterworthForm(2, 14e3))],
+      unwanted: [unwanted],
+    });
+
+  for (const width of [0.4, 1]) {
+    it(`has the envelope of a table moved along, with an aperture of ${width} of the period`, () => {
+      const points = [row(42e3, -60), row(70e3, -30), row(180e3, -32)];
+      const levelAt = (hz: number): number =>
+        hz <= 70e3 ? -60 + (30 * Math.log(hz / 42e3)) / Math.log(70 / 42) : -30 - (2 * Math.log(hz / 70e3)) / Math.log(180 / 70);
+      const level = aliasOf(channel(spectrum(points), width)).level ?? NaN;
+      const grid = byGrid(levelAt, 42e3, 180e3, width);
+      // In periods the table and the filter each move by the clock's share at their own worst: 59 and 17 dB an e-fold, ± 0.0005.
+      assert.ok(level >= grid - 1e-6 && level <= grid + 0.1, `${level} against ${grid}`);
+    });
+
+    it(`has the harmonics of a band moved along, with an aperture of ${width} of the period`, () => {
+      const source = withHarmonics(band(31e3, 32e3, -20), falling(4, { slopeDbPerDecade: -6 }));
+      const expected = [1, 2, 3, 4].map((m) => byGrid(() => -20 - 6 * Math.log10(m), m * 31e3, m * 32e3, width));
+      const level = aliasOf(channel(source, width)).level ?? NaN;
+      const grid = Math.max(...expected);
+      assert.ok(level >= grid - 1e-6 && level <= grid + 0.1, `${level} against ${grid}`);
+    });
+  }
+
+  it('meets each line where it stands, at any rate', () => {
+    const table = [row(60.01e3, -30), row(64.9e3, -10)];
+    const figure = aliasOf(channel(spectrum(table, true), 0.4));
+    // 60.01 kHz lands on 10 kHz once the rate is above 50.01 kHz; the aperture is shortest, and so weakest, at the highest rate.
+    assert.equal(figure.frequency, 60.01e3);
+    assertWithin(figure.level ?? NaN, -30 + butterworthDb(2, 60.01 / 14) + sincDb(60.01e3, 0.4 / (50e3 * (1 + share))), 0.001);
+    assert.equal(figure.nominal, null);
+  });
+});
