@@ -73,7 +73,8 @@ function figuresOf(channel: Channel): Figures {
     sinad: relayed ? null : noise.snrDb,
     // A relay has no words, so it has no bits.
     enob: relayed ? null : effectiveBits(noise.snrDb),
-    enobFullScale: relayed || noise.snrDb === null ? null : effectiveBits(noise.snrDb - noise.toneDb),
+    enobFullScale:
+      relayed || noise.snrDb === null || noise.toneDb === -Infinity ? null : effectiveBits(noise.snrDb - noise.toneDb),
     headroom: others.headroom?.valueDb ?? null,
     masks: others.masks,
     crosstalk: crosstalkDb(channel),

@@ -38,7 +38,8 @@ export function noiseOf(channel: Channel, path: ChannelPath, limit: Limit | null
       volts: total === null || channel.fullScaleVpp === null ? null : rmsVolts(total, channel.fullScaleVpp),
     },
     toneDb,
-    snrDb: total === null ? null : toneDb - total,
+    // A tone that a null silences has no ratio, even where the noise goes with it.
+    snrDb: total === null ? null : toneDb === -Infinity ? -Infinity : toneDb - total,
     judged: judged(noise),
     evaluations: noise.evaluations,
   };

@@ -3,7 +3,7 @@ import assert from 'node:assert/strict';
 import { analyse } from '../../src/analysis';
 import { stageFilter } from '../../src/analysis/stage-filter';
 import type { Family, FamilyForm, FilterKind, MeasuredForm, StageForm } from '../../src/spec/channel';
-import { band, capture, family, generate, limit, plusMinus, rate, stage, tone, wanted } from '../support/channel-builder';
+import { band, capture, family, generate, limit, plusMinus, rate, relay, stage, tone, wanted } from '../support/channel-builder';
 import { inDb, inSeries, landingGain, largest, plainDelay, plainGain, spaced, type Gain } from '../support/plain-path';
 import { assertClose, assertWithin } from '../support/tolerance';
 
@@ -125,6 +125,18 @@ describe('a stage with a null', () => {
       const figures = analyse(channelOf({ kind: 'second-order', sectionKind: 'notch', frequencyHz: 3e3, q: 3 }, options));
       assert.equal(figures.limits[1]?.value, Infinity);
       assert.equal(figures.limits[1].where?.frequency, 3e3);
+    }
+  });
+
+  it('leaves no signal-to-noise ratio of a test tone that stands on it, and no number that is none', () => {
+    const form: PlainForm = { kind: 'second-order', sectionKind: 'notch', frequencyHz: wantedHz[1], q: 3 };
+    const common = { rate: rate(rateHz, { clockJitterSeconds: 1e-11 }), referenceHz, bits: 12, wanted: [wanted(...wantedHz)] };
+    for (const build of [capture, generate, relay]) {
+      const stages = [stage(form)];
+      const figures = analyse(build({ ...common, ...(build === relay ? { inputStages: stages } : { stages }) }));
+      assert.equal(figures.snr, -Infinity);
+      assert.equal(figures.enobFullScale, null);
+      assert.ok(!JSON.stringify(figures, (_, value: unknown) => (Number.isNaN(value) ? 'NaN' : value)).includes('NaN'));
     }
   });
 
