@@ -1,5 +1,6 @@
 /** `snr-short`: the signal-to-noise ratio at the test tone is below its limit. */
-import type { LimitFigure, NoiseFigures } from '../analysis/figures';
+import type { Figures, LimitFigure, NoiseFigures } from '../analysis/figures';
+import type { Channel } from '../spec/channel';
 import { formatDb } from '../units/format';
 import { figuresOf, findingIn, limitPath } from './build';
 import type { Finding } from './finding';
@@ -56,12 +57,22 @@ function short({ channel, figures }: Subject, limit: LimitFigure): Finding {
   return findingIn(channel, {
     code: 'snr-short',
     severity: 'error',
-    message: `The signal-to-noise ratio of the tone at ${tone} is ${value}, ${by}${worstCaseWords(worst)}${strongestPart(figures.noise)}.`,
+    message: `The signal-to-noise ratio of the tone at ${tone} is ${value}, ${by}${worstCaseWords(worst)}${mostWords(channel, figures, limit)}.`,
     path: limitPath(channel, limit),
     ref: limit.ref,
     figures: figuresOf(limit),
     limit: 'snr',
   });
+}
+
+/** More than half of what counts is not the noise where the ratio without unwanted sources is better by this, dB. */
+const halfDb = 10 * Math.log10(2);
+
+/** What most of it is, since that is what to cure: a part of the noise, or what unwanted sources add where they count. */
+function mostWords(channel: Channel, { snr, noise }: Figures, { value }: LimitFigure): string {
+  const counts = channel.limits.some(({ key, withUnwanted }) => key === 'snr' && withUnwanted);
+  const unwanted = counts && (snr === null || (value !== null && value < snr - halfDb));
+  return unwanted ? '; most of it is what unwanted sources add' : strongestPart(noise);
 }
 
 /** The largest part of the noise, since that is the one to cure. */
