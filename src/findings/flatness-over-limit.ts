@@ -52,12 +52,13 @@ function over({ channel, figures }: Subject, limit: LimitFigure): Finding {
   const decimals = decimalsFor('flatness', margin);
   const worst = { worstAt: limit.worstAt, nominal: limit.nominal, nominalPasses: nominalPasses(limit, limit.nominal), decimals };
   const where = limit.where === null ? 'in the wanted band' : `at ${frequencyWords(figures, limit.where.frequency)}`;
-  const departs = `departs by ${formatDb(limit.value ?? 0, 'dB', decimals)} from that at ${frequencyWords(figures, figures.reference)}`;
-  const by = `${formatDb(-margin, 'dB', decimals)} over the flatness limit of ${limitWords(limit)}`;
+  const from = `that at ${frequencyWords(figures, figures.reference)}`;
+  const by = `departs by ${formatDb(limit.value ?? 0, 'dB', decimals)} from ${from}, ${formatDb(-margin, 'dB', decimals)} over`;
+  const departs = limit.value === Infinity ? `is nothing at all, which departs from ${from} by more than` : by;
   return findingIn(channel, {
     code: 'flatness-over-limit',
     severity: 'error',
-    message: `The gain ${where} ${departs}, ${by}${worstCaseWords(worst)}.`,
+    message: `The gain ${where} ${departs} the flatness limit of ${limitWords(limit)}${worstCaseWords(worst)}.`,
     path: limitPath(channel, limit),
     ref: limit.ref,
     related: limitAndFilter(channel, limit).slice(1),
