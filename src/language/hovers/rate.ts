@@ -41,14 +41,18 @@ function copyRows({ direction, rate, wanted }: Figures): Row[] {
   return [['first copies', `${low} and ${formatFrequency(rate + band.low)} .. ${formatFrequency(rate + band.high)}`]];
 }
 
-/** The rates that keep the band whole in this zone, with the room to each side. */
+/** The rates that keep the band whole in this zone, with the room to each side, or how far outside the present one is. */
 function windowRows({ rate, rateWindow }: Figures): Row[] {
   if (rateWindow === null) return [];
   const { low, high } = rateWindow;
   const open = !Number.isFinite(high);
+  const words = open ? `${formatFrequency(low)} and more` : `${formatFrequency(low)} .. ${formatFrequency(high)}`;
   const room = (hz: number): string => roomWords(Math.abs(hz), rate);
+  if (!holds(rateWindow, rate)) {
+    return knownRows(['keeps the band whole', words], ['outside it by', room(rate < low ? low - rate : rate - high)]);
+  }
   return knownRows(
-    ['keeps the band whole', open ? `${formatFrequency(low)} and more` : `${formatFrequency(low)} .. ${formatFrequency(high)}`],
+    ['keeps the band whole', words],
     ['room below', room(rate - low)],
     ['room above', open ? null : room(high - rate)],
   );
@@ -85,7 +89,7 @@ function roomWords(hz: number, rate: number): string {
 /** A rate this close to the end of a window is in it. */
 const slack = 1e-12;
 
-function holds({ low, high }: RateWindow, rate: number): boolean {
+function holds({ low, high }: Pick<RateWindow, 'low' | 'high'>, rate: number): boolean {
   return low <= rate * (1 + slack) && rate * (1 - slack) <= high;
 }
 

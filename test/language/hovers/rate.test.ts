@@ -35,4 +35,11 @@ describe('the hover of a rate', () => {
       rows: { 'room below': '15.46 kHz (15,152 ppm)', 'room above': '24.9 kHz (24,407 ppm)' },
     });
   });
+
+  it('says of a rate that folds the band how far it is from the window', () => {
+    expectHover(spec('980 kHz'), {
+      headline: /zone 9$/,
+      rows: { 'keeps the band whole': '1 MHz .. 1.05 MHz', 'outside it by': '20 kHz (20,408 ppm)' },
+    });
+  });
 });
