@@ -19,7 +19,7 @@ import { noiseOf } from './noise';
 import { outputMasksOf } from './output-mask';
 import { relayAliases } from './relay/aliases';
 import { copyWeights } from './relay/copy-weights';
-import { crosstalkDb } from './relay/crosstalk';
+import { crosstalkOf } from './relay/crosstalk';
 import { relayImages } from './relay/images';
 import { relayPath } from './relay/relay-path';
 import { overlapsOf } from './source-range';
@@ -77,7 +77,7 @@ function figuresOf(channel: Channel): Figures {
       relayed || noise.snrDb === null || noise.toneDb === -Infinity ? null : effectiveBits(noise.snrDb - noise.toneDb),
     headroom: others.headroom?.valueDb ?? null,
     masks: others.masks,
-    crosstalk: crosstalkDb(channel),
+    crosstalk: crosstalkOf(channel)?.valueDb ?? null,
     copyWeights: copyWeights(channel),
     beyondData: [],
     faults: samplingFaults(channel),

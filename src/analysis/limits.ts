@@ -8,7 +8,7 @@ import type { Headroom } from './headroom';
 import type { Images } from './image';
 import type { LevelRange } from './level';
 import type { Noise } from './noise';
-import { crosstalkDb } from './relay/crosstalk';
+import { crosstalkOf } from './relay/crosstalk';
 import { hasPulse } from './wanted-pulse';
 
 /** The figures that limits are judged on. */
@@ -151,10 +151,11 @@ function headroomMeasured(headroom: Headroom | null): Measured | null {
   return { value: valueDb, nominal: nominalDb, gap: 0, where: null, worstAt };
 }
 
-/** Guard and link are as stated, whatever else deviates. */
 function crosstalkMeasured(channel: Channel): Measured | null {
-  const valueDb = crosstalkDb(channel);
-  return valueDb === null ? null : { value: valueDb, nominal: valueDb, gap: 0, where: null, worstAt: null };
+  const found = crosstalkOf(channel);
+  if (found === null) return null;
+  const { valueDb, nominalDb, worstAt } = found;
+  return { value: valueDb, nominal: nominalDb, gap: 0, where: null, worstAt };
 }
 
 /** Without a pulse and without a filter nothing moves any frequency. */

@@ -5,8 +5,8 @@ import { formatDb, formatFrequency, formatTime } from '../units/format';
 import { figuresOf, findingIn, limitPath } from './build';
 import type { Finding } from './finding';
 import type { FindingKind, Help, Subject } from './kind';
-import { brokenLimit } from './limits';
-import { decimalsFor, limitWords } from './wording';
+import { brokenLimit, nominalPasses } from './limits';
+import { decimalsFor, limitWords, worstCaseWords } from './wording';
 
 const help: Help = {
   summary: 'Too much of one time slot is left on the link when the next begins.',
@@ -52,6 +52,8 @@ export const crosstalkOverLimit: FindingKind = {
 function over({ channel }: Subject, limit: LimitFigure, slots: Slots): Finding {
   const margin = limit.margin ?? 0;
   const decimals = decimalsFor('crosstalk', margin);
+  const { nominal, worstAt } = limit;
+  const worst = { worstAt, nominal, nominalPasses: nominalPasses(limit, nominal), decimals };
   const value = formatDb(limit.value ?? 0, 'dB', decimals);
   const behind = `${formatTime(slots.guardSeconds)} of guard on a link of ${formatFrequency(slots.linkHz)}`;
   return findingIn(channel, {
@@ -59,7 +61,7 @@ function over({ channel }: Subject, limit: LimitFigure, slots: Slots): Finding {
     severity: 'error',
     message:
       `A slot leaves ${value} of itself in the next, behind ${behind}, ` +
-      `${formatDb(-margin, 'dB', decimals)} over the crosstalk limit of ${limitWords(limit)}${cureWords(slots, limit)}.`,
+      `${formatDb(-margin, 'dB', decimals)} over the crosstalk limit of ${limitWords(limit)}${worstCaseWords(worst)}${cureWords(slots, limit)}.`,
     path: limitPath(channel, limit),
     ref: limit.ref,
     related: [{ path: ['slots'], message: 'the slots' }, ...gateOf(channel)],
@@ -69,8 +71,8 @@ function over({ channel }: Subject, limit: LimitFigure, slots: Slots): Finding {
 }
 
 /** The guard that would do: what is left falls in proportion to it in dB. A limit of 0 dB or more asks for none. */
-function cureWords({ guardSeconds }: Slots, { at, value }: LimitFigure): string {
-  const needed = guardSeconds * (at / (value ?? NaN));
+function cureWords({ guardSeconds }: Slots, { at, nominal }: LimitFigure): string {
+  const needed = guardSeconds * (at / (nominal ?? NaN));
   return Number.isFinite(needed) ? `: it asks for a guard of ${formatTime(needed)}` : '';
 }
 
