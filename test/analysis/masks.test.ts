@@ -2,7 +2,17 @@
 import assert from 'node:assert/strict';
 import { analyse, type LimitFigure, type MaskFigure } from '../../src/analysis';
 import type { Channel, MaskLimit, MaskSegment } from '../../src/spec/channel';
-import { butterworthForm, capture, chebyshevForm, generate, plusMinus, rate, stage, wanted } from '../support/channel-builder';
+import {
+  butterworthForm,
+  capture,
+  chebyshevForm,
+  generate,
+  plusMinus,
+  rate,
+  relay,
+  stage,
+  wanted,
+} from '../support/channel-builder';
 import { plainHold } from '../support/plain-pulse';
 import { assertWithin, provedGapDb } from '../support/tolerance';
 
@@ -129,9 +139,10 @@ describe('a mask of the analogue path', () => {
   });
 });
 
-describe('a mask of the whole', () => {
-  const whole = (f: number): number => lowPass(f) * plainHold({ shape: 'rectangle', width: { share: 1 } }, 50e3, f);
+/** The low-pass and a zero-order hold. */
+const whole = (f: number): number => lowPass(f) * plainHold({ shape: 'rectangle', width: { share: 1 } }, 50e3, f);
 
+describe('a mask of the whole', () => {
   it('has the aperture in it', () => {
     const { first } = masked(channel, 'through', segment(0, 5e3, { lower: flat(-0.5), upper: flat(0.5) }));
     assertWithin(first.value, dB(whole(5e3)), provedGapDb);
@@ -150,6 +161,29 @@ describe('a mask of the whole', () => {
     const { first } = masked(player, 'through', above(0, 20e3, -3));
     const x = 20 / 50 / 0.99;
     assertWithin(first.value, dB(Math.sin(Math.PI * x) / (Math.PI * x)), provedGapDb);
+  });
+});
+
+describe('a mask of a relay', () => {
+  const parts = {
+    wanted: [wanted(0, 5e3)],
+    rate: rate(50e3),
+    inputStages: [stage(butterworthForm(2, 10e3))],
+    outputStages: [stage(butterworthForm(2, 10e3))],
+  };
+  const both = segment(0, 5e3, { lower: flat(-1), upper: flat(1) });
+
+  it('has both filters in it, and a gate that only takes its share counts for nothing', () => {
+    const gated = relay({ ...parts, gate: { kind: 'pulse', pulse: { shape: 'rectangle', width: { share: 0.12 } } } });
+    for (const key of ['response', 'through'] as const) {
+      assertWithin(masked(gated, key, both).first.value, 2 * dB(lowPass(5e3)), provedGapDb, key);
+    }
+  });
+
+  it('of the whole has the hold in it', () => {
+    const held = relay(parts);
+    assertWithin(masked(held, 'response', both).first.value, 2 * dB(lowPass(5e3)), provedGapDb);
+    assertWithin(masked(held, 'through', both).first.value, dB(lowPass(5e3) * whole(5e3)), provedGapDb);
   });
 });
 
