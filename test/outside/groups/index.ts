@@ -6,6 +6,8 @@ import { delays, holdValues, narrowGates, pulses, trains } from './holds';
 import { holdJitter } from './hold-jitter';
 import { masks } from './masks';
 import { orders } from './orders';
+import { printedBessel, printedTables } from './printed';
+import { printedBandwidths } from './printed-bandwidths';
 import { prototypes } from './prototypes';
 import { kinds, responses } from './responses';
 import { systemCases } from './system-cases';
@@ -26,7 +28,10 @@ export const groups: readonly OutsideGroup[] = [
   prototypes,
   responses,
   kinds,
+  printedTables,
+  printedBessel,
   bandwidths,
+  printedBandwidths,
   passive,
   orders,
   touchstone,
