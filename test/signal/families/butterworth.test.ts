@@ -46,7 +46,7 @@ describe('butterworth', () => {
   });
 
   it('delays by 1/sin(π/2n) over the corner in radians at 0 Hz', () => {
-    // Source: closed form, checks of the trade; n = 2 gives √2, n = 5 gives 3.236068.
+    // Closed form; n = 2 gives √2, n = 5 gives 3.236068.
     for (const order of [1, 2, 5, 8]) {
       assertClose(
         groupDelay(butterworth(order, 1000), 0),
