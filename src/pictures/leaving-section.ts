@@ -10,16 +10,22 @@ import { imageLimitAt, leavingView } from './leaving-view';
 import type { LeavingView } from './leaving-view';
 import { limitFigure, pulseKey } from './subject';
 import type { Subject } from './subject';
-import { answerWith, levelWords, marginWords, sentences, stretchWords } from './words';
+import { answerWith, furtherWords, levelWords, marginWords, sentences, stretchWords, worstStanding } from './words';
 
 /** The section. */
 export function leavingSection(subject: Subject): Section {
   const limit = limitFigure(subject, 'image');
+  const mask = limitFigure(subject, 'output');
+  const stated = [limit, mask].flatMap((figure) => figure ?? []);
+  const first = stated.find((figure) => figure.judged && !figure.passes) ?? stated[0];
   return {
     id: 'leaving',
     title: 'What leaves',
-    answer: answerWith(answerText(subject), subject.channel, limit),
-    place: subject.placeOf(limit === null ? [pulseKey(subject.channel)] : ['limits', 'image']),
+    answer: {
+      text: `${answerWith(answerText(subject), subject.channel, limit).text}${furtherWords([mask])}`,
+      standing: worstStanding(subject.channel, [limit, mask]),
+    },
+    place: subject.placeOf(first === undefined ? [pulseKey(subject.channel)] : ['limits', first.limit]),
     plots: [leavingPlot(leavingView(subject))],
   };
 }

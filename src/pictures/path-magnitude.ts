@@ -128,10 +128,10 @@ const strokes: readonly Stroke[] = ['dashed', 'dash-dot', 'long-dash', 'dotted']
 
 function stageItems(subject: Subject, draw: (response: Response) => Points, x: FrequencyAxis): Item[] {
   if (subject.path.stages.length < 2) return [];
-  return subject.path.stages.map(({ stage, response }, index) => {
+  return subject.path.stages.map(({ response }, index) => {
     const points = draw(response);
     const falls = points.x.findIndex((f, at) => f > x.logLowHz && (points.y[at] ?? 0) < (points.y[0] ?? 0) - 12);
-    const name = stage.name ?? stage.label;
+    const name = stageName(subject, index);
     const at = falls === -1 ? points.x.length - 1 : falls;
     return item({
       id: `stage-${index}`,
@@ -145,6 +145,14 @@ function stageItems(subject: Subject, draw: (response: Response) => Points, x: F
       label: { text: name, frequencyHz: points.x[at] ?? 0, level: points.y[at] ?? 0, prefer: 'right', priority: 5 },
     });
   });
+}
+
+/** Its own name or label; where one filter stands on both sides of a relay, with the side. */
+function stageName({ path, channel }: Subject, index: number): string {
+  const label = path.stages[index]?.stage.label ?? '';
+  const twice = path.stages.some(({ stage }, other) => other !== index && stage.label === label);
+  if (!twice || channel.direction !== 'relay') return label;
+  return `${label}, ${index < channel.inputStages.length ? 'input' : 'output'} side`;
 }
 
 function pulseItems(subject: Subject, draw: (response: Response) => Points): Item[] {
@@ -221,7 +229,7 @@ function tableOf(subject: Subject): Plot['table'] {
   const rate = channel.rate.hz;
   const edges = channel.wanted.flatMap((band) => [band.lowHz, band.highHz]);
   const points = [...new Set([...edges, channel.referenceHz, figures.halfRate, rate, 2 * rate])].sort((a, b) => a - b);
-  const stages = path.stages.map(({ stage }) => ({ title: stage.name ?? stage.label, unit: 'dB' as const }));
+  const stages = path.stages.map((_, index) => ({ title: stageName(subject, index), unit: 'dB' as const }));
   return {
     caption: `${channel.name}: gain of the path at nominal values`,
     columns: [{ title: 'at', unit: 'Hz' }, { title: 'total', unit: 'dB' }, { title: pulseKey(channel), unit: 'dB' }, ...stages],

@@ -8,11 +8,15 @@ import { delayPlot, phasePlot } from './path-timing';
 import { magnitudePlot } from './path-magnitude';
 import { filterPlace, limitFigure } from './subject';
 import type { Subject } from './subject';
-import { standingOf } from './words';
+import { furtherWords, worstStanding } from './words';
 
 /** The section. */
 export function pathSection(subject: Subject): Section {
   const limit = limitFigure(subject, 'flatness');
+  const others = furtherKeys.map((key) => limitFigure(subject, key));
+  // The line is that of the limit which stands worst, or of the first.
+  const stated = [limit, ...others].flatMap((figure) => figure ?? []);
+  const first = stated.find((figure) => figure.judged && !figure.passes) ?? stated[0];
   const closeUp = subject.channel.wanted.length === 0 ? [] : [closeUpPlot(subject)];
   const plain = subject.channel.stages.length === 0 && !hasPulse(subject.channel);
   const timed = !plain && pathDelay(subject.path, subject.channel.referenceHz) !== null;
@@ -20,11 +24,17 @@ export function pathSection(subject: Subject): Section {
   return {
     id: 'path',
     title: 'Analogue path',
-    answer: { text: answerText(subject), standing: standingOf(subject.channel, limit) },
-    place: limit === null ? filterPlace(subject) : subject.placeOf(['limits', 'flatness']),
+    answer: {
+      text: `${answerText(subject)}${furtherWords(others)}`,
+      standing: worstStanding(subject.channel, [limit, ...others]),
+    },
+    place: first === undefined ? filterPlace(subject) : subject.placeOf(['limits', first.limit]),
     plots: [...closeUp, magnitudePlot(subject), ...timing],
   };
 }
+
+/** The other limits of the path. */
+const furtherKeys = ['response', 'through', 'level', 'delay', 'delay-spread'] as const;
 
 function powerWords(points: readonly number[]): string {
   if (points.length === 0) return 'never falls to half power';

@@ -2,6 +2,7 @@
 import type { Judgement } from '../findings';
 import type { PanelPicture, Section } from '../protocol/picture';
 import { withSharedPlaces } from './also-at';
+import { withFiniteLevels } from './finite-levels';
 import { headingOf } from './heading';
 import { leavingSection } from './leaving-section';
 import { pathSection } from './path-section';
@@ -12,7 +13,7 @@ import type { Subject } from './subject';
 /** Everything that the panel draws of a channel; the channel must be whole. */
 export function pictureOf(judgement: Judgement, channelName: string): PanelPicture {
   const subject = subjectOf(judgement, channelName);
-  const sections = [...signalSections(subject), pathSection(subject)];
+  const sections = [...signalSections(subject), pathSection(subject)].map(withFiniteLevels);
   const picture = { channel: channelName, heading: headingOf(subject), sections };
   return withSharedPlaces(picture, judgement.reading);
 }

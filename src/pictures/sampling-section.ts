@@ -34,6 +34,7 @@ function withOwnIds(plot: Plot): Plot {
 function answerText({ figures, channel }: Subject): string {
   const { alias } = figures;
   if (channel.unwanted.length === 0) return 'nothing unwanted is stated';
+  if (figures.beyondData.some(({ keys }) => keys.includes('alias'))) return 'not known: a measured table ends first';
   if (alias === null || alias.level === null || alias.lands === null) return 'nothing lands in a protected range';
   const sum = channel.limits.some(({ key, sum: sums }) => key === 'alias' && sums)
     ? figures.limits.find(({ limit }) => limit === 'alias')

@@ -63,7 +63,7 @@ export function samplingView(subject: Subject): SamplingView {
     across: channel.direction === 'relay' ? relayGains(subject).input : subject.nominal,
     sources,
     input: inputAxis(subject, sources, levels),
-    output: frequencyAxisTo(channel.direction, figures.outputRate / 2),
+    output: frequencyAxisTo(subject),
     levels,
     protect: figures.protected.map(({ low, high }) => ({ low, high: Math.min(high, figures.halfRate) })),
     limitDb,
@@ -112,9 +112,13 @@ function behindSampler(subject: Subject): Behind {
   };
 }
 
-function frequencyAxisTo(direction: Channel['direction'], highHz: number): FrequencyAxis {
-  const title = direction === 'relay' ? 'Hz at the output, to half the rate' : 'Hz after sampling, to half the rate';
-  return { title, lowHz: 0, highHz, logLowHz: highHz / 1e4, scale: 'linear' };
+/** From 0 to half the rate; logarithmic where all that counts is a small part of it. */
+function frequencyAxisTo({ channel, figures }: Subject): FrequencyAxis {
+  const title = channel.direction === 'relay' ? 'Hz at the output, to half the rate' : 'Hz after sampling, to half the rate';
+  const highHz = figures.outputRate / 2;
+  const counts = Math.max(...figures.protected.map(({ high }) => high), ...figures.wanted.map(({ appearsHigh }) => appearsHigh));
+  const scale = counts < highHz / 25 ? 'log' : 'linear';
+  return { title, lowHz: 0, highHz, logLowHz: scale === 'log' ? counts / 100 : highHz / 1e4, scale };
 }
 
 function inputAxis(subject: Subject, sources: readonly SourceView[], levels: LevelAxis): FrequencyAxis {

@@ -20,7 +20,7 @@ export function stretchWords(lowHz: number, highHz: number): string {
 export function marginWords(figure: LimitFigure): string {
   const { margin, limit, sense } = figure;
   if (margin === null) return 'not judged';
-  if (!Number.isFinite(margin)) return 'nothing comes near it';
+  if (!Number.isFinite(margin)) return margin > 0 ? 'nothing comes near it' : 'broken without limit';
   const decimals = decimalsFor(limit, margin);
   const amount = formatAmount(Math.abs(margin), figure.unit === 's' ? 's' : 'dB', decimals);
   const beyond = { 'at-most': 'over', 'at-least': 'short', inside: 'outside' }[sense];
@@ -32,6 +32,22 @@ export function standingOf(channel: Channel, figure: LimitFigure | null): Standi
   if (figure === null || !figure.judged || figure.margin === null) return 'unjudged';
   if (!figure.passes) return 'over';
   return figure.margin < thinBelow(channel, figure) ? 'thin' : 'passes';
+}
+
+/** How several limits stand together: as the one that stands worst. */
+export function worstStanding(channel: Channel, figures: readonly (LimitFigure | null)[]): Standing {
+  const order: readonly Standing[] = ['over', 'thin', 'passes', 'unjudged'];
+  const standings = figures.map((figure) => standingOf(channel, figure));
+  return order.find((standing) => standings.includes(standing)) ?? 'unjudged';
+}
+
+/** What further limits add to an answer: "response mask 0.2 dB inside", for each that is stated. */
+export function furtherWords(figures: readonly (LimitFigure | null)[]): string {
+  return figures.map((figure) => (figure === null ? '' : `, ${nameOfLimit(figure)} ${marginWords(figure)}`)).join('');
+}
+
+function nameOfLimit({ limit }: LimitFigure): string {
+  return limit === 'response' || limit === 'through' || limit === 'output' ? `${limit} mask` : limit;
 }
 
 /** An answer with its limit's margin behind it, where it has one. */

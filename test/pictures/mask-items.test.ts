@@ -122,3 +122,40 @@ describe('a through mask in the picture', () => {
     });
   });
 });
+
+describe('an output mask in the picture', () => {
+  const text = `bandkeep: 1
+title: Strain on the turbine shaft
+channels:
+  strain:
+    direction: relay
+    wanted: { band: 0 Hz .. 400 Hz, level: -3 dBFS }
+    rate: 8 kHz
+    gate: 60 %
+    output-filter: { rc: { r: 10 kΩ, c: 4.7 nF } }
+    limits:
+      output:
+        - { band: 6 kHz .. 20 kHz, below: -40 dBFS }
+        - { band: 20 kHz .., below: -60 dBFS }
+`;
+  const judgement = judged(text);
+  const picture = pictureOf(judgement, 'strain');
+
+  it('stands at its own level, to the end of the axis where it is endless', () => {
+    const [first] = forbidden(itemOf(picture, 'leaving-mask-output-0'));
+    assert.deepEqual([first?.side, first?.boundary.y[0], first?.boundary.x[0]], ['above', -40, 6000]);
+    const [second] = forbidden(itemOf(picture, 'leaving-mask-output-1'));
+    const axis = picture.sections[0]?.plots[0]?.panes[0]?.x;
+    assert.equal(second?.boundary.x.at(-1), axis?.highHz);
+  });
+
+  it('is told in the heading of its section, which leads to it', () => {
+    // Of copy 1 the lower side leaves strongest: −3 + 20·log10(0.6·sinc(0.6)) − 10·log10(1 + (7.6/3.386)²) dBFS at 7.6 kHz.
+    const x = 0.6 * Math.PI;
+    const level = -3 + 20 * Math.log10(0.6 * (Math.sin(x) / x)) - 10 * Math.log10(1 + (2 * Math.PI * 7600 * 47e-6) ** 2);
+    const [section] = picture.sections;
+    assert.ok(section?.answer.text.endsWith(`, output mask ${Number((level + 40).toFixed(1))} dB outside`), section?.answer.text);
+    assert.equal(section?.answer.standing, 'over');
+    assert.deepEqual(section?.place, { channel: 'strain', path: ['limits', 'output'] });
+  });
+});
