@@ -1,7 +1,7 @@
 /** The whole check of one spec: read, judge, and prove fixes for what is wrong; the command line and the library run it. */
 import { createJudgeStore, judging, remediesOf, type Finding } from '../findings';
 import type { CheckedFile } from '../output';
-import { curing, type Cure } from '../remedies';
+import { curing, targetOf, type Cure } from '../remedies';
 import { read, type FileSource } from '../spec';
 import { drain } from './drain';
 
@@ -23,10 +23,12 @@ export function* checkingText(path: string, text: string, options: CheckOptions)
   const store = createJudgeStore();
   const judgement = yield* judging(read(text, undefined, options.files), store);
   const cures = new Map<Finding, Cure>();
-  if (options.fixes) {
-    for (const finding of judgement.findings) {
-      if (isCurable(finding)) cures.set(finding, yield* curing(judgement, finding, store));
-    }
+  const searched = new Map<string, Cure>();
+  for (const finding of options.fixes ? judgement.findings.filter(isCurable) : []) {
+    const target = targetOf(finding);
+    const cure = searched.get(target) ?? (yield* curing(judgement, finding, store));
+    searched.set(target, cure);
+    cures.set(finding, cure);
   }
   return { path, judgement, cures };
 }

@@ -1,6 +1,6 @@
 /** The fixes that are proved so far, kept by content: an edit drops those it could have changed and moves the others along. */
 import type { Finding, Judgement } from '../findings';
-import type { Cure } from '../remedies';
+import { targetOf, type Cure } from '../remedies';
 import { applyEdits, read, type Channel, type Edit, type Reading } from '../spec';
 
 /** A search's outcome with what it was proved on. */
@@ -38,11 +38,11 @@ export function createCureShelf(): CureShelf {
   return {
     has(judgement, finding) {
       follow(judgement.reading);
-      return kept.has(keyOf(finding));
+      return kept.has(targetOf(finding));
     },
     cureOf(judgement, finding) {
       follow(judgement.reading);
-      const key = keyOf(finding);
+      const key = targetOf(finding);
       const found = kept.get(key);
       if (found === undefined) return null;
       if (holds(found, judgement.reading)) return found.cure;
@@ -54,15 +54,9 @@ export function createCureShelf(): CureShelf {
       const channel = channelOf(judgement.reading, finding.channel);
       if (channel === null) return;
       const changed = new Set(cure.fixes.flatMap((fix) => channelsChangedBy(judgement.reading, fix.edits)));
-      kept.set(keyOf(finding), { channel, changed, cure, checkedFor: judgement.reading });
+      kept.set(targetOf(finding), { channel, changed, cure, checkedFor: judgement.reading });
     },
   };
-}
-
-/** What makes a finding the same one in a newer judgement; its numbers are the channel's content and need not be repeated. */
-function keyOf(finding: Finding): string {
-  const at = 'place' in finding.at ? [finding.at.place.channel, finding.at.place.path] : finding.at.span;
-  return JSON.stringify([finding.code, finding.channel, finding.limit, at]);
 }
 
 function channelOf(reading: Reading, name: string | null): Channel | null {

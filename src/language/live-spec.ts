@@ -91,6 +91,8 @@ export function openSpec(uri: string, version: number, text: string, files?: Fil
       return document;
     },
     *curing(on, finding) {
+      // Another finding with the same target may have been searched for meanwhile.
+      if (shelf.has(on.judgement, finding)) return;
       const cure = yield* curing(on.judgement, finding, store);
       shelf.keep(on.judgement, finding, cure);
     },

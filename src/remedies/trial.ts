@@ -44,7 +44,7 @@ export function* trying(
   return {
     changes: changed.changes,
     figures: after.channels.find((channel) => channel.entry.name === finding.channel)?.figures ?? null,
-    remaining: after.findings.filter((found) => isSameTarget(found, finding)),
+    remaining: after.findings.filter((found) => targetOf(found) === targetOf(finding)),
     newErrors: fresh.filter((found) => found.severity === 'error'),
     newWarnings: fresh.filter((found) => found.severity === 'warning'),
     passes: after.channels.some(({ entry, passes }) => entry.name === finding.channel && passes === true),
@@ -69,9 +69,12 @@ function identity(finding: Finding): string {
   return JSON.stringify([finding.code, finding.channel, finding.limit, where]);
 }
 
-/** Of the same code in the same channel; a thin margin is thin for one limit. */
-function isSameTarget(found: Finding, finding: Finding): boolean {
-  return found.code === finding.code && found.channel === finding.channel && found.limit === finding.limit;
+/**
+ * All that a search for fixes asks of a finding, as a key: a fix clears every finding of its code in the channel (a thin margin is thin
+ * for one limit), so those with the same key share one search.
+ */
+export function targetOf({ code, channel, limit }: Finding): string {
+  return JSON.stringify([code, channel, limit]);
 }
 
 /** Differences below this are rounding, or a proof's own gap. */
