@@ -39,6 +39,47 @@ channels:
     filter: { bandwidth: 20 kHz }
 `;
 
+/** Relay and capture channels at the edges of what there is. */
+const relays = `bandkeep: 1
+masks:
+  far: [{ band: 50 kHz .., below: -40 dB }]
+channels:
+  tracked:
+    direction: relay
+    wanted: [{ name: low, band: 0 Hz .. 400 Hz }, { name: high, band: 1 kHz .. 1.5 kHz, level: -6 dBFS }]
+    unwanted: [{ tone: 8.2 kHz ± 3 %, level: -30 dBFS, harmonics: 5 }, { name: ripple, tone: 100 Hz, level: -70 dBFS, enters: sampler }]
+    levels-at: sampler
+    rate: 8 kHz ± 1 %
+    gate: { track: 30 % }
+    input-filter: { bandwidth: 3 kHz }
+    limits: { image: -30 dBFS, alias: -60 dBc, response: far, output: [{ band: 2 kHz .., below: -20 dBFS }] }
+  split:
+    direction: relay
+    wanted: { band: 100 Hz .. 400 Hz }
+    rate: 8 kHz
+    hold: { shape: split, width: 50 % }
+  bare-relay:
+    direction: relay
+    wanted: { band: 0 Hz .. 400 Hz }
+    unwanted: anything
+    rate: 8 kHz
+  summed:
+    direction: capture
+    wanted: { band: 5 Hz .. 1 kHz }
+    unwanted: [{ name: hum, tone: 50 Hz, level: -80 dBFS, harmonics: { to: 999, odd: true } }, { band: 7 kHz .., level: -90 dBFS, harmonics: 3 }]
+    rate: 8 kHz
+    aperture: { shape: exponential, width: 50 %, decay: 10 % }
+    filter: { second-order: { frequency: 2 kHz, q: 5, kind: notch } }
+    limits: { alias: { sum: -60 dBFS }, delay: 1 ms, through: [{ band: 0 Hz .. 1 kHz, within: -3 dB .. 1 dB }] }
+  high-zone:
+    direction: relay
+    wanted: { band: 9 kHz .. 11 kHz }
+    rate: 8 kHz
+    gate: 10 %
+    output-filter: { family: butterworth, kind: bandpass, order: 2, corners: 8 kHz .. 12 kHz }
+    limits: { image: -10 dBc }
+`;
+
 const judged = (text: string): Judgement => judge(read(text), createJudgeStore());
 const cases: readonly (readonly [string, string])[] = [
   [exampleText('gate-bearing'), 'bearing-x'],
@@ -46,7 +87,10 @@ const cases: readonly (readonly [string, string])[] = [
   [exampleText('gate-bearing-broken'), 'bearing-x'],
   [exampleText('fish-sounder'), 'sounder-drive'],
   [exampleText('echo-receiver'), 'ice-echo'],
+  [exampleText('strain-link'), 'strain-link'],
+  [exampleText('strain-link'), 'thrust-link'],
   ...['undersampled', 'bare', 'staircase', 'upper-copy'].map((name) => [odd, name] as const),
+  ...['tracked', 'split', 'bare-relay', 'summed', 'high-zone'].map((name) => [relays, name] as const),
 ];
 
 const itemsOf = (picture: PanelPicture): readonly Item[] =>
