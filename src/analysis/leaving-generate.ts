@@ -10,7 +10,8 @@ import type { Copy } from './copies';
 import { toDb } from './decibels';
 import { assumptions, rateScale } from './image';
 import type { Assumption } from './image';
-import type { Leaving, LeavingPair, OutputSegment } from './output-mask';
+import { strongest } from './leaving';
+import type { Leaving, LeavingPair, OutputSegment } from './leaving';
 import { deviation, joinWorst, partsVary, rateLabel, varies } from './tolerances';
 import { nominalPath, worstPath } from './worst-path';
 
@@ -29,15 +30,6 @@ export function leavingOfGenerate(channel: Channel, path: ChannelPath, segment: 
     ),
   );
   return { nominal, worst: strongest(worst) };
-}
-
-/** The one that is furthest over the bound, with the work of all. */
-export function strongest(all: readonly (Leaving | null)[]): Leaving | null {
-  const found = all.filter((one) => one !== null);
-  const [first, ...others] = found;
-  if (first === undefined) return null;
-  const best = others.reduce((most, one) => (one.overDb > most.overDb ? one : most), first);
-  return { ...best, evaluations: found.reduce((sum, one) => sum + one.evaluations, 0) };
 }
 
 /** Every copy but the wanted one, which only touches the bands that are looked at. */

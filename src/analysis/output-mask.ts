@@ -1,43 +1,19 @@
 /** The `output` mask: for each segment the proved worst of everything that leaves in its band outside the wanted bands. */
-import type { Enclosure, Response } from '../signal/response';
+import type { Response } from '../signal/response';
 import { inverse } from '../signal/response-algebra';
 import { stretched } from '../signal/stretched';
 import type { Channel, MaskSegment } from '../spec/channel';
 import { axisFactors } from './axis';
 import type { ChannelPath } from './channel-path';
 import { toDb } from './decibels';
-import type { MaskFigure, MaskOrigin, WorstAt } from './figures';
+import type { MaskFigure } from './figures';
 import { without } from './intervals';
+import type { LeavingPair, OutputSegment } from './leaving';
 import { leavingOfGenerate } from './leaving-generate';
 import { boundResponse } from './masks';
 import type { Masks } from './masks';
 import { leavingOfRelay } from './relay/leaving';
 import { wantedRanges } from './source-range';
-
-/** A segment as a search takes it. */
-export interface OutputSegment {
-  /** Its band without the wanted bands, in Hz. */
-  readonly leaves: readonly Enclosure[];
-  /** One over its bound, at the largest that the clock's tolerance makes of it where frequencies are counted in periods. */
-  overBound(channel: Channel, at: 'nominal' | 'worst'): Response;
-}
-
-/** What leaves strongest against a bound. */
-export interface Leaving {
-  /** Its level over the bound, dB: a proved upper bound. */
-  readonly overDb: number;
-  readonly frequencyHz: number;
-  readonly from: MaskOrigin;
-  readonly gapDb: number;
-  readonly worstAt: WorstAt | null;
-  readonly evaluations: number;
-}
-
-/** Nominal and worst of what leaves. */
-export interface LeavingPair {
-  readonly nominal: Leaving | null;
-  readonly worst: Leaving | null;
-}
 
 /** The figures of the `output` mask, segment by segment. A segment that asks for more, `above`, is none that anything could break. */
 export function outputMasksOf(channel: Channel, path: ChannelPath): Masks {
