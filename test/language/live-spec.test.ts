@@ -76,4 +76,25 @@ describe('an open spec', () => {
     assert.equal(spec.counts.channelsAnalysed, 1);
     assert.equal(spec.counts.slicesRead, 1);
   });
+
+  it('is read and judged anew when a file that it leans on has changed, and only what that changes', () => {
+    const table = (levelDb: number) => `frequency (kHz),level (dBFS)\n30,${levelDb}\n3000,${levelDb}\n`;
+    const texts = new Map([['t.csv', table(-20)]]);
+    const content = (path: string) => {
+      const text = texts.get(path);
+      return text === undefined ? null : { text };
+    };
+    const text = `${manyChannels(3)}  tabled:\n    like: gauge-0\n    unwanted: { name: hash, spectrum: t.csv }\n`;
+    const spec = openSpec('file:///a', 1, text, { path: 'a.bandkeep.yaml', content });
+    assert.deepEqual(spec.read(), ['t.csv']);
+    const levelIn = (document: SpecDocument) =>
+      document.judgement.channels.find(({ entry }) => entry.name === 'tabled')?.figures?.alias?.level ?? NaN;
+    const before = levelIn(drain(spec.judging()));
+    texts.set('t.csv', table(-30));
+    spec.refresh();
+    assert.equal(spec.document, null);
+    assert.ok(Math.abs(levelIn(drain(spec.judging())) - (before - 10)) < 1e-9);
+    assert.equal(spec.counts?.channelsAnalysed, 1);
+    assert.equal(spec.version, 1);
+  });
 });

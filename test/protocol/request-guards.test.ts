@@ -9,6 +9,8 @@ import {
   isLocateParams,
   isPictureParams,
   isPlaceAtParams,
+  isReadFileResult,
+  readsFilesOf,
 } from '../../src/protocol/request-guards';
 
 const position = { line: 3, character: 0 };
@@ -69,5 +71,16 @@ describe('the parameters of a request about', () => {
   it('nothing at all give no folder of pages', () => {
     assert.equal(docsBaseOf({ docsBase: 'file:///docs' }), 'file:///docs');
     for (const value of [undefined, null, {}, { docsBase: 3 }, 'x']) assert.equal(docsBaseOf(value), null);
+  });
+
+  it('files are answered with a text or with a fault that we know', () => {
+    for (const value of [{ text: '' }, { fault: 'missing' }, { fault: 'not-text' }]) assert.ok(isReadFileResult(value));
+    for (const value of [null, 'text', {}, { text: 3 }, { fault: 'broken' }, { fault: null }])
+      assert.ok(!isReadFileResult(value));
+  });
+
+  it('nothing at all promise no files', () => {
+    assert.equal(readsFilesOf({ readsFiles: true }), true);
+    for (const value of [undefined, null, {}, { readsFiles: 'yes' }]) assert.equal(readsFilesOf(value), false);
   });
 });
