@@ -1,6 +1,6 @@
 /** Hover of a limit: how it stands, and what contributes, strongest first. */
-import type { Figures, LimitFigure, NoiseFigures } from '../../analysis';
-import type { LevelLimit } from '../../spec';
+import type { AliasFigure, Figures, LimitFigure, NoiseFigures } from '../../analysis';
+import type { Channel, LevelLimit } from '../../spec';
 import { formatAmount, formatDb } from '../../units/format';
 import { knownRows, type Answer, type Row } from './answer';
 import { levelRows } from './level';
@@ -18,6 +18,7 @@ export function limitHover({ channel, figures, path }: Subject): Answer | null {
     headline: headlineOf(limit),
     rows: [
       ...standingRows(limit, limit.limit === 'level' ? rangeWords(channel.levelLimit) : null),
+      ...sumRows(limit, channel),
       ...contributions(limit, figures),
       ...(limit.unit === 'dBFS' ? levelRows(channel, limit.at).map(([unit, value]): Row => [`the limit, ${unit}`, value]) : []),
     ],
@@ -55,6 +56,12 @@ function standingRows(limit: LimitFigure, range: string | null): Row[] {
   );
 }
 
+/** Whether all landings count together. */
+function sumRows({ limit }: LimitFigure, { limits }: Channel): Row[] {
+  const sums = limits.some(({ key, sum }) => key === limit && sum);
+  return sums ? [['counts', 'all landings of all sources together, as powers']] : [];
+}
+
 /** Both ends of a range of levels; one that was left out is open. */
 function rangeWords(range: LevelLimit | null): string | null {
   if (range === null) return null;
@@ -70,7 +77,10 @@ function level(limit: LimitFigure, value: number): string {
 function contributions(limit: LimitFigure, figures: Figures): Row[] {
   switch (limit.limit) {
     case 'alias':
-      return strongest(figures.aliases.map(({ source, level: value }) => [`\`${source}\``, value]));
+      return strongest(
+        figures.aliases.map((alias) => [aliasName(alias), limit.unit === 'dBc' ? alias.relative : alias.level]),
+        limit.unit,
+      );
     case 'image':
       return strongest(
         figures.images.map(({ copy, side, level: value, relative }) => [
@@ -92,6 +102,10 @@ function contributions(limit: LimitFigure, figures: Figures): Row[] {
     case 'output':
       return [];
   }
+}
+
+function aliasName({ source, harmonic }: AliasFigure): string {
+  return harmonic === 1 ? `\`${source}\`` : `\`${source}\`, harmonic ${harmonic}`;
 }
 
 /** The parts of the noise that exist, dBFS. */

@@ -14,7 +14,7 @@ export function sourceHover({ channel, figures, path }: Subject): Answer | null 
   if (source === undefined) return null;
   const alias = figures.aliases.find((figure) => figure.index === index) ?? null;
   return {
-    headline: headlineOf(source, alias),
+    headline: isBeyondData(figures) ? unknownWords(source) : headlineOf(source, alias),
     rows: [
       ...knownRows(
         ['stands at', standsAt(source)],
@@ -27,6 +27,15 @@ export function sourceHover({ channel, figures, path }: Subject): Answer | null 
     ],
     formula: formulaOf(channel, source),
   };
+}
+
+/** Whether a measured table ends before what lands could be followed through it. */
+function isBeyondData({ beyondData }: Figures): boolean {
+  return beyondData.some(({ keys }) => keys.includes('alias'));
+}
+
+function unknownWords(source: Source): string {
+  return `where \`${source.name}\` lands is not computed: a measured table of the filter ends first`;
 }
 
 function headlineOf(source: Source, alias: AliasFigure | null): string {
