@@ -16,8 +16,8 @@ export type PartRanges = Readonly<Record<keyof PartFactors, Enclosure>>;
 /** Bounds are widened by this, in place of directed rounding. */
 const logSlack = 1e-9;
 
-/** A quadratic in one factor: a + b·x + c·x². */
-type Quadratic = readonly [number, number, number];
+/** n₀ + n₁·x + n₂·x² over d₀ + d₁·x + d₂·x². */
+type Quadratics = readonly [n0: number, n1: number, n2: number, d0: number, d1: number, d2: number];
 
 /**
  * With u = (f/f₀)², 1/|H|² = D = (1 − u·l·c)² + (u/Q²)·(r·c)², l, c, r the parts over their nominal values.
@@ -40,14 +40,15 @@ export class ResonanceRatio {
       const logGain = frequencyHz === referenceHz ? 0 : frequencyHz === Infinity ? -Infinity : Infinity;
       return { logGain, parts: this.nominal() };
     }
-    const [u, v] = [this.square(frequencyHz), this.square(referenceHz)];
-    let parts = this.nominal();
-    let most = this.ratio(u, v, parts);
-    for (const tried of this.candidates(u, v)) {
-      const ratio = this.ratio(u, v, tried);
-      if (ratio > most) [parts, most] = [tried, ratio];
+    const best = new Best(this.square(frequencyHz), this.square(referenceHz), this.q);
+    const { r, l, c } = this.ranges;
+    const nominal = this.nominal();
+    best.look(nominal.r, nominal.l, nominal.c);
+    for (const resistor of ends(r)) {
+      for (const capacitor of ends(c)) best.lookAlongL(resistor, l, capacitor);
+      for (const coil of ends(l)) best.lookAlongC(resistor, coil, c);
     }
-    return { logGain: 0.5 * Math.log(most), parts };
+    return { logGain: 0.5 * Math.log(best.ratio), parts: { r: best.r, l: best.l, c: best.c } };
   }
 
   /** A proved upper bound over boxes of both frequencies. */
@@ -105,31 +106,6 @@ export class ResonanceRatio {
     };
   }
 
-  /** The ends and the turning points of all edges. */
-  private candidates(u: number, v: number): readonly PartFactors[] {
-    const { r, l, c } = this.ranges;
-    return ends(r).flatMap((resistor) => {
-      const damping = (resistor / this.q) ** 2;
-      const alongL = ends(c).flatMap((capacitor) => {
-        const squares = (w: number): Quadratic => [1 + w * damping * capacitor ** 2, -2 * w * capacitor, (w * capacitor) ** 2];
-        return extremes(squares(v), squares(u), l).map((coil): PartFactors => ({ r: resistor, l: coil, c: capacitor }));
-      });
-      const alongC = ends(l).flatMap((coil) => {
-        const squares = (w: number): Quadratic => [1, -2 * w * coil, (w * coil) ** 2 + w * damping];
-        return extremes(squares(v), squares(u), c).map((capacitor): PartFactors => ({ r: resistor, l: coil, c: capacitor }));
-      });
-      return [...alongL, ...alongC];
-    });
-  }
-
-  private ratio(u: number, v: number, parts: PartFactors): number {
-    return this.denominator(v, parts) / this.denominator(u, parts);
-  }
-
-  private denominator(u: number, { r, l, c }: PartFactors): number {
-    return (1 - u * l * c) ** 2 + u * ((r * c) / this.q) ** 2;
-  }
-
   private square(frequencyHz: number): number {
     return (frequencyHz / this.naturalHz) ** 2;
   }
@@ -145,16 +121,68 @@ function ends({ low, high }: Enclosure): readonly number[] {
   return low === high ? [low] : [low, high];
 }
 
-/** Where a fraction of two quadratics may be extreme over a range: the ends, and the roots of N′D − ND′ inside. */
-function extremes(above: Quadratic, below: Quadratic, range: Enclosure): readonly number[] {
-  const [n0, n1, n2] = above;
-  const [d0, d1, d2] = below;
-  const a = n2 * d1 - n1 * d2;
-  const b = n2 * d0 - n0 * d2;
-  const c = n1 * d0 - n0 * d1;
-  const root = Math.sqrt(Math.max(0, b * b - a * c));
-  const far = -(b + (b < 0 ? -1 : 1) * root);
-  return [...ends(range), ...[far / a, c / far].filter((x) => range.low < x && x < range.high)];
+/** The largest D(r)/D(f) of all parts that were looked at; in plain numbers, because a search asks for it some thousand times. */
+class Best {
+  ratio = -Infinity;
+  r = 1;
+  l = 1;
+  c = 1;
+
+  /** @param u (f/f₀)². @param v (r/f₀)². */
+  constructor(
+    private readonly u: number,
+    private readonly v: number,
+    private readonly q: number,
+  ) {}
+
+  look(r: number, l: number, c: number): void {
+    const damping = ((r * c) / this.q) ** 2;
+    const ratio = ((1 - this.v * l * c) ** 2 + this.v * damping) / ((1 - this.u * l * c) ** 2 + this.u * damping);
+    if (ratio > this.ratio) [this.ratio, this.r, this.l, this.c] = [ratio, r, l, c];
+  }
+
+  /** The ends and turning points of an edge along the coil: D = 1 + w·(r·c/Q)² − 2w·c·l + (w·c)²·l². */
+  lookAlongL(r: number, { low, high }: Enclosure, c: number): void {
+    this.look(r, low, c);
+    this.look(r, high, c);
+    const { u, v } = this;
+    const damping = ((r * c) / this.q) ** 2;
+    const [n1, n2, d1, d2] = [-2 * v * c, (v * c) ** 2, -2 * u * c, (u * c) ** 2];
+    this.turn(
+      (l) => {
+        this.look(r, l, c);
+      },
+      { low, high },
+      [1 + v * damping, n1, n2, 1 + u * damping, d1, d2],
+    );
+  }
+
+  /** The same along the capacitor: D = 1 − 2w·l·c + ((w·l)² + w·(r/Q)²)·c². */
+  lookAlongC(r: number, l: number, { low, high }: Enclosure): void {
+    this.look(r, l, low);
+    this.look(r, l, high);
+    const { u, v } = this;
+    const damping = (r / this.q) ** 2;
+    const [n1, n2, d1, d2] = [-2 * v * l, (v * l) ** 2 + v * damping, -2 * u * l, (u * l) ** 2 + u * damping];
+    this.turn(
+      (c) => {
+        this.look(r, l, c);
+      },
+      { low, high },
+      [1, n1, n2, 1, d1, d2],
+    );
+  }
+
+  /** Looks where a fraction of two quadratics turns inside a range: at the roots of N′D − ND′. */
+  private turn(look: (x: number) => void, { low, high }: Enclosure, [n0, n1, n2, d0, d1, d2]: Quadratics): void {
+    if (low === high) return;
+    const a = n2 * d1 - n1 * d2;
+    const b = n2 * d0 - n0 * d2;
+    const c = n1 * d0 - n0 * d1;
+    const far = -(b + (b < 0 ? -1 : 1) * Math.sqrt(Math.max(0, b * b - a * c)));
+    if (low < far / a && far / a < high) look(far / a);
+    if (low < c / far && c / far < high) look(c / far);
+  }
 }
 
 function middleOf({ low, high }: Enclosure): number {
