@@ -27,8 +27,8 @@ export {
   type ChannelPath,
   type StagePath,
 } from './channel-path';
-export { relayPath, type RelayPath } from './relay/relay-path';
-export { relayWeights, weightResponse, type RelayWeights, type Weight } from './relay/weights';
+export { relayPath } from './relay/relay-path';
+export { weightResponse } from './relay/weights';
 export { hasPulse, wantedPhaseRad } from './wanted-pulse';
 export { rateWindowsOf, type RateTable, type RateWindow } from './rate-windows';
 export { keepsWhole } from './wanted';

@@ -50,7 +50,7 @@ export function trackAndHoldOf(track: Extract<Gate, { kind: 'track' }>['track'],
 }
 
 /** Whether a gate is open all the time. */
-export function neverCloses(shape: PulseShape, rateHz: number): boolean {
+function neverCloses(shape: PulseShape, rateHz: number): boolean {
   return shape.shape === 'rectangle' && Math.abs(shape.widthSeconds * rateHz - 1) <= 1e-12;
 }
 
