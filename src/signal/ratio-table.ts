@@ -11,16 +11,19 @@ const highestHz = 1e70;
 /** Beyond this, either way, a product may have lost digits on its way. */
 const largest = 1e250;
 
-/** Every section as (t + near)·(t·both + far) + width with t = (f − im)·(f + im); the numbers in this order. */
-type Row = readonly [im: number, near: number, both: 0 | 1, far: number, width: number];
-
 /**
  * The ratios as a table.
  *
  * @example ratioTable([]).length // 0
  */
 export function ratioTable(ratios: readonly SectionRatio[]): Float64Array {
-  return Float64Array.from(ratios.flatMap(({ zero, pole, norm }) => [...rowOf(zero), ...rowOf(pole), norm]));
+  const table = new Float64Array(ratios.length * rowLength);
+  ratios.forEach(({ zero, pole, norm }, index) => {
+    fill(table, index * rowLength, zero);
+    fill(table, index * rowLength + 5, pole);
+    table[index * rowLength + 10] = norm;
+  });
+  return table;
 }
 
 /**
@@ -48,17 +51,26 @@ function sectionAt(table: Float64Array, at: number, frequencyHz: number): number
   return (t + (table[at + 1] ?? NaN)) * (t * (table[at + 2] ?? NaN) + (table[at + 3] ?? NaN)) + (table[at + 4] ?? NaN);
 }
 
-function rowOf(section: Section | null): Row {
+/** A section as (t + near)·(t·both + far) + width with t = (f − im)·(f + im): im, near, both, far, width, those that are 0 left alone. */
+function fill(table: Float64Array, at: number, section: Section | null): void {
   switch (section?.kind) {
     case undefined:
-      return [0, 0, 0, 0, 1];
+      table[at + 4] = 1;
+      return;
     case 'single':
-      return [0, section.square, 0, 1, 0];
+      table[at + 1] = section.square;
+      table[at + 3] = 1;
+      return;
     case 'double':
-      return [0, section.near, 1, section.far, 0];
-    case 'pair': {
-      const square = section.re * section.re;
-      return [section.im, square, 1, square, section.width];
-    }
+      table[at + 1] = section.near;
+      table[at + 2] = 1;
+      table[at + 3] = section.far;
+      return;
+    case 'pair':
+      table[at] = section.im;
+      table[at + 1] = section.re * section.re;
+      table[at + 2] = 1;
+      table[at + 3] = section.re * section.re;
+      table[at + 4] = section.width;
   }
 }
