@@ -268,6 +268,18 @@ describe('the panel page in a browser', function () {
     assert.equal(await panel.page.locator('canvas').count(), canvases);
   });
 
+  it('keeps the sections in the order of the signal, whichever come and go', async () => {
+    const relay = picture('strain-link', 'strain-link');
+    const order = async (): Promise<(string | null)[]> =>
+      Promise.all((await panel.page.locator('[data-section]').all()).map((section) => section.getAttribute('data-section')));
+    await draw(1, relay);
+    assert.deepEqual(await order(), ['sampling', 'leaving', 'path']);
+    await draw(2, generate);
+    assert.deepEqual(await order(), ['leaving', 'path']);
+    await draw(3, relay);
+    assert.deepEqual(await order(), ['sampling', 'leaving', 'path']);
+  });
+
   it('treats every text of a spec as text', async () => {
     const evil = JSON.parse(JSON.stringify(capture).replaceAll('drive hash', '<img src=x onerror=alert(1)>')) as PanelPicture;
     await draw(1, evil);
