@@ -18,7 +18,7 @@ export interface Knob {
 }
 
 /** A limit's demand on a knob: at most this, or at least this. */
-export interface KnobBound {
+interface KnobBound {
   readonly limit: string;
   readonly words: string;
 }

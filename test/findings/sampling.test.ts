@@ -34,7 +34,7 @@ describe('wanted-folds and wanted-touches', () => {
       /^The wanted band `far`, .* comes out on top of the wanted band `near`, 100 kHz \.\. 200 kHz/,
     );
     assert.ok(finding?.related.some(({ place }) => place.path.join('.') === 'wanted.0.band'));
-    assert.match(finding.message, /Rates of .* \(zones 1 and \d\) .* keep all bands whole and apart\.$/);
+    assert.match(finding?.message ?? '', /Rates of .* \(zones 1 and \d\) .* keep all bands whole and apart\.$/);
   });
 
   it('says of two bands that leave in the same words what they are made of', () => {
