@@ -27,6 +27,7 @@ export interface Flatness {
 /** Flatness over all wanted bands, nominally and at the worst of the tolerances; null without a wanted band. */
 export function flatnessOf(channel: Channel, path: ChannelPath): Flatness | null {
   const referenceHz = channel.referenceHz;
+  if (path.total.logGain(referenceHz) === -Infinity) return endless(channel);
   const plain = nominalPath(path, referenceHz);
   const nominal = departure(path, plain, plain);
   if (nominal === null) return null;
@@ -43,6 +44,14 @@ export function droopOf(channel: Channel, path: ChannelPath): number | null {
   if (channel.wanted.length === 0) return null;
   const top = Math.max(...channel.wanted.map((band) => band.highHz));
   return lossDb(path.total, top, channel.referenceHz);
+}
+
+/** Where nothing comes through at the reference, whatever does is endlessly stronger; said of the band's edge that is not the reference. */
+function endless({ wanted, referenceHz }: Channel): Flatness | null {
+  const edges = wanted.flatMap((band) => [band.lowHz, band.highHz]);
+  const frequencyHz = edges.find((edge) => edge !== referenceHz);
+  if (frequencyHz === undefined) return null;
+  return { valueDb: Infinity, nominalDb: Infinity, frequencyHz, gapDb: 0, worstAt: null, evaluations: 1 };
 }
 
 interface Departure extends Extreme {

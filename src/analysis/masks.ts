@@ -23,7 +23,10 @@ export interface Masks {
 export function masksOf(channel: Channel, path: ChannelPath): Masks {
   const found = channel.masks.flatMap((mask) => {
     if (mask.key === 'output') return [];
-    const gains = gainsOf(mask.key === 'response' ? withoutPulse(path) : path);
+    const own = mask.key === 'response' ? withoutPulse(path) : path;
+    if (own.total.logGain(channel.referenceHz) === -Infinity)
+      return mask.segments.map((segment, index) => endless(mask.key, segment, index));
+    const gains = gainsOf(own);
     return mask.segments.map((segment, index) => segmentOf(mask.key, segment, index, gains));
   });
   return {
@@ -67,6 +70,15 @@ function withoutPulse(path: ChannelPath): ChannelPath {
 interface Found {
   readonly figure: MaskFigure;
   readonly evaluations: number;
+}
+
+/** Where nothing comes through at the reference, whatever does is endlessly stronger: over any upper bound, and far above any lower one. */
+function endless(limit: MaskLimit['key'], { lowHz, upper, lower }: MaskSegment, index: number): Found {
+  const side: Side = upper === null ? 'lower' : 'upper';
+  const bound = (upper ?? lower)?.fromDb ?? 0;
+  const margin = upper === null ? Infinity : -Infinity;
+  const reached = { value: Infinity, nominal: Infinity, bound, margin, gap: 0, worstAt: null };
+  return { figure: { limit, segment: index, side, frequency: lowHz, ...reached }, evaluations: 1 };
 }
 
 /** The nearer of the two bounds that a segment may have. */

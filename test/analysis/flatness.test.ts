@@ -73,6 +73,17 @@ describe('flatness', () => {
     assert.deepEqual(flatness(channel)?.worstAt, { rate: -0.01 });
   });
 
+  it('from a reference that nothing comes through at has no end', () => {
+    const channel = capture({
+      wanted: [wanted(40, 60)],
+      rate: rate(1000),
+      referenceHz: 50,
+      pulse: { shape: 'rectangle', width: { seconds: 0.02 } },
+    });
+    const found = flatness(channel);
+    assert.deepEqual([found?.value, found?.margin, found?.passes, found?.where], [Infinity, -Infinity, false, { frequency: 40 }]);
+  });
+
   it('covers every wanted band from one reference', () => {
     const channel = capture({
       wanted: [wanted(0, 1e3), wanted(8e3, 9e3)],

@@ -132,6 +132,26 @@ describe('a mask of the analogue path', () => {
     assert.equal(masked(channel, 'response', above(100e3, Infinity, -200)).first.margin, -Infinity);
   });
 
+  it('from a reference that nothing comes through at is passed without end', () => {
+    const averaging = capture({
+      wanted: [wanted(40, 60)],
+      rate: rate(1000),
+      referenceHz: 50,
+      pulse: { shape: 'rectangle', width: { seconds: 0.02 } },
+    });
+    const { masks, limit } = masked(
+      averaging,
+      'through',
+      segment(40, 60, { lower: flat(-1), upper: flat(1) }),
+      above(40, 60, -3),
+    );
+    assert.deepEqual(
+      masks.map(({ margin }) => margin),
+      [-Infinity, Infinity],
+    );
+    assert.deepEqual([limit.passes, limit.value], [false, Infinity]);
+  });
+
   it('that a path without a filter keeps to by nature is not judged', () => {
     const bare = capture({ wanted: [wanted(0, 5e3)], rate: rate(50e3) });
     const { limit } = masked(bare, 'response', segment(0, 5e3, { lower: flat(-1), upper: flat(1) }));
