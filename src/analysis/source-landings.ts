@@ -7,6 +7,9 @@ import type { Arrival } from './arrivals';
 import { onAxis } from './axis';
 import { arrivesWithin, envelopeOn } from './capture-view';
 import type { View } from './capture-view';
+import { contains } from './intervals';
+import { lands } from './landing-set';
+import { wantedRanges } from './source-range';
 import { powerOf, sumOfLevels, toDb } from './decibels';
 import { shareGapDb } from './share-gap';
 import { strongestLanding } from './strongest-landing';
@@ -38,10 +41,12 @@ const negligibleDb = 80;
 
 /** The landings of a source's tones in a view. */
 export function sourceLandings(view: View, channel: Channel, arrivals: readonly Arrival[]): SourceLandings {
-  const found: Landed[] = [];
-  let strongest: Landed | null = null;
+  const still = view.axis === 'hertz' ? arrivals.filter(({ range }) => range.low === range.high) : [];
+  const found = stillLandings(view, channel, still);
+  let strongest = found.reduce<Landed | null>((best, one) => (best === null || one.levelDb > best.levelDb ? one : best), null);
+  const wide = still.length === 0 ? arrivals : arrivals.filter(({ range }) => range.low < range.high);
   const reachDb = negligibleDb + 10 * Math.log10(Math.max(1, arrivals.length));
-  for (const { arrival, mostDb } of strongestFirst(view, channel, arrivals)) {
+  for (const { arrival, mostDb } of strongestFirst(view, channel, wide)) {
     // All that follow lie lower still.
     if (strongest !== null && mostDb < strongest.levelDb - reachDb) break;
     const soFar = strongest === null ? 0 : powerOf(strongest.levelDb - mostDb);
@@ -58,6 +63,18 @@ export function sourceLandings(view: View, channel: Channel, arrivals: readonly 
     gapDb: sumDb === null || leastDb === null || sumDb === leastDb ? 0 : sumDb - leastDb,
     evaluations: found.reduce((sum, { extreme }) => sum + extreme.evaluations, 0),
   };
+}
+
+/** What stands still needs no search: a table may have a million lines. */
+function stillLandings(view: View, channel: Channel, still: readonly Arrival[]): Landed[] {
+  const wanted = wantedRanges(channel);
+  return still.flatMap((arrival) => {
+    const frequencyHz = arrival.range.low;
+    if (contains(wanted, frequencyHz) || !lands(view.set, view.rateHz, frequencyHz)) return [];
+    const logGain = view.worst.response.logGain(frequencyHz);
+    const extreme = { logGain, frequencyHz, gapDb: 0, evaluations: 1 };
+    return [{ arrival, extreme, within: [arrival.range], levelDb: arrival.levelDb + toDb(logGain) }];
+  });
 }
 
 /** With what no tone of it can pass, so that the weakest of a thousand harmonics need not be searched. */
