@@ -56,7 +56,9 @@ function figuresOf(channel: Channel): Figures {
     limits: judgeLimits(channel, { aliases, images, noise, ...others }),
     droop: droopOf(channel, path),
     delay: others.delay.atReference,
-    delaySpread: others.delay.spread,
+    get delaySpread() {
+      return others.delay.spread;
+    },
     aliases: aliases.figures,
     alias: aliases.strongest,
     aliasSum: aliases.sumDb,

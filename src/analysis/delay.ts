@@ -41,16 +41,21 @@ export interface DelayLimits {
   readonly spread: Limit | null;
 }
 
-/** The delay of a channel; a limit of the spread makes its search as fine as the limit asks, without one a thousandth of the delay does. */
+/** The delay of a channel, its spread looked for once it is asked for; a limit of the spread makes its search as fine as the limit asks, without one a thousandth of the delay does. */
 export function delayOf(channel: Channel, path: ChannelPath, limits: DelayLimits): Delay {
   const atReference = pathDelay(path, channel.referenceHz);
-  const spread = spreadOf(channel, path, limits.spread);
+  const judged = limits.spread === null ? null : spreadOf(channel, path, limits.spread);
+  let asked: { readonly spread: Spread | null } | null = limits.spread === null ? null : { spread: judged };
   return {
     atReference,
-    spread: spread?.reachedSeconds ?? null,
+    // Its search is a third of an analysis, and only a result or a plot asks for it where no limit does.
+    get spread() {
+      asked ??= { spread: spreadOf(channel, path, null) };
+      return asked.spread?.reachedSeconds ?? null;
+    },
     worst: atReference === null || limits.delay === null ? null : worstDelay(channel, path, atReference),
-    worstSpread: limits.spread === null ? null : (spread?.judged ?? null),
-    evaluations: spread?.evaluations ?? 0,
+    worstSpread: judged?.judged ?? null,
+    evaluations: judged?.evaluations ?? 0,
   };
 }
 
