@@ -1,4 +1,4 @@
-// Everything that reads the source without running it: the linter's rules, the layout of the text, and which layer may import which.
+// Everything that reads the source without running it: the linter's rules, the layout of the text, which layer may import which, and what nobody uses.
 import { join } from 'node:path';
 import { root } from './prepare-clone.mjs';
 import { runNode } from './run-command.mjs';
@@ -14,6 +14,11 @@ const checks = [
   {
     name: 'layers (dependency-cruiser)',
     args: [tool('dependency-cruiser', 'bin', 'dependency-cruise.mjs'), 'src', '--config', '.dependency-cruiser.cjs'],
+  },
+  {
+    name: 'nothing unused (knip)',
+    // Types are exported with the functions that speak of them, whether or not another file names them yet.
+    args: [tool('knip', 'bin', 'knip.js'), '--include', 'files,dependencies,unlisted,unresolved,exports,duplicates'],
   },
 ];
 

@@ -3,7 +3,7 @@ import type { Enclosure } from '../signal/response';
 import type { Channel, Source, WantedBand } from '../spec/channel';
 import { arrivalsOf } from './arrivals';
 import type { Overlap } from './figures';
-import { intersection, without } from './intervals';
+import { intersection } from './intervals';
 import { toneRange } from './tolerances';
 
 /** Every frequency at which a source may stand, without its harmonics; `anything` stands everywhere. */
@@ -23,11 +23,6 @@ export function sourceRange(source: Source): Enclosure {
 /** The wanted bands as intervals. */
 export function wantedRanges(channel: Channel): readonly Enclosure[] {
   return channel.wanted.map(rangeOf);
-}
-
-/** The part of a source that lies outside every wanted band; what only touches an edge of one is not outside. */
-export function outsideWanted(channel: Channel, source: Source): readonly Enclosure[] {
-  return without([sourceRange(source)], wantedRanges(channel));
 }
 
 /** The sources that reach into a wanted band, themselves or by a harmonic, each once with its widest stretch there. */

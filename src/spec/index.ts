@@ -11,7 +11,6 @@ export { exists, spanOf } from './spans';
 export { applyEdits, editValue } from './edit';
 export { placeAt } from './place-at';
 export type { PlaceAt } from './place-at';
-export { declaration } from './declaration/top-level';
 export * from './channel';
 export type { Key } from './shape';
 export { completionsAt } from './completion';

@@ -11,7 +11,9 @@ const points = (filter: Filter): readonly number[] => halfPowerPoints(filterResp
 
 const near = (found: readonly number[], expected: readonly number[]): void => {
   assert.equal(found.length, expected.length, `${found.join(', ')} for ${expected.join(', ')}`);
-  found.forEach((hz, index) => { assert.ok(Math.abs(hz / (expected[index] ?? 0) - 1) < 1e-7, `${hz} for ${expected[index]}`); });
+  found.forEach((hz, index) => {
+    assert.ok(Math.abs(hz / (expected[index] ?? 0) - 1) < 1e-7, `${hz} for ${expected[index]}`);
+  });
 };
 
 describe('half-power points', () => {

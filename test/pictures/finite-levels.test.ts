@@ -22,7 +22,10 @@ function pictureIn(text: string) {
 describe('the picture of a path that a null silences in its band', () => {
   for (const [direction, more] of [
     ['generate', '    limits: { image: -60 dBc, flatness: 1 dB }\n'],
-    ['capture', '    unwanted: { name: drive hash, band: 40 kHz .. 3 MHz, level: -20 dBFS }\n    limits: { alias: -60 dBc, flatness: 1 dB }\n'],
+    [
+      'capture',
+      '    unwanted: { name: drive hash, band: 40 kHz .. 3 MHz, level: -20 dBFS }\n    limits: { alias: -60 dBc, flatness: 1 dB }\n',
+    ],
   ] as const) {
     it(`holds no level that cannot be drawn, in ${direction}`, () => {
       const picture = pictureIn(spec(direction, more));
