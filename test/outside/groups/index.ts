@@ -6,6 +6,7 @@ import { delays, holdValues, narrowGates, pulses, trains } from './holds';
 import { holdJitter } from './hold-jitter';
 import { lcLadders, printedLcLadders } from './lc-ladders';
 import { masks } from './masks';
+import { optimumL } from './optimum-l';
 import { orders } from './orders';
 import { printedBessel, printedTables } from './printed';
 import { printedBandwidths } from './printed-bandwidths';
@@ -34,6 +35,7 @@ export const groups: readonly OutsideGroup[] = [
   kinds,
   printedTables,
   printedBessel,
+  optimumL,
   bandwidths,
   printedBandwidths,
   passive,

@@ -36,6 +36,25 @@ export const printedBandwidths: OutsideGroup = {
       }
     });
 
+    it('is not 1.56 of the half-power frequency for Bessel of order 2, as one table has it', () => {
+      assert.ok(Math.abs(valueOf([filterOf({ family: 'bessel', order: 2 })]) - 1.56) > 0.4);
+    });
+
+    it('is finite for odd orders of the families with zeros, over the half-power frequency', () => {
+      for (const [design, expected] of [
+        [{ family: 'inverse-chebyshev', order: 3, attenuation: 40 }, 1.035269],
+        [{ family: 'elliptic', order: 3, ripple: 0.1, attenuation: 40 }, 1.027752],
+        [{ family: 'elliptic', order: 5, ripple: 0.1, attenuation: 40 }, 0.996881],
+      ] as const) {
+        tally.absolute(
+          valueOf([filterOf(design, { cornerAt: 'half-power' })]),
+          expected,
+          5.001e-7,
+          `${design.family} ${design.order}`,
+        );
+      }
+    });
+
     it('of equal buffered resistors and capacitors is that of the published table', () => {
       // Over the corner of one stage, and half power over the corner of one stage.
       const overStage = [1.570796, 0.785398, 0.589049, 0.490874, 0.429515, 0.386563, 0.35435, 0.329039, 0.308474, 0.291337];
