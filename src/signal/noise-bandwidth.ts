@@ -21,20 +21,43 @@ const relative = 1e-11;
  * @example noiseBandwidth([realPole(1000)]).value // 1570.79633
  */
 export function noiseBandwidth(filters: readonly Filter[]): NoiseBandwidth {
+  return powerFrom(filters, 0);
+}
+
+/**
+ * The part of the noise bandwidth above a frequency: ∫ |H(f)|² df from there to infinity.
+ *
+ * @param filters none let everything through.
+ * @param fromHz ≥ 0, finite.
+ * @returns as `noiseBandwidth`.
+ * Source: as `noiseBandwidth`.
+ * @example powerFrom([realPole(1000)], 1000).value // 785.398163
+ */
+export function powerFrom(filters: readonly Filter[], fromHz: number): NoiseBandwidth {
   const excess = filters.reduce((sum, { poles, zeros }) => sum + poles.length - zeros.length, 0);
   if (excess === 0) return { kind: 'endless' };
   const response = product(filters.map(filterResponse));
   const power = (frequencyHz: number): number => Math.exp(2 * response.logGain(frequencyHz));
-  const cuts = [...new Set(filters.flatMap(({ poles }) => poles.flatMap(cutsAround)))]
-    .filter((cut) => cut > 0)
-    .sort((a, b) => a - b);
-  const pieces = cuts.map((cut, index) => integrate(power, cuts[index - 1] ?? 0, cut, relative));
-  const last = cuts.at(-1) ?? 0;
+  const cuts = [fromHz, ...powerCuts(filters).filter((cut) => cut > fromHz)];
+  const pieces = cuts.slice(1).map((cut, index) => integrate(power, cuts[index] ?? fromHz, cut, relative));
+  const last = cuts.at(-1) ?? fromHz;
   const tail = integrate((inverse) => power(1 / inverse) / (inverse * inverse), 0, 1 / last, relative);
   return [...pieces, tail].reduce<{ kind: 'finite' } & Integral>(
     (sum, piece) => ({ kind: 'finite', value: sum.value + piece.value, errorBound: sum.errorBound + piece.errorBound }),
     { kind: 'finite', value: 0, errorBound: 0 },
   );
+}
+
+/**
+ * Where |H|² may turn sharply and an integral is better cut: around each resonance, and at the size of each real pole.
+ *
+ * @param filters none give no cuts.
+ * @returns Hz, above 0, ascending, each once.
+ * Source: common practice.
+ * @example powerCuts([realPole(1000), realPole(10), realPole(10)]).join(' ') // '10 1000'
+ */
+export function powerCuts(filters: readonly Filter[]): readonly number[] {
+  return [...new Set(filters.flatMap(({ poles }) => poles.flatMap(cutsAround)))].filter((cut) => cut > 0).sort((a, b) => a - b);
 }
 
 /** Around a resonance, its middle and its two flanks; beside a real pole, its size. */
