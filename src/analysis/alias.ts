@@ -1,6 +1,6 @@
 /** The strongest landing of each unwanted source in a protected range, nominally and at the worst of all tolerances. */
 import type { Channel, Limit, Source } from '../spec/channel';
-import { arrivalsOf, mayMove, nominalArrivals, standsStill } from './arrivals';
+import { arrivalDb, arrivalsOf, mayMove, nominalArrivals, standsStill } from './arrivals';
 import { captureView, captureViews, gainWithCornersDb } from './capture-view';
 import type { CaptureView, View } from './capture-view';
 import { sumOfLevels, toDb } from './decibels';
@@ -171,13 +171,16 @@ function figureOf({ channel }: CaptureView, reached: Reached, limit: Limit | nul
 }
 
 /** Behind the sampler in dBFS and against the weakest wanted tone, with the same parts for both. */
-function levelsOf({ channel, path, referenceHz }: CaptureView, at: View, { levelDb: reachedDb, extreme }: Landed): Levels {
+function levelsOf({ channel, path, referenceHz }: CaptureView, at: View, landed: Landed): Levels {
+  const { levelDb: reachedDb, extreme, arrival } = landed;
   const wantedDb = Math.min(...channel.wanted.map((band) => band.levelDb));
   const corners = at.worst.cornersAt(extreme.frequencyHz);
   const referenceDb = channel.levelsAt === 'sampler' ? 0 : gainWithCornersDb(path, channel.referenceHz, corners) + at.frontDb;
   if (referenceHz !== null) {
     const relativeDb = reachedDb - wantedDb;
-    return { relativeDb, levelDb: relativeDb + wantedDb + referenceDb };
+    // Parts that silence the wanted tone leave nothing to measure from; the landing itself still has its level.
+    const ownDb = (): number => arrivalDb(arrival, extreme.frequencyHz) + gainWithCornersDb(path, extreme.frequencyHz, corners);
+    return { relativeDb, levelDb: referenceDb === -Infinity ? ownDb() : relativeDb + wantedDb + referenceDb };
   }
   return { levelDb: reachedDb, relativeDb: reachedDb - wantedDb - referenceDb - toDb(at.worst.gainLog) };
 }

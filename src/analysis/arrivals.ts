@@ -33,6 +33,11 @@ export function arrivalsOf(source: Source): readonly Arrival[] {
   }
 }
 
+/** An arrival's level at a frequency at which it may stand, dBFS. */
+export function arrivalDb({ levelDb, envelope }: Arrival, frequencyHz: number): number {
+  return envelope === null ? levelDb : levelDb + decibelsPerNeper * envelope.logGain(frequencyHz);
+}
+
 /** The same with nothing deviating: what stands still does so where it is stated. */
 export function nominalArrivals(source: Source): readonly Arrival[] {
   const arrivals = arrivalsOf(source);

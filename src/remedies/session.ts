@@ -9,6 +9,9 @@ import { trying, works, type Trial } from './trial';
 /** How many analyses one finding may cost. */
 export const analysesAllowed = 400;
 
+/** How many evaluations they may take together, so that a channel that is slow to analyse does not keep a check waiting for minutes. */
+const evaluationsAllowed = 500_000;
+
 /** A search in progress. */
 export interface Session {
   readonly judgement: Judgement;
@@ -40,6 +43,7 @@ function sessionOf(start: Start, store: Store): Session {
   const tried = new Map<string, Trial>();
   const before = store.analysed;
   let nearest: Nearest | null = null;
+  let evaluations = 0;
   return {
     ...start,
     reading,
@@ -56,8 +60,9 @@ function sessionOf(start: Start, store: Store): Session {
       const text = applyEdits(reading.text, edits);
       const known = tried.get(text);
       if (known !== undefined) return known;
-      if (store.analysed - before >= analysesAllowed) return null;
+      if (store.analysed - before >= analysesAllowed || evaluations >= evaluationsAllowed) return null;
       const trial = yield* trying(judgement, finding, { changes: made, text }, store);
+      evaluations += trial.figures?.evaluations ?? 0;
       tried.set(text, trial);
       nearest = nearer(nearest, trial, start.channel);
       yield;

@@ -5,6 +5,7 @@ import type { CopyExtreme } from '../../signal/search';
 import { stretched } from '../../signal/stretched';
 import type { Channel, Entrance } from '../../spec/channel';
 import type { Levels } from '../alias';
+import { arrivalDb } from '../arrivals';
 import type { Arrival } from '../arrivals';
 import { axisFactors } from '../axis';
 import { gainWithCornersDb } from '../capture-view';
@@ -155,7 +156,7 @@ function landedOf(view: RelayView, sides: Sides, arrival: Arrival, measure: Meas
     output: product([sides.output.response, constantResponse(-sides.againstLog)]),
   });
   if (extreme === null) return null;
-  const levels = levelsOf(view, sides, arrival.levelDb + toDb(extreme.logGain), measure, extreme);
+  const levels = levelsOf(view, sides, arrival, measure, extreme);
   return {
     view,
     arrival,
@@ -171,8 +172,9 @@ function envelopeIn(view: RelayView, { envelope }: Arrival): Response | null {
 }
 
 /** As it leaves in dBFS and against the weakest wanted tone, with the same parts for both. */
-function levelsOf(view: RelayView, sides: Sides, reachedDb: number, measure: Measure, extreme: CopyExtreme): Levels {
+function levelsOf(view: RelayView, sides: Sides, arrival: Arrival, measure: Measure, extreme: CopyExtreme): Levels {
   const { relay, channel } = view;
+  const reachedDb = arrival.levelDb + toDb(extreme.logGain);
   const { referenceHz, levelsAt } = channel;
   const outputDb = gainWithCornersDb(relay.output, referenceHz, sides.output.cornersAt(extreme.nearHz));
   const inputDb =
@@ -182,7 +184,21 @@ function levelsOf(view: RelayView, sides: Sides, reachedDb: number, measure: Mea
   const wantedOutDb = weakestWantedDb(channel) + inputDb + toDb(wantedWeightLog(view)) + outputDb;
   if (measure === 'relative') {
     const relativeDb = reachedDb - weakestWantedDb(channel);
-    return { relativeDb, levelDb: relativeDb + wantedOutDb };
+    // Parts that silence the wanted tone leave nothing to measure from; the copy itself still has its level.
+    return {
+      relativeDb,
+      levelDb: wantedOutDb === -Infinity ? ownLevelDb(view, sides, arrival, extreme) : relativeDb + wantedOutDb,
+    };
   }
   return { levelDb: reachedDb, relativeDb: reachedDb - wantedOutDb - toDb(sides.input.gainLog + sides.output.gainLog) };
+}
+
+function ownLevelDb({ relay }: RelayView, { passes, input, output }: Sides, arrival: Arrival, extreme: CopyExtreme): number {
+  const { copy, nearHz, farHz } = extreme;
+  return (
+    arrivalDb(arrival, farHz) +
+    gainWithCornersDb(passes, farHz, input.cornersAt(farHz)) +
+    toDb(weightResponse(Number.isFinite(copy) ? relay.weights.copy(copy) : relay.weights.most).logGain(nearHz)) +
+    gainWithCornersDb(relay.output, nearHz, output.cornersAt(nearHz))
+  );
 }
