@@ -1,6 +1,12 @@
 /** The polynomial in cos 2πx that passes through given values, evaluated anywhere without its coefficients. */
 
-/** Weights of the barycentric form at nodes of cos 2πx: 1/Π(cos 2πx_i − cos 2πx_j), all times one constant. */
+/**
+ * Weights of the barycentric form at nodes of cos 2πx: 1/Π(cos 2πx_i − cos 2πx_j), all times the constant that makes the largest 1.
+ *
+ * @param nodes ascending shares within 0 … 0.5, no two alike.
+ * Source: as for cosinePolynomial; by logarithms, so that hundreds of nodes do not overflow.
+ * @example cosineWeights([0, 0.25])[1] // -1
+ */
 export function cosineWeights(nodes: readonly number[]): readonly number[] {
   const logs = nodes.map((node) =>
     nodes.reduce((sum, other) => sum - (other === node ? 0 : Math.log(Math.abs(gap(node, other)))), 0),

@@ -36,7 +36,7 @@ const countLimit = 1023;
  * @param count from 1.
  * @throws RangeError for a demand or a number of taps that makes no sense.
  * Source: as for equiripple; the deviations by elementary algebra.
- * @example lowPassFir(31, { passband: 0.1, stopband: 0.15, rippleDb: 0.41961, attenuationDb: 32.131 }).used // 1
+ * @example lowPassFir(31, { passband: 0.1, stopband: 0.15, rippleDb: 0.41955946, attenuationDb: 32.13039155 }).used // 1
  */
 export function lowPassFir(count: number, demand: LowPassDemand): LowPassFir {
   const { taps, deviation } = equiripple(count, bandsOf(demand));
