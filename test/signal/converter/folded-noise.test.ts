@@ -8,7 +8,14 @@ import { filterResponse, type Filter } from '../../../src/signal/filter';
 import type { Response } from '../../../src/signal/response';
 import { assertClose } from '../../support/tolerance';
 
-const white: Omit<FoldedNoise, 'filters'> = { aperture: null, flickerHz: 0, lowHz: 10, highHz: 20, rateHz: 100 };
+const white: Omit<FoldedNoise, 'filters'> = {
+  aperture: null,
+  decimation: null,
+  flickerHz: 0,
+  lowHz: 10,
+  highHz: 20,
+  rateHz: 100,
+};
 
 function finite(noise: FoldedNoise): { readonly value: number; readonly errorBound: number } {
   const found = foldedNoise(noise);
@@ -31,13 +38,16 @@ function midpoint(integrand: (x: number) => number, low: number, high: number, s
   return sum * width;
 }
 
-/** Closed form of Σ over all k of 1/(1 + ((f + k·rate)/corner)²), a Lorentzian's Poisson sum, integrated by the midpoint rule. */
-function foldedPole(corner: number, { lowHz, highHz, rateHz }: typeof white): number {
+/** Closed form of Σ over all k of 1/(1 + ((f + k·rate)/corner)²), a Lorentzian's Poisson sum; written so that it does not overflow. */
+function poleSum(corner: number, rateHz: number): (f: number) => number {
   const x = (2 * Math.PI * corner) / rateHz;
-  // sinh x/(cosh x − c), written so that it does not overflow.
-  const sum = (f: number): number =>
-    ((x / 2) * (1 - Math.exp(-2 * x))) / (1 + Math.exp(-2 * x) - 2 * Math.exp(-x) * Math.cos((2 * Math.PI * f) / rateHz));
-  return midpoint(sum, lowHz, highHz, 20000);
+  const turn = (f: number): number => 2 * Math.exp(-x) * Math.cos((2 * Math.PI * f) / rateHz);
+  return (f) => ((x / 2) * (1 - Math.exp(-2 * x))) / (1 + Math.exp(-2 * x) - turn(f));
+}
+
+/** The sum over all folds of a pole, integrated by the midpoint rule. */
+function foldedPole(corner: number, { lowHz, highHz, rateHz }: typeof white): number {
+  return midpoint(poleSum(corner, rateHz), lowHz, highHz, 20000);
 }
 
 /** Plain summation over folds, each by the midpoint rule. */
@@ -123,6 +133,18 @@ describe('foldedNoise', () => {
     const power = powerOf([realPole(150)]);
     const expected = plainSum((f) => power(f) * Math.exp(2 * aperture.response.logGain(f)), white, 3000);
     assertHolds({ ...white, aperture, filters: [realPole(150)] }, expected, 1e-6);
+  });
+
+  it('behind decimation weighs and folds once more', () => {
+    // A running mean of 5 samples that keeps every fifth, so that 20 Hz is the output's rate.
+    const mean = (f: number): number => (f === 0 ? 1 : (Math.sin(Math.PI * 0.05 * f) / (5 * Math.sin(Math.PI * 0.01 * f))) ** 2);
+    const decimated = { ...white, lowHz: 2, highHz: 9, decimation: { by: 5, power: mean } };
+    for (const corner of [7, 60, 3000, 1e6]) {
+      const density = poleSum(corner, 100);
+      const folded = (f: number): number =>
+        [0, 20, 40, 60, 80].reduce((sum, shift) => sum + density(f + shift) * mean(f + shift), 0);
+      assertHolds({ ...decimated, filters: [realPole(corner)] }, midpoint(folded, 2, 9, 20000), 2e-2);
+    }
   });
 
   it('is endless where nothing ends it', () => {
