@@ -70,7 +70,11 @@ function readCentred(centreText: string, halfText: string, kinds: readonly Kind[
 
 function notARange(plain: string, kinds: readonly Kind[]): QuantityFault {
   const single = readSingle(plain, kinds);
-  if (!('fault' in single)) return notAQuantity(`\`${plain}\` is one value, where a range \`LOW .. HIGH\` is needed`);
+  if (!('fault' in single)) {
+    // A ratio in decibels that stands where a range is needed was meant either way.
+    const eitherWay = kinds.every((kind) => kind === 'decibel') && single.value > 0 ? [`± ${plain}`] : [];
+    return notAQuantity(`\`${plain}\` is one value, where a range \`LOW .. HIGH\` is needed`, ...eitherWay);
+  }
   const ends = /^(.*\d.*?) *(?:[-–]| to ) *(\.?\d.*)$/.exec(plain);
   if (ends === null) return single.fault;
   return notAQuantity(`\`${plain}\` is no range: two points stand between its ends`, `${ends[1] ?? ''} .. ${ends[2] ?? ''}`);

@@ -57,6 +57,12 @@ describe('reading a range', () => {
     });
   }
 
+  it('offers a ratio in decibels either way where a range is needed', () => {
+    const { code, suggestions } = faultOf('0.5 dB', 'decibel');
+    assert.deepEqual([code, suggestions], ['not-a-quantity', ['± 0.5 dB']]);
+    assert.deepEqual(faultOf('-3 dB', 'decibel').suggestions, []);
+  });
+
   for (const text of ['', '..', '5 kHz', '1 Hz .. 2 Hz .. 3 Hz', 'low .. high', '5 kHz .. 3 V', '± ']) {
     it(`refuses "${text}"`, () => {
       assert.notEqual(faultOf(text, 'frequency').message, '');
