@@ -1,4 +1,4 @@
-/** The masks of published standards, as the specs in examples/standards write them, against their transcription with its marks. */
+/** The masks of published standards, as the specs in examples/standards write them, against what was written down of them, with its marks. */
 import assert from 'node:assert/strict';
 import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
@@ -13,7 +13,7 @@ interface Point {
   readonly value_Hz?: number | readonly [number, number];
 }
 
-/** The transcription: read from a copy (a), second-hand (a2), or from memory (c), as each point is marked. */
+/** What was written down: read from a copy (a), second-hand (a2), or from memory (c), as each point is marked. */
 const standards = (
   JSON.parse(readFileSync(join(import.meta.dirname, '../../reference/masks.json'), 'utf8')) as {
     readonly masks: readonly { readonly standard: string; readonly fs_Hz?: number; readonly points: readonly Point[] }[];

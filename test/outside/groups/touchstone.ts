@@ -20,7 +20,7 @@ const second = (order: string): string =>
 /** The group. */
 export const touchstone: OutsideGroup = {
   title: 'Rules of Touchstone files',
-  source: 'EIA/IBIS open specification in two transcriptions; the order keywords of version 2 from memory of it',
+  source: 'EIA/IBIS open specification in two public copies; the order keywords of version 2 from memory of it',
   define: (tally) => {
     it('take GHz, S, MA in degrees and 50 Ω where the option line says nothing, or where it says only a part', () => {
       for (const [line, hz, ohm] of [
