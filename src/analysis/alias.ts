@@ -149,8 +149,7 @@ function figureOf({ channel }: CaptureView, reached: Reached, limit: Limit | nul
   const { source, index, at, levels, sumDb, strongest, nominalDb } = reached;
   const { extreme, within, arrival } = strongest;
   const point = landingPoint(channel, at, extreme.frequencyHz, within);
-  // Under a limit for the sum no single source has a margin.
-  const own = limit === null || limit.sum ? null : limit.at;
+  const held = heldTo(limit, levels);
   return {
     source: source.name,
     index,
@@ -163,8 +162,8 @@ function figureOf({ channel }: CaptureView, reached: Reached, limit: Limit | nul
     nominal: nominalDb,
     sum: sumDb,
     relative: levels.relativeDb,
-    limit: own,
-    margin: own === null ? null : own - (limit?.unit === 'dBc' ? levels.relativeDb : levels.levelDb),
+    limit: held.limit,
+    margin: held.margin,
     gap: extreme.gapDb,
     worstAt: joinWorst(at.worst.worstAt(extreme.frequencyHz), ownDeviations(channel, source, arrival.harmonic, point)),
   };
@@ -183,6 +182,12 @@ function levelsOf({ channel, path, referenceHz }: CaptureView, at: View, landed:
     return { relativeDb, levelDb: referenceDb === -Infinity ? ownDb() : relativeDb + wantedDb + referenceDb };
   }
   return { levelDb: reachedDb, relativeDb: reachedDb - wantedDb - referenceDb - toDb(at.worst.gainLog) };
+}
+
+/** The limit that one source is held to, and its margin; under a limit for the sum no single source has either. */
+export function heldTo(limit: Limit | null, { levelDb, relativeDb }: Levels): Pick<AliasFigure, 'limit' | 'margin'> {
+  if (limit === null || limit.sum) return { limit: null, margin: null };
+  return { limit: limit.at, margin: limit.at - (limit.unit === 'dBc' ? relativeDb : levelDb) };
 }
 
 /** A nominal value is one of those that the worst was taken from, so it lies above it by rounding only. */

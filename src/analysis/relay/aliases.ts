@@ -1,6 +1,6 @@
 /** The strongest copy of each unwanted source in the protected ranges of a relay channel, nominally and at the worst of all tolerances. */
 import type { Channel, Limit, Source } from '../../spec/channel';
-import { aliasesFrom, noAliases, noLanding, notAbove } from '../alias';
+import { aliasesFrom, heldTo, noAliases, noLanding, notAbove } from '../alias';
 import type { Aliases, Found } from '../alias';
 import { arrivalsOf, mayMove, nominalArrivals } from '../arrivals';
 import { powerOf } from '../decibels';
@@ -86,8 +86,7 @@ function figureOf(channel: Channel, { source, index, strongest, sumDb, nominalDb
   const scale = scaleOf(strongest);
   const frequencyHz = extreme.farHz * scale;
   const endless = extreme.copy === Infinity;
-  // Under a limit for the sum no single source has a margin.
-  const own = limit === null || limit.sum ? null : limit.at;
+  const held = heldTo(limit, levels);
   const moved =
     source.kind === 'tone' && mayMove(source)
       ? { [toneLabel(source)]: deviation(frequencyHz / (arrival.harmonic * source.frequencyHz), source.tolerance) }
@@ -104,8 +103,8 @@ function figureOf(channel: Channel, { source, index, strongest, sumDb, nominalDb
     nominal: nominalDb,
     sum: sumDb,
     relative: levels.relativeDb,
-    limit: own,
-    margin: own === null ? null : own - (limit?.unit === 'dBc' ? levels.relativeDb : levels.levelDb),
+    limit: held.limit,
+    margin: held.margin,
     gap: extreme.gapDb,
     worstAt: joinWorst(strongest.worstAt, rateDeviation(channel, scale * view.relay.rateHz), moved),
   };
